@@ -1,0 +1,201 @@
+/**
+ * What a page says, as plain data: no HTML, no drawing, everything rounded for people. The HTML and PDF renderers
+ * print the same document, so that page and PDF cannot differ.
+ */
+export type Status = 'meets' | 'undecided' | 'misses' | 'not evaluated' | 'open until measured' | 'incomplete';
+
+/** Text with the few marks a sentence needs. Plain strings are text, never markup: renderers escape them. */
+export type Inline =
+  | string
+  | { readonly strong: string }
+  | { readonly code: string }
+  | { readonly status: Status }
+  /** Link to a page of the same pack by page id, optionally to a block or chapter on it. */
+  | { readonly text: string; readonly page: string; readonly anchor?: string };
+
+export interface Cell {
+  readonly content: readonly Inline[];
+  /** Numbers align right. Default left. */
+  readonly numeric?: boolean;
+}
+
+export interface TableBlock {
+  readonly kind: 'table';
+  readonly id: string;
+  readonly caption: string;
+  readonly columns: readonly {
+    readonly title: string;
+    readonly numeric?: boolean /** Relative width hint, default 1. */;
+    readonly width?: number;
+  }[];
+  readonly rows: readonly (readonly Cell[])[];
+  /** The first cell of each row names the row. */
+  readonly rowHeaders: boolean;
+}
+
+export interface FigureBlock {
+  readonly kind: 'figure';
+  readonly id: string;
+  /** Says what it shows. */
+  readonly title: string;
+  /** One sentence of reading: what to see, with the number. */
+  readonly reading: string;
+  /** For a screen reader: what the picture contains. */
+  readonly alt: string;
+  readonly content: Chart | DrawingData;
+}
+
+export type Block =
+  | { readonly kind: 'prose'; readonly content: readonly Inline[] }
+  | { readonly kind: 'list'; readonly ordered?: boolean; readonly items: readonly (readonly Inline[])[] }
+  | {
+      readonly kind: 'facts';
+      readonly id: string;
+      readonly items: readonly { readonly label: string; readonly content: readonly Inline[] }[];
+    }
+  /** The conclusion of a page: status with one sentence. */
+  | { readonly kind: 'verdict'; readonly status: Status; readonly content: readonly Inline[] }
+  /** A caution or limit that must not be overlooked. */
+  | { readonly kind: 'caution'; readonly title: string; readonly content: readonly (readonly Inline[])[] }
+  | TableBlock
+  | FigureBlock;
+
+export interface Chapter {
+  readonly id: string;
+  readonly title: string;
+  readonly blocks: readonly Block[];
+}
+
+/** Data fields of ISO 7200, as far as they apply. */
+export interface TitleBlock {
+  readonly legalOwner: string;
+  readonly identificationNumber: string;
+  readonly revision: string;
+  readonly dateOfIssue: string;
+  readonly title: string;
+  readonly supplementaryTitle?: string;
+  readonly documentType: string;
+  readonly documentStatus: string;
+  readonly creator: string;
+  readonly approver: string;
+  readonly language: 'en';
+  /** Set by the PDF; pages have no sheets. */
+  readonly segment?: string;
+}
+
+export type PageKind = 'overview' | 'dossier' | 'requirement' | 'evidence' | 'definitions';
+
+export interface DocumentPage {
+  /** Unique in the pack: `overview`, `board/qb-1`, `requirement/r-gain`, `evidence`, `definitions`. */
+  readonly id: string;
+  readonly kind: PageKind;
+  readonly title: string;
+  readonly subtitle: string;
+  readonly titleBlock: TitleBlock;
+  /** Printed on every page: notice that data are invented, marking. */
+  readonly notices: readonly string[];
+  readonly chapters: readonly Chapter[];
+}
+
+export interface PackDocument {
+  readonly packId: string;
+  readonly revision: string;
+  readonly title: string;
+  /** overview first, then dossiers, requirements, evidence, definitions. */
+  readonly pages: readonly DocumentPage[];
+}
+
+// ---------------------------------------------------------------- charts: data ready to draw, units in the axis titles
+
+export type Chart = BudgetChart | CutChart | LinesChart;
+
+/** Waterfall from directivity down to realized gain. */
+export interface BudgetChart {
+  readonly chart: 'budget';
+  readonly unit: 'dBi';
+  /** First step is the start level (directivity), then losses as negative dB, in order; the last level is derived by the renderer as the running sum and must equal `end`. */
+  readonly start: { readonly label: string; readonly level: number };
+  readonly losses: readonly { readonly label: string; readonly change: number }[];
+  readonly end: { readonly label: string; readonly level: number };
+}
+
+/** Pattern cut over angle, relative dB or dBi, with masks. */
+export interface CutChart {
+  readonly chart: 'cut';
+  readonly xTitle: string;
+  readonly yTitle: string;
+  readonly xDomain: readonly [number, number];
+  readonly yDomain: readonly [number, number];
+  readonly series: readonly { readonly label: string; readonly points: readonly (readonly [number, number])[] }[];
+  /** Drawn as a limit: horizontal pieces not to be exceeded, with a label. */
+  readonly masks: readonly {
+    readonly label: string;
+    readonly pieces: readonly { readonly from: number; readonly to: number; readonly level: number }[];
+  }[];
+}
+
+/** Lines over a common axis: match over frequency, line loss over frequency, loss factor over roughness. */
+export interface LinesChart {
+  readonly chart: 'lines';
+  readonly xTitle: string;
+  readonly yTitle: string;
+  readonly xScale?: 'linear' | 'log';
+  readonly yScale?: 'linear' | 'log';
+  readonly xDomain?: readonly [number, number];
+  readonly yDomain?: readonly [number, number];
+  readonly series: readonly {
+    readonly label: string;
+    readonly emphasis?: boolean;
+    readonly points: readonly (readonly [number, number])[];
+  }[];
+  /** Shaded between lower and upper: the spread between models. */
+  readonly band?: { readonly label: string; readonly points: readonly (readonly [number, number, number])[] };
+  readonly limits?: readonly {
+    readonly label: string;
+    readonly level: number;
+    readonly from?: number;
+    readonly to?: number;
+  }[];
+  /** Vertical marks: the board's foils, band edges. */
+  readonly marks?: readonly { readonly label: string; readonly at: number }[];
+}
+
+// ---------------------------------------------------------------- drawings to scale: data, not shapes
+
+export type DrawingData = StackUpDrawing | ArrayDrawing;
+
+export interface StackUpDrawing {
+  readonly drawing: 'stack-up';
+  /** From the top; thickness in µm; the drawing is to scale in thickness (layers below the ground may be broken). */
+  readonly layers: readonly {
+    readonly label: string;
+    readonly detail: string;
+    readonly thicknessUm: number;
+    readonly material: 'cover' | 'copper-strip' | 'dielectric' | 'copper-ground' | 'below';
+    readonly computed: boolean;
+  }[];
+}
+
+export interface ArrayDrawing {
+  readonly drawing: 'array';
+  /** mm; x along the column away from the feed, y across. */
+  readonly columns: readonly {
+    readonly label: string;
+    readonly rectangles: readonly {
+      readonly kind: 'patch' | 'line';
+      readonly x: number;
+      readonly y: number;
+      readonly length: number;
+      readonly width: number;
+    }[];
+  }[];
+  readonly extent: { readonly x: readonly [number, number]; readonly y: readonly [number, number] };
+  /** Labels for the axes, cuts, the sign of tilt and the polarisation, printed on the drawing. */
+  readonly axisNotes: {
+    readonly x: string;
+    readonly y: string;
+    readonly tilt: string;
+    readonly polarisation: string;
+    readonly cuts: string;
+  };
+}

@@ -1,0 +1,280 @@
+/**
+ * The typed model of a pack after reading, checking and resolving references: what the rest of the program sees.
+ * All numbers are SI (Hz, m, K differences in K, temperatures in degC where named so, S/m, Np-free ratios),
+ * except levels, which are dB and say so in their name.
+ */
+export type Basis = 'guaranteed' | 'typical' | 'measured' | 'estimated';
+export type Direction = 'through-thickness' | 'in-plane';
+
+/** Where a figure comes from. Empty strings never occur: what is not given is absent. */
+export interface Provenance {
+  readonly basis: Basis;
+  readonly method?: string;
+  /** Hz at which the figure was taken. */
+  readonly frequency?: number;
+  readonly direction?: Direction;
+  readonly document?: string;
+  readonly revision?: string;
+  readonly date?: string;
+}
+
+/** A material or fabrication figure: nominal value, how far it may lie below and above, and where it comes from. */
+export interface Figure {
+  readonly value: number;
+  /** Absolute, ≥ 0, same unit: lower limit is value − minus, upper limit value + plus. */
+  readonly minus: number;
+  readonly plus: number;
+  readonly provenance: Provenance;
+  /** Where it is written, for the dossier: `laminates.yaml: nf-30.permittivity`. */
+  readonly path: string;
+}
+
+/** A property stated by a document and compared as declared, not computed. */
+export interface DeclaredProperty {
+  readonly id: string;
+  /** Text such as `V-0`, or a number with its unit kept for print. */
+  readonly value: string | number;
+  readonly unit?: string;
+  readonly document?: string;
+  readonly revision?: string;
+  readonly date?: string;
+}
+
+export interface Laminate {
+  readonly id: string;
+  readonly maker: string;
+  readonly name: string;
+  readonly invented: boolean;
+  /** `bulk`: process value of the dielectric alone. `design`: fitted on lines with the named foil and thickness, so part of the roughness effect is already in it. */
+  readonly permittivityKind: 'bulk' | 'design';
+  readonly fittedOn?: { readonly foil: string; readonly thickness: number };
+  readonly permittivity: Figure;
+  readonly lossTangent: Figure;
+  /** Relative change of permittivity per kelvin, 1/K. */
+  readonly permittivityTemperatureCoefficient?: Figure;
+  /** Relative change of loss tangent per kelvin, 1/K. */
+  readonly lossTangentTemperatureCoefficient?: Figure;
+  readonly declared: readonly DeclaredProperty[];
+}
+
+export type TextureParameter = 'Rq' | 'Sq' | 'Ra' | 'Sa' | 'Rz' | 'Sz';
+
+/** Texture of one copper face; `rq` is what the models use, with how it was obtained. */
+export interface Texture {
+  readonly rq: Figure;
+  readonly stated: { readonly parameter: TextureParameter; readonly value: number };
+  /** Set when Rq was not stated: a sentence naming the conversion and its assumption. */
+  readonly conversion?: string;
+  readonly instrument?: string;
+  readonly filter?: string;
+}
+
+export interface Foil {
+  readonly id: string;
+  readonly maker: string;
+  readonly name: string;
+  readonly invented: boolean;
+  readonly conductivity: Figure;
+  /** 1/K at 20 degC. */
+  readonly temperatureCoefficient: number;
+  readonly treatedFace: Texture;
+  readonly untreatedFace: Texture;
+  readonly declared: readonly DeclaredProperty[];
+}
+
+export interface FinishLayer {
+  readonly material: string;
+  readonly conductivity: Figure;
+  readonly thickness: Figure;
+  readonly relativePermeability: number;
+}
+
+/** Layers from the copper outward; empty for bare copper. */
+export interface Finish {
+  readonly id: string;
+  readonly name: string;
+  readonly invented: boolean;
+  readonly layers: readonly FinishLayer[];
+  readonly declared: readonly DeclaredProperty[];
+}
+
+export interface CoverLayer {
+  readonly material: string;
+  readonly permittivity: Figure;
+  readonly lossTangent: Figure;
+  readonly thickness: Figure;
+}
+
+export interface StackUp {
+  readonly cover?: CoverLayer;
+  readonly strip: {
+    readonly foil: Foil;
+    readonly thickness: Figure;
+    readonly finish: Finish;
+    readonly outerFace: { readonly kind: 'foil' | 'plated' | 'micro-etched'; readonly texture: Texture };
+    readonly dielectricFace: { readonly kind: 'treated' | 'untreated'; readonly texture: Texture };
+  };
+  /** Thickness is between the mean planes of the copper faces. */
+  readonly laminate: { readonly material: Laminate; readonly thickness: Figure };
+  readonly ground: {
+    readonly foil: Foil;
+    readonly thickness: Figure;
+    readonly dielectricFace: { readonly kind: 'treated' | 'untreated'; readonly texture: Texture };
+  };
+  /** Below the ground: declared and drawn, not computed. */
+  readonly below: readonly { readonly name: string; readonly thickness: number }[];
+}
+
+export interface Patch {
+  /** Across the column (y), m. */
+  readonly width: number;
+  /** Along the column (x), m. */
+  readonly length: number;
+}
+export interface Link {
+  readonly width: number;
+  readonly length: number;
+}
+
+/** A series-fed column: along +x, fed at the small-x end, last patch open. */
+export interface ColumnLayout {
+  /** Centre line of the column, m; the array is centred on y = 0. */
+  readonly y: number;
+  /** x of the true edge of the first patch, m. */
+  readonly x: number;
+  readonly feedLine: Link;
+  readonly patches: readonly Patch[];
+  /** One fewer than patches. */
+  readonly links: readonly Link[];
+}
+
+export interface FeedPath {
+  /** Relative amplitude of the incident wave at the column, > 0 or 0. */
+  readonly amplitude: number;
+  /** Phase of the incident wave, rad. */
+  readonly phase: number;
+  /** Loss from the gain reference plane to the column, either given (dB ≥ 0) … */
+  readonly lossDb?: Figure;
+  /** … or from a length of microstrip on this stack-up. */
+  readonly line?: Link;
+}
+
+export interface Tolerances {
+  /** All copper outlines grow (+) or shrink (−) by this much in width and length, m (total, both edges together). */
+  readonly etch?: Figure;
+}
+
+export interface Cost {
+  readonly amount: number;
+  readonly currency: string;
+  readonly basis?: string;
+}
+
+export interface Board {
+  readonly id: string;
+  readonly title: string;
+  readonly description?: string;
+  /** Ids from this board's parent to the root of its `based_on` chain; empty when it stands alone. */
+  readonly basedOn: readonly string[];
+  /** File path relative to the root folder, with forward slashes. */
+  readonly file: string;
+  /** Dotted paths overridden relative to the parent, in file order. */
+  readonly overrides: readonly string[];
+  readonly stackUp: StackUp;
+  readonly columns: readonly ColumnLayout[];
+  readonly pitch: number;
+  readonly feed: readonly FeedPath[];
+  /** `line`: reflections are referred to the feed line's own impedance; a number: ohm. */
+  readonly referenceImpedance: 'line' | number;
+  readonly band: { readonly low: number; readonly high: number };
+  readonly temperature: { readonly lowC: number; readonly nominalC: number; readonly highC: number };
+  readonly tolerances: Tolerances;
+  readonly cost?: Cost;
+  readonly declared: readonly DeclaredProperty[];
+}
+
+/** Names of requirement quantities; the catalogue in `verdict/quantities.ts` says what each means, its unit and its cut. */
+export type QuantityName =
+  | 'gain'
+  | 'realized_gain'
+  | 'directivity'
+  | 'radiation_efficiency'
+  | 'reflection'
+  | 'active_reflection'
+  | 'half_power_beamwidth'
+  | 'sidelobe_level'
+  | 'beam_direction'
+  | 'pattern_mask'
+  | 'line_loss'
+  | 'declared';
+
+export interface MaskPiece {
+  /** Angles in rad in the cut, from < to. */
+  readonly from: number;
+  readonly to: number;
+  /** Level relative to the beam's maximum, dB, not to be exceeded. */
+  readonly levelDb: number;
+}
+
+export interface Requirement {
+  readonly id: string;
+  readonly text: string;
+  readonly quantity: QuantityName;
+  readonly cut?: 'azimuth' | 'elevation';
+  /** Absent for masks (the pieces are the limit) and for declared text. Value in the catalogue unit of the quantity (dBi, dB, deg, dB/cm, 1). */
+  readonly limit?: { readonly direction: 'at_least' | 'at_most'; readonly value: number };
+  readonly mask?: readonly MaskPiece[];
+  /** For `declared`: which property, and the text allowed (any of) or the numeric limit above. */
+  readonly property?: string;
+  readonly allowed?: readonly string[];
+  /** Limits the board's own band and temperature range; absent parts mean the board's. */
+  readonly condition: {
+    readonly band?: { readonly low: number; readonly high: number };
+    readonly temperature?: { readonly lowC: number; readonly highC: number };
+  };
+  readonly weight: 'binding' | 'target';
+  readonly source: string;
+  readonly verification: 'calculation' | 'test';
+  readonly testMethod?: string;
+}
+
+export interface RequirementSet {
+  readonly id: string;
+  readonly title: string;
+  readonly file: string;
+  readonly invented: boolean;
+  readonly requirements: readonly Requirement[];
+}
+
+export type RoughnessModelName = 'hammerstad' | 'groiss' | 'gradient';
+
+export interface Analysis {
+  /** Model behind the nominal figures; the spread always covers all models. */
+  readonly roughnessModel: RoughnessModelName;
+  /** Largest frequency step over the band, Hz. */
+  readonly frequencyStep: number;
+}
+
+export interface InputFile {
+  readonly path: string;
+  readonly sha256: string;
+}
+
+export interface Pack {
+  readonly id: string;
+  readonly title: string;
+  readonly documentNumber: string;
+  readonly revision: string;
+  /** ISO date, YYYY-MM-DD. */
+  readonly date: string;
+  readonly status: 'draft' | 'for review' | 'released';
+  readonly authors: readonly string[];
+  readonly owner: string;
+  /** Printed on every page when the data are invented. */
+  readonly notice?: string;
+  readonly boards: readonly Board[];
+  readonly requirements: RequirementSet;
+  readonly analysis: Analysis;
+  /** Every file that was read, sorted by path. */
+  readonly inputs: readonly InputFile[];
+}
