@@ -155,6 +155,8 @@ export interface LinesChart {
     readonly level: number;
     readonly from?: number;
     readonly to?: number;
+    /** Side of the level on which the requirement is missed: hatched. */
+    readonly forbidden?: 'above' | 'below';
   }[];
   /** Vertical marks: the board's foils, band edges. */
   readonly marks?: readonly { readonly label: string; readonly at: number }[];

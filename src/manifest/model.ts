@@ -223,6 +223,8 @@ export interface Requirement {
   readonly cut?: 'azimuth' | 'elevation';
   /** Absent for masks (the pieces are the limit) and for declared text. Value in the catalogue unit of the quantity (dBi, dB, deg, dB/cm, 1). */
   readonly limit?: { readonly direction: 'at_least' | 'at_most'; readonly value: number };
+  /** For `declared` with a numeric limit: the unit it is written with, which the property must carry too. */
+  readonly unit?: string;
   readonly mask?: readonly MaskPiece[];
   /** For `declared`: which property, and the text allowed (any of) or the numeric limit above. */
   readonly property?: string;

@@ -1,6 +1,7 @@
-import type { Board, QuantityName, RoughnessModelName } from '../manifest/model.js';
+import type { Board, Figure, QuantityName, RoughnessModelName } from '../manifest/model.js';
 import type { Complex } from '../numerics/complex.js';
 import type { ValidityFlag } from '../physics/validity.js';
+import type { Dimension } from '../quantity/index.js';
 
 /** Where the accepted power of the whole array goes, as fractions of the power accepted at the column ports; they sum to 1. */
 export interface PowerShares {
@@ -78,10 +79,17 @@ export interface Sweep {
 export interface ToleranceStudy {
   readonly id: string;
   readonly label: string;
-  /** For print, e.g. `3.00 ± 0.05`. */
-  readonly range: string;
+  /** The figure with its spread, as written in the manifest. */
+  readonly figure: Figure;
+  /** For print; `number` for plain ratios. */
+  readonly dimension?: Dimension | 'number';
   readonly low: Sweep;
   readonly high: Sweep;
+  /**
+   * The same under every roughness model. With these a verdict does not depend on the nominal model at all: a saturated
+   * model makes a tolerance on Rq look harmless, and the largest effect over the models counts. Without, low and high stand for all.
+   */
+  readonly byModel?: readonly { readonly model: RoughnessModelName; readonly low: Sweep; readonly high: Sweep }[];
 }
 
 /** A curve over frequency or roughness with a value per roughness model. */

@@ -1,0 +1,149 @@
+import type { LinesChart } from '../dossier/document.js';
+import { clipLine } from './clip.js';
+import {
+  type EndLabel,
+  endLabels,
+  flagLayers,
+  frameSpec,
+  type Layer,
+  limitBoxes,
+  limitHatch,
+  limitLabelPlaces,
+  makeFrame,
+  polylines,
+  strokes,
+  texts,
+  toPixels,
+  type VegaLiteSpec,
+} from './frame.js';
+import { alongLine, type Box, choosePlace, shorten } from './labels.js';
+import { fitDomain, niceStep } from './scale.js';
+import type { LineStyle, Theme } from './theme.js';
+
+/** Lines over a common axis, with the spread between models as a band, limits and vertical marks. */
+export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
+  const xType = chart.xScale ?? 'linear';
+  const yType = chart.yScale ?? 'linear';
+  const [xDomain, yDomain] = domains(chart, xType, yType);
+  const xStep = niceStep(xDomain[1] - xDomain[0], 8);
+  const yStep = niceStep(yDomain[1] - yDomain[0], 7);
+  const named = [
+    ...chart.series.map((series) => ({ text: series.label, bold: series.emphasis === true })),
+    ...(chart.band === undefined ? [] : [{ text: chart.band.label }]),
+  ];
+  const frame = makeFrame({
+    theme,
+    height: 300,
+    xType,
+    yType,
+    xDomain,
+    yDomain,
+    xStep,
+    yStep,
+    endLabels: named,
+    flags: (chart.marks ?? []).map((mark) => ({ text: mark.label, at: mark.at })),
+  });
+
+  const emphasised = chart.series.some((series) => series.emphasis);
+  // The emphasised line alone is then solid.
+  const styles = emphasised ? theme.series.slice(1) : theme.series;
+  let next = 0;
+  const ends: EndLabel[] = [];
+  const pixels: (readonly [number, number])[] = [];
+  const curves = chart.series.map((series) => {
+    const style = series.emphasis ? theme.emphasis : styles[next++ % styles.length];
+    const pieces = clipLine(series.points, xDomain, yDomain);
+    const last = pieces.at(-1)?.at(-1);
+    ends.push({
+      text: series.label,
+      at: last === undefined ? frame.height : frame.y.toPixel(last[1]),
+      style,
+      bold: series.emphasis === true,
+    });
+    for (const piece of pieces) pixels.push(...alongLine(toPixels(frame, piece)));
+    return { layer: polylines(pieces, style), emphasis: series.emphasis === true };
+  });
+  const band = chart.band === undefined ? [] : bandLayer(chart.band.points, xDomain, yDomain, theme);
+  if (chart.band !== undefined) {
+    const last = chart.band.points.filter(([x]) => x >= xDomain[0] && x <= xDomain[1]).at(-1);
+    const middle =
+      last === undefined ? yDomain[0] : yType === 'log' ? Math.sqrt(last[1] * last[2]) : (last[1] + last[2]) / 2;
+    ends.push({ text: chart.band.label, at: frame.y.toPixel(middle), fill: theme.figure.band });
+  }
+
+  const limit: LineStyle = { color: theme.figure.limit, dash: [], width: 2 };
+  const hatch: LineStyle = { color: theme.figure.limit, dash: [], width: 0.8 };
+  const taken: Box[] = [];
+  const limits: Layer[] = [];
+  for (const entry of chart.limits ?? []) {
+    const piece = {
+      from: frame.x.toPixel(Math.max(xDomain[0], entry.from ?? xDomain[0])),
+      to: frame.x.toPixel(Math.min(xDomain[1], entry.to ?? xDomain[1])),
+      level: frame.y.toPixel(entry.level),
+    };
+    if (!(piece.to > piece.from) || !(piece.level >= 0 && piece.level <= frame.height)) continue;
+    const side = entry.forbidden ?? 'above';
+    if (entry.forbidden !== undefined)
+      limits.push(strokes(frame, limitHatch(piece.from, piece.to, piece.level, side, hatch).lines, hatch));
+    limits.push(strokes(frame, [[piece.from, piece.level, piece.to, piece.level]], limit));
+    const text = shorten(entry.label, theme.chartFontSize, frame.width * 0.6);
+    taken.push(...limitBoxes([piece], side));
+    const place = choosePlace(limitLabelPlaces(frame, text, [piece], side), taken, pixels);
+    taken.push(place);
+    limits.push(texts(frame, [{ x: place.x + 2, y: place.y + place.height / 2, text }], { color: theme.figure.limit }));
+  }
+
+  return frameSpec(
+    frame,
+    { x: chart.xTitle, y: chart.yTitle },
+    [
+      ...band,
+      ...flagLayers(frame),
+      ...limits,
+      ...curves.filter((curve) => !curve.emphasis).map((curve) => curve.layer),
+      ...curves.filter((curve) => curve.emphasis).map((curve) => curve.layer),
+      ...endLabels(frame, ends),
+    ],
+    { x: xStep, y: yStep },
+  );
+}
+
+function domains(chart: LinesChart, xType: 'linear' | 'log', yType: 'linear' | 'log') {
+  const xs = chart.series.flatMap((series) => series.points.map(([x]) => x));
+  const xDomain = chart.xDomain ?? plainDomain([...xs, ...(chart.marks ?? []).map((mark) => mark.at)], xType);
+  const within = ([x]: readonly [number, ...number[]]) => x >= xDomain[0] && x <= xDomain[1];
+  const ys = [
+    ...chart.series.flatMap((series) => series.points.filter(within).map(([, y]) => y)),
+    ...(chart.band?.points ?? []).filter(within).flatMap(([, low, high]) => [low, high]),
+    ...(chart.limits ?? []).map((entry) => entry.level),
+  ];
+  return [xDomain, chart.yDomain ?? fitDomain(ys, yType)] as const;
+}
+
+/** The range of the data itself: an axis of frequency or roughness is not widened. */
+function plainDomain(values: readonly number[], type: 'linear' | 'log'): readonly [number, number] {
+  const finite = values.filter((value) => Number.isFinite(value) && (type === 'linear' || value > 0));
+  const low = Math.min(...finite);
+  const high = Math.max(...finite);
+  return high > low ? [low, high] : fitDomain(finite, type);
+}
+
+function bandLayer(
+  points: readonly (readonly [number, number, number])[],
+  [x0, x1]: readonly [number, number],
+  [y0, y1]: readonly [number, number],
+  theme: Theme,
+): Layer[] {
+  const clamp = (y: number) => Math.max(y0, Math.min(y1, y));
+  return [
+    {
+      data: {
+        values: points
+          .filter(([x, low, high]) => x >= x0 && x <= x1 && Number.isFinite(low) && Number.isFinite(high))
+          .map(([x, low, high]) => ({ x, y: clamp(low), y2: clamp(high) })),
+      },
+      mark: { type: 'area', color: theme.figure.band, opacity: 1, line: false },
+      encoding: { y2: { field: 'y2' } },
+    },
+  ];
+}

@@ -1,0 +1,70 @@
+import { Command, CommanderError } from 'commander';
+import { OutputError } from '../publish/index.js';
+import { schema } from './command-schema.js';
+import { validate } from './command-validate.js';
+import { describeFault, Fault, UsageError } from './errors.js';
+import { type ExitCode, exitCodeHelp, exitCodes } from './exit-codes.js';
+import type { CommandIo } from './io.js';
+import { programVersion } from './version.js';
+
+/** Runs one command line, without the name of the program, to its exit code. Never throws. */
+export async function runCommandLine(args: readonly string[], io: CommandIo): Promise<ExitCode> {
+  let code: ExitCode = exitCodes.done;
+  const program = new Command('boardcase')
+    .description('Compliance dossiers for automotive-radar antenna boards, from YAML manifests.')
+    .version(programVersion)
+    .exitOverride()
+    .configureOutput({ writeOut: (text) => io.out(text.trimEnd()), writeErr: (text) => io.err(text.trimEnd()) })
+    .addHelpText('after', `\n${exitCodeHelp()}`);
+  const root = [
+    '--root <dir>',
+    'folder that the manifests may refer to (default: the folder of the pack file)',
+  ] as const;
+
+  program
+    .command('build')
+    .description('calculate, judge and write the dossiers of a pack')
+    .argument('<pack.yaml>', 'the pack file')
+    .option('--out <dir>', 'output folder: new, empty or written by boardcase', 'out')
+    .option(...root)
+    .option('--gate', 'exit code 1 unless every binding requirement meets on every board')
+    .action(async (pack, options) => {
+      // Charts and PDFs take a second to load; the other commands do without.
+      const { build } = await import('./command-build.js');
+      code = await build(pack, options, io);
+    });
+  program
+    .command('validate')
+    .description('check the manifests of a pack; print every problem with its place and its mend')
+    .argument('<pack.yaml>', 'the pack file')
+    .option(...root)
+    .action((pack, options) => {
+      code = validate(pack, options, io);
+    });
+  program
+    .command('schema')
+    .description('print the JSON schemas of the manifests, for editors')
+    .option('--out <dir>', 'write one file per kind of manifest instead')
+    .action((options) => {
+      code = schema(options, io);
+    });
+
+  try {
+    await program.parseAsync(args, { from: 'user' });
+    return code;
+  } catch (error) {
+    return tellFailure(error, io);
+  }
+}
+
+function tellFailure(error: unknown, io: CommandIo): ExitCode {
+  // commander has said what is wrong; asking for help or the version also arrives here, with 0.
+  if (error instanceof CommanderError) return error.exitCode === 0 ? exitCodes.done : exitCodes.badInput;
+  if (error instanceof UsageError || error instanceof OutputError) {
+    io.err(error.message);
+    return exitCodes.badInput;
+  }
+  const fault = error instanceof Fault ? error : new Fault('starting', 'not known yet', error);
+  io.err(describeFault(fault, programVersion));
+  return exitCodes.fault;
+}

@@ -1,0 +1,106 @@
+import type { QuantityName } from '../manifest/model.js';
+import type { PointResult } from '../study/results.js';
+import { quantityOf } from '../verdict/index.js';
+import { cell, chapter, figureBlock, number, prose, table } from './blocks.js';
+import { referenceText } from './chapter-board.js';
+import { NO_RESULTS } from './chapter-budget.js';
+import type { BoardContext } from './context.js';
+import type { Block, Cell, Chapter } from './document.js';
+import { celsius, gigahertz, limitText, rounded, valueText } from './values.js';
+
+const KINDS = [
+  { quantity: 'reflection', id: 'match-passive', name: 'Passive reflection, worst column' },
+  { quantity: 'active_reflection', id: 'match-active', name: 'Active reflection, worst driven column' },
+] as const;
+
+interface Sample {
+  readonly point: PointResult;
+  readonly db: number;
+}
+
+/** Reflection in dB at every point of the nominal sweep; a point without a value is left out and counted. */
+function samples({ board, study }: BoardContext, quantity: QuantityName): readonly Sample[] {
+  const { at } = quantityOf(quantity);
+  return study.nominal.points.flatMap((point) => {
+    const found = at(point, { requirement: {}, board });
+    return 'value' in found ? [{ point, db: found.value }] : [];
+  });
+}
+
+function byTemperature(found: readonly Sample[]): readonly (readonly [number, readonly Sample[]])[] {
+  const temperatures = [...new Set(found.map((s) => s.point.temperatureC))];
+  return temperatures.map((t) => [t, found.filter((s) => s.point.temperatureC === t)]);
+}
+
+const worstOf = (found: readonly Sample[]): Sample => found.reduce((a, b) => (b.db > a.db ? b : a));
+
+function matchFigure(context: BoardContext, kind: (typeof KINDS)[number]): Block {
+  const found = samples(context, kind.quantity);
+  const unit = quantityOf(kind.quantity).unit;
+  const limits = context.judged
+    .map(({ requirement }) => requirement)
+    .filter((r) => r.quantity === kind.quantity && r.limit !== undefined)
+    .map((r) => ({
+      label: `${r.id}: ${limitText(r, unit)}`,
+      level: r.limit?.value ?? Number.NaN,
+      from: rounded((r.condition.band ?? context.board.band).low / 1e9, 4),
+      to: rounded((r.condition.band ?? context.board.band).high / 1e9, 4),
+      forbidden: r.limit?.direction === 'at_least' ? ('below' as const) : ('above' as const),
+    }));
+  if (found.length === 0) return prose(`${kind.name}: no value at any point.`);
+  const worst = worstOf(found);
+  return figureBlock({
+    id: kind.id,
+    title: `${kind.name}, over frequency at each temperature`,
+    reading: `The largest value is ${valueText(worst.db, unit)} at ${gigahertz(worst.point.frequency)} and ${celsius(worst.point.temperatureC)}.`,
+    alt: `Reflection in dB over frequency, one line per temperature${limits.length === 0 ? '; no requirement limits it' : `; limit lines ${limits.map((l) => l.label).join(', ')}`}.`,
+    content: {
+      chart: 'lines',
+      xTitle: 'Frequency (GHz)',
+      yTitle: 'Reflection (dB)',
+      series: byTemperature(found).map(([temperature, group]) => ({
+        label: celsius(temperature),
+        ...(temperature === context.board.temperature.nominalC ? { emphasis: true } : {}),
+        points: group.map((s) => [rounded(s.point.frequency / 1e9, 4), rounded(s.db, 3)] as const),
+      })),
+      limits,
+    },
+  });
+}
+
+function matchRows(context: BoardContext): readonly (readonly Cell[])[] {
+  return KINDS.flatMap((kind) => {
+    const unit = quantityOf(kind.quantity).unit;
+    return byTemperature(samples(context, kind.quantity)).map(([temperature, group]) => {
+      const worst = worstOf(group);
+      const middle = group[Math.floor((group.length - 1) / 2)];
+      return [
+        cell(kind.name),
+        number(celsius(temperature)),
+        number(valueText(group[0].db, unit)),
+        number(valueText(middle.db, unit)),
+        number(valueText(group[group.length - 1].db, unit)),
+        number(valueText(worst.db, unit)),
+        number(gigahertz(worst.point.frequency)),
+      ];
+    });
+  });
+}
+
+export function matchChapter(context: BoardContext): Chapter {
+  if (context.study.nominal.points.length === 0) return chapter('match', 'Match', prose(NO_RESULTS));
+  return chapter(
+    'match',
+    'Match',
+    ...KINDS.map((kind) => matchFigure(context, kind)),
+    table(
+      'match-table',
+      'Reflection at the band edges, the band centre and where it is largest',
+      ['Reflection|2', '#Temperature', '#Lower edge', '#Centre', '#Upper edge', '#Largest', '#At'],
+      matchRows(context),
+    ),
+    prose(
+      `Referred to the ${referenceText(context.board)}, at the true edge of the first patch. Passive: each column driven alone, the others terminated in the reference impedance. Active: all columns driven with the weights of the feed.`,
+    ),
+  );
+}

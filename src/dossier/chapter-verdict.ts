@@ -1,0 +1,154 @@
+import { quantityOf, quantityTitle } from '../verdict/index.js';
+import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
+import type { BoardContext, Judged } from './context.js';
+import type { Block, Cell, Chapter, Inline } from './document.js';
+import { concernsOf, figureText } from './figures.js';
+import { boardPage, DEFINITIONS, link, requirementPage } from './links.js';
+import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
+import { differenceText, limitText, placeText, uncertaintyText, valueText } from './values.js';
+
+/** Worst value, or why there is none. */
+export function valueCell({ verdict }: Judged): Cell {
+  if (verdict.value === undefined) return cell(verdict.reason ?? '–');
+  const value = valueText(verdict.value, verdict.unit);
+  const reason = verdict.reason === undefined ? '' : ` (${verdict.reason})`;
+  return { content: [value + reason], numeric: typeof verdict.value === 'number' && reason === '' };
+}
+
+export const marginCell = ({ verdict }: Judged): Cell =>
+  verdict.margin === undefined ? cell('–') : number(differenceText(verdict.margin, verdict.unit));
+
+export const uncertaintyCell = ({ requirement, verdict }: Judged): Cell => {
+  if (requirement.quantity === 'declared') return cell('as declared');
+  return verdict.adverse === undefined ? cell('–') : number(uncertaintyText(verdict, verdict.unit));
+};
+
+export function whereCell({ verdict }: Judged): Cell {
+  if (verdict.where !== undefined) return cell(placeText(verdict.where));
+  return cell(verdict.part ?? '–');
+}
+
+/** Status, and for what only a test decides what the calculation says. */
+export function statusInline({ verdict }: Judged): readonly Inline[] {
+  if (verdict.calculated === undefined) return [{ status: verdict.status }];
+  return [{ status: verdict.status }, ` (calculated: ${verdict.calculated})`];
+}
+
+const requirementCell = ({ requirement }: Judged): Cell => {
+  const target = requirement.weight === 'target' ? ' (target)' : '';
+  return cell(link(requirement.id, requirementPage(requirement.id)), `${target}: ${requirement.text}`);
+};
+
+function results({ judged }: BoardContext): Block {
+  return table(
+    'results',
+    'Worst value of every requirement over its band and temperature range, against its limit',
+    [
+      'Requirement|2.4',
+      'Limit|0.9',
+      '#Worst value|1.1',
+      'Where|1.2',
+      '#Margin|0.8',
+      '#Uncertainty (against / for)|1.2',
+      'Status|1.2',
+    ],
+    judged.map((entry) => {
+      const { unit } = entry.verdict;
+      return [
+        requirementCell(entry),
+        cell(limitText(entry.requirement, unit)),
+        valueCell(entry),
+        whereCell(entry),
+        marginCell(entry),
+        uncertaintyCell(entry),
+        cell(...statusInline(entry)),
+      ];
+    }),
+  );
+}
+
+function gaps({ study }: BoardContext): readonly Block[] {
+  if (study.notEvaluated.length === 0) return [];
+  return [
+    caution(
+      'Not evaluated for this board',
+      ...study.notEvaluated.map(({ quantities, reason }) => [
+        { strong: `${quantities.map((name) => quantityOf(name).title).join(', ')}: ` },
+        reason,
+      ]),
+    ),
+  ];
+}
+
+function outsideRange({ board, study }: BoardContext): readonly Block[] {
+  const outside = study.flags.filter((flag) => flag.severity === 'outside');
+  if (outside.length === 0) return [];
+  return [
+    caution(
+      'Models used outside their stated range',
+      ...outside.map((flag) => [{ strong: `${flag.model}: ` }, flag.text]),
+      [
+        'The engine accuracy in the uncertainty holds inside the range only. See ',
+        link('Validity', boardPage(board.id), 'validity'),
+        '.',
+      ],
+    ),
+  ];
+}
+
+function assumptions({ board }: BoardContext): readonly Block[] {
+  const concerns = concernsOf(board);
+  if (concerns.length === 0) {
+    return [prose('Every material and fabrication figure is guaranteed or measured and is used at its own frequency.')];
+  }
+  return [
+    prose(
+      { strong: 'Strongest assumptions. ' },
+      'Figures that are typical, estimated or used outside their frequency, the strongest assumption first. A verdict is no better than these.',
+    ),
+    table(
+      'assumptions',
+      'Figures that are typical, estimated or used outside their frequency',
+      ['Figure|1.4', '#Value|1.1', 'Why it is an assumption|2.4', 'Written in|1.8'],
+      concerns.map(({ use, clauses }) => [
+        cell(use.label),
+        number(figureText(use)),
+        cell(clauses.join('; ')),
+        cell({ code: use.figure.path }),
+      ]),
+    ),
+  ];
+}
+
+/** Page one of a dossier: what was found, against what, and what it rests on. */
+export function verdictChapter(context: BoardContext): Chapter {
+  const { board, verdict, judged } = context;
+  const undecided = judged.filter(({ verdict: v }) => (v.calculated ?? v.status) === 'undecided');
+  return chapter(
+    'verdict',
+    'Verdict',
+    { kind: 'verdict', status: verdict.overall, content: [verdict.reason] },
+    results(context),
+    facts(
+      'reading',
+      ['Margin', 'distance of the worst value to its limit, positive inside'],
+      [
+        'Uncertainty',
+        'how much smaller and how much larger the margin may be: engine accuracy, every declared tolerance and the spread over the roughness models; parts in ',
+        link('Uncertainty', boardPage(board.id), 'uncertainty'),
+      ],
+      [
+        'Margin below uncertainty',
+        undecided.length === 0
+          ? 'none'
+          : undecided.map(({ requirement }) => `${requirement.id} (${quantityTitle(requirement)})`).join('; '),
+      ],
+      ['Rule', 'how statuses follow from these: ', link('Definitions', DEFINITIONS, 'statuses')],
+    ),
+    ...gaps(context),
+    ...outsideRange(context),
+    caution('What is not modelled', ...NOT_MODELLED.map((line) => [line])),
+    caution('What the figures are compared with', [COMPARED_WITH]),
+    ...assumptions(context),
+  );
+}

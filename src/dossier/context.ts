@@ -1,0 +1,112 @@
+import type { EvidenceResult, Method } from '../evidence/index.js';
+import type { Board, Pack, Requirement } from '../manifest/model.js';
+import type { BoardStudy, PointResult } from '../study/results.js';
+import type { BoardVerdict, RequirementVerdict } from '../verdict/index.js';
+import type { DocumentPage, PageKind, TitleBlock } from './document.js';
+import { CAUTION_NOTICE, COMPARED_WITH, DOCUMENT_TYPE } from './statements.js';
+
+/** Everything the pages of a pack are made from. Studies and verdicts are in the order of the pack's boards. */
+export interface PackInput {
+  readonly pack: Pack;
+  readonly studies: readonly BoardStudy[];
+  readonly verdicts: readonly BoardVerdict[];
+  readonly evidence: readonly EvidenceResult[];
+  readonly methods: readonly Method[];
+  readonly programVersion: string;
+}
+
+/** One board with all that is known of it. */
+export interface BoardContext {
+  readonly input: PackInput;
+  readonly board: Board;
+  readonly study: BoardStudy;
+  readonly verdict: BoardVerdict;
+  /** Requirements with their verdict, in the order of the set. */
+  readonly judged: readonly Judged[];
+}
+
+export interface Judged {
+  readonly requirement: Requirement;
+  readonly verdict: RequirementVerdict;
+}
+
+/** @throws RangeError when a board has no study or verdict, or a requirement no verdict: a fault of the program */
+export function boardContexts(input: PackInput): readonly BoardContext[] {
+  return input.pack.boards.map((board) => {
+    const study = input.studies.find((s) => s.board.id === board.id);
+    const verdict = input.verdicts.find((v) => v.boardId === board.id);
+    if (study === undefined || verdict === undefined)
+      throw new RangeError(`board ${board.id} was not studied and judged`);
+    const judged = input.pack.requirements.requirements.map((requirement) => {
+      const found = verdict.requirements.find((v) => v.requirementId === requirement.id);
+      if (found === undefined) throw new RangeError(`board ${board.id} was not judged against ${requirement.id}`);
+      return { requirement, verdict: found };
+    });
+    return { input, board, study, verdict, judged };
+  });
+}
+
+/** Representative points: lower edge, centre and upper edge of the band at nominal temperature; none without results. */
+export interface BandPoints {
+  readonly low: PointResult;
+  readonly centre: PointResult;
+  readonly high: PointResult;
+  /** All points at nominal temperature, by frequency. */
+  readonly nominal: readonly PointResult[];
+}
+
+const nearest = <T>(items: readonly T[], distance: (item: T) => number): T =>
+  items.reduce((a, b) => (distance(b) < distance(a) ? b : a));
+
+export function bandPoints({ board, study }: BoardContext): BandPoints | undefined {
+  const { points } = study.nominal;
+  if (points.length === 0) return undefined;
+  const { temperatureC } = nearest(points, (p) => Math.abs(p.temperatureC - board.temperature.nominalC));
+  const nominal = points.filter((p) => p.temperatureC === temperatureC);
+  const middle = (board.band.low + board.band.high) / 2;
+  return {
+    low: nominal[0],
+    centre: nearest(nominal, (p) => Math.abs(p.frequency - middle)),
+    high: nominal[nominal.length - 1],
+    nominal,
+  };
+}
+
+function titleBlock({ pack }: PackInput, number: string, title: string, supplementaryTitle?: string): TitleBlock {
+  return {
+    legalOwner: pack.owner,
+    identificationNumber: number,
+    revision: pack.revision,
+    dateOfIssue: pack.date,
+    title,
+    ...(supplementaryTitle === undefined ? {} : { supplementaryTitle }),
+    documentType: DOCUMENT_TYPE,
+    documentStatus: pack.status,
+    creator: pack.authors.join(', '),
+    approver: pack.status === 'released' ? 'on the signed copy' : 'not yet approved',
+    language: 'en',
+  };
+}
+
+/** Frame of a page: title block and the notices that stand on every page. */
+export function page(
+  input: PackInput,
+  parts: {
+    readonly id: string;
+    readonly kind: PageKind;
+    readonly title: string;
+    readonly subtitle: string;
+    /** Added to the document number of the pack. */
+    readonly suffix?: string;
+    readonly chapters: DocumentPage['chapters'];
+  },
+): DocumentPage {
+  const { pack } = input;
+  const { suffix, ...rest } = parts;
+  const number = suffix === undefined ? pack.documentNumber : `${pack.documentNumber}-${suffix}`;
+  return {
+    ...rest,
+    titleBlock: titleBlock(input, number, parts.title, pack.title === parts.title ? undefined : pack.title),
+    notices: [...(pack.notice === undefined ? [] : [pack.notice]), CAUTION_NOTICE, COMPARED_WITH],
+  };
+}

@@ -1,0 +1,239 @@
+import { formatNumber } from '../quantity/index.js';
+import { quantityOf, quantityTitle } from '../verdict/index.js';
+import { caution, cell, chapter, facts, list, number, plainTable, prose, table } from './blocks.js';
+import { cautionsChapter, inputTable } from './chapter-record.js';
+import { type BoardContext, type Judged, type PackInput, page } from './context.js';
+import { differencesBetween } from './differences.js';
+import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
+import { concernsOf } from './figures.js';
+import { boardPage, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
+import { rankedRequirements, standing, tightest } from './standing.js';
+import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
+import { count, differenceText, limitText, statedNumber, valueText } from './values.js';
+
+const judgedOn = (board: BoardContext, requirementId: string): Judged => {
+  const found = board.judged.find((j) => j.requirement.id === requirementId);
+  if (found === undefined) throw new RangeError(`board ${board.board.id} was not judged against ${requirementId}`);
+  return found;
+};
+
+/** Status with the worst margin, or the declared value. */
+function matrixCell(entry: Judged): Cell {
+  const { verdict } = entry;
+  const detail =
+    verdict.margin !== undefined
+      ? differenceText(verdict.margin, verdict.unit)
+      : typeof verdict.value === 'string'
+        ? valueText(verdict.value, verdict.unit)
+        : '';
+  return cell({ status: verdict.status }, ...(detail === '' ? [] : [` ${detail}`]));
+}
+
+const notEvaluatedOn = (board: BoardContext): number =>
+  board.judged.filter(({ verdict }) => verdict.status === 'not evaluated').length;
+
+function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof rankedRequirements>): Block {
+  return plainTable(
+    'matrix',
+    'Every board against every requirement: status and worst margin over band and temperature; the requirement with the worst margin first',
+    [
+      { title: 'Board', width: 1.4 },
+      { title: 'Overall', width: 1.2 },
+      ...ranked.map(({ requirement }) => ({
+        title: `${requirement.id}${requirement.weight === 'target' ? ' (target)' : ''}`,
+      })),
+    ],
+    boards.map((board) => [
+      cell(link(board.board.title, boardPage(board.board.id))),
+      cell({ status: board.verdict.overall }),
+      ...ranked.map(({ requirement }) => matrixCell(judgedOn(board, requirement.id))),
+    ]),
+  );
+}
+
+function requirementList(boards: readonly BoardContext[], ranked: ReturnType<typeof rankedRequirements>): Block {
+  return table(
+    'requirements',
+    'The requirements in the same order',
+    ['Requirement', 'Text|2.4', 'Quantity|1.4', 'Limit|0.9', 'Weight|0.7', 'Worst on|1.2'],
+    ranked.map(({ requirement, lowest }) => {
+      const worst = boards.find(
+        (b) => standing(judgedOn(b, requirement.id).verdict) === lowest && lowest !== undefined,
+      );
+      const unit =
+        worst === undefined ? quantityOf(requirement.quantity).unit : judgedOn(worst, requirement.id).verdict.unit;
+      return [
+        cell(link(requirement.id, requirementPage(requirement.id))),
+        cell(requirement.text),
+        cell(quantityTitle(requirement)),
+        cell(limitText(requirement, unit)),
+        cell(requirement.weight),
+        worst === undefined ? cell('–') : cell(link(worst.board.title, boardPage(worst.board.id))),
+      ];
+    }),
+  );
+}
+
+const costText = ({ board }: BoardContext): string =>
+  board.cost === undefined ? 'not given' : `${statedNumber(board.cost.amount)} ${board.cost.currency}`;
+
+/** Each board in one line: why it stands so, its tightest binding requirement, its cost. */
+function standings(boards: readonly BoardContext[]): Block {
+  return table(
+    'standings',
+    'Tightest binding requirement of every board, and its cost',
+    ['Board|1.2', 'Overall', 'Why|2.6', 'Tightest requirement|1.2', '#Margin', '#Margin / uncertainty', '#Cost'],
+    boards.map((context) => {
+      const tight = tightest(context);
+      const ratio = tight === undefined ? undefined : standing(tight.verdict);
+      return [
+        cell(link(context.board.title, boardPage(context.board.id))),
+        cell({ status: context.verdict.overall }),
+        cell(context.verdict.reason),
+        tight === undefined ? cell('–') : cell(link(tight.requirement.id, requirementPage(tight.requirement.id))),
+        tight?.verdict.margin === undefined
+          ? cell('–')
+          : number(differenceText(tight.verdict.margin, tight.verdict.unit)),
+        ratio === undefined || !Number.isFinite(ratio) ? cell('–') : number(formatNumber(ratio, 2)),
+        number(costText(context)),
+      ];
+    }),
+  );
+}
+
+function assumptionTable(boards: readonly BoardContext[]): Block {
+  return table(
+    'assumption-counts',
+    'Figures that a verdict rests on without a guarantee, per board',
+    ['Board|1.2', '#Outside their frequency', '#Estimated', '#Typical', 'Strongest first|2.6', 'All'],
+    boards.map(({ board }) => {
+      const concerns = concernsOf(board);
+      const basis = (name: string) => concerns.filter((c) => c.use.figure.provenance.basis === name).length;
+      const strongest = concerns.slice(0, 3).map((c) => c.use.label);
+      const more = concerns.length - strongest.length;
+      return [
+        cell(link(board.title, boardPage(board.id))),
+        number(String(concerns.filter((c) => c.outsideFrequency).length)),
+        number(String(basis('estimated'))),
+        number(String(basis('typical'))),
+        cell(concerns.length === 0 ? 'none' : strongest.join('; ') + (more > 0 ? `; ${more} more` : '')),
+        cell(link('list with reasons', boardPage(board.id), concerns.length === 0 ? 'verdict' : 'assumptions')),
+      ];
+    }),
+  );
+}
+
+function differences(boards: readonly BoardContext[]): Block {
+  const found = differencesBetween(boards.map((b) => b.board));
+  if (boards.length < 2) return prose('The pack holds a single board.');
+  if (found.length === 0) return prose('The boards do not differ in any field that changes a result.');
+  return plainTable(
+    'differences',
+    'Fields in which the boards differ',
+    [{ title: 'Field', width: 1.3 }, ...boards.map(({ board }) => ({ title: board.title }))],
+    found.map(({ label, values }) => [cell(label), ...values.map((value) => cell(value))]),
+  );
+}
+
+function pagesChapter({ pack }: PackInput, boards: readonly BoardContext[]): Chapter {
+  const dossier = ({ board, verdict }: BoardContext): readonly Inline[] => [
+    link(`Dossier: ${board.title}`, boardPage(board.id)),
+    ' ',
+    { status: verdict.overall },
+  ];
+  return chapter(
+    'pages',
+    'Pages of this pack',
+    list([
+      ...boards.map(dossier),
+      ...pack.requirements.requirements.map((r): readonly Inline[] => [
+        link(`Requirement ${r.id}`, requirementPage(r.id)),
+        `: ${r.text}`,
+      ]),
+      [link('Evidence', EVIDENCE), ': methods, their sources and ranges, and the checks run for this build'],
+      [link('Definitions', DEFINITIONS), ': what every figure and status means'],
+    ]),
+  );
+}
+
+/** Status of the pack in one sentence; the overview has no status of its own beyond those of its boards. */
+function summary(boards: readonly BoardContext[]): readonly Block[] {
+  const of = (overall: string) => boards.filter((b) => b.verdict.overall === overall);
+  const order = ['meets', 'open until measured', 'undecided', 'misses', 'incomplete'] as const;
+  const groups = order.flatMap((status) => {
+    const found = of(status);
+    return found.length === 0 ? [] : [{ status, found }];
+  });
+  const open = boards.reduce((sum, b) => sum + notEvaluatedOn(b), 0);
+  return [
+    list(
+      groups.map(({ status, found }) => [
+        { status },
+        ` ${count(found.length, 'board')}: `,
+        ...found.flatMap(({ board }, i): Inline[] => [
+          ...(i === 0 ? [] : [', ']),
+          link(board.title, boardPage(board.id)),
+        ]),
+      ]),
+    ),
+    facts('counts', [
+      'Not evaluated',
+      open === 0 ? 'nothing' : `${count(open, 'requirement')} over all boards; reasons on the requirement pages`,
+    ]),
+  ];
+}
+
+export function overviewPage(input: PackInput, boards: readonly BoardContext[]): DocumentPage {
+  const { pack } = input;
+  const ranked = rankedRequirements(pack.requirements.requirements, boards);
+  const gaps = boards.flatMap((board) =>
+    board.judged
+      .filter(({ verdict }) => (verdict.calculated ?? verdict.status) === 'not evaluated')
+      .map(({ requirement, verdict }): readonly Inline[] => [
+        link(board.board.title, boardPage(board.board.id)),
+        ', ',
+        link(requirement.id, requirementPage(requirement.id)),
+        ` (${verdict.reason ?? 'no reason recorded'})`,
+      ]),
+  );
+  return page(input, {
+    id: OVERVIEW,
+    kind: 'overview',
+    title: pack.title,
+    subtitle: `${pack.documentNumber}, revision ${pack.revision}, ${pack.date}: ${count(boards.length, 'board')} against ${count(pack.requirements.requirements.length, 'requirement')}`,
+    chapters: [
+      chapter(
+        'overview',
+        'Overview',
+        prose(
+          `Candidate antenna boards compared against one requirement set, ${pack.requirements.title}, by calculation. `,
+          'Each cell of the table gives a status and the worst margin over the band and temperature range of the requirement; the dossiers behind it give the figures, their uncertainty and what they rest on.',
+        ),
+        ...summary(boards),
+        matrix(boards, ranked),
+        ...(gaps.length === 0 ? [] : [caution('Not evaluated', ...gaps)]),
+        caution('What is not modelled', ...NOT_MODELLED.map((line) => [line])),
+        caution('What the figures are compared with', [COMPARED_WITH]),
+      ),
+      chapter(
+        'standing',
+        'How the boards stand',
+        standings(boards),
+        prose(
+          'Margins in dB, degrees and ratios are compared by their uncertainty: a margin over uncertainty of 1 or more meets, below −1 misses, between them it is undecided. It also orders the columns of the table above.',
+        ),
+        requirementList(boards, ranked),
+      ),
+      chapter('differences-chapter', 'What differs between the boards', differences(boards)),
+      chapter('assumptions', 'What the verdicts rest on', assumptionTable(boards)),
+      pagesChapter(input, boards),
+      chapter(
+        'inputs',
+        'Inputs',
+        facts('program', ['Program', `boardcase ${input.programVersion}`]),
+        inputTable(pack.inputs),
+      ),
+      cautionsChapter(),
+    ],
+  });
+}

@@ -1,0 +1,38 @@
+import type { Inline } from './document.js';
+
+/** Sentences that every document carries. Kept in one place so that no page can say less than another. */
+export const DOCUMENT_TYPE = 'Compliance dossier for design review (calculated)';
+
+export const NOT_MODELLED: readonly string[] = [
+  'Fascia, bumper or radome in front of the antenna.',
+  'Housing and neighbouring parts.',
+  'Transition from the chip to the feed network.',
+  'Vias.',
+  'Edges of the board: laminate and ground are taken as infinite, and the power of the surface wave as lost.',
+];
+
+export const COMPARED_WITH =
+  'The figures are compared with calculations by other methods and with published values. No board of this build has been measured.';
+
+/** One line for the notices of every page. */
+export const CAUTION_NOTICE =
+  'Calculated design evidence: not a declaration of conformity, radio approval or RF-exposure assessment, and not a safety argument.';
+
+export const CAUTIONS: readonly (readonly Inline[])[] = [
+  [
+    { strong: 'Calculated design evidence. ' },
+    'This document is not a declaration of conformity, not a radio approval and not an assessment of RF exposure.',
+  ],
+  [
+    { strong: 'Not a safety argument. ' },
+    'Beam tilt and sidelobes can cause missed or false targets. Verify them independently on hardware.',
+  ],
+  [
+    { strong: 'Export class not assessed. ' },
+    'Whether this design or document is subject to export control was not examined.',
+  ],
+  [
+    { strong: 'Others decide. ' },
+    'Local rules, accredited laboratories and licensed practice decide what may be built, sold and operated.',
+  ],
+];

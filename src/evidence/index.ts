@@ -1,0 +1,3 @@
+export { type EvidenceCheck, type EvidenceResult, type HowKnown, runChecks } from './check.js';
+export { type Method, methods } from './methods.js';
+export { allChecks } from './registry.js';

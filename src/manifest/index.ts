@@ -1,0 +1,8 @@
+export type { FigureDocument } from './documents/fields.js';
+export { LARGEST_FILE, type PackFiles } from './files.js';
+export { manifestSchemas, schemaText } from './json-schema.js';
+export { type LoadResult, loadPack } from './load-pack.js';
+export type * from './model.js';
+export { type PathResult, resolveReference } from './paths.js';
+export { formatProblem, type Problem, sortProblems } from './problem.js';
+export { QUANTITY_NAMES, type QuantityRule, REQUIREMENT_QUANTITIES } from './requirement-quantities.js';

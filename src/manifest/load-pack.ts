@@ -1,0 +1,224 @@
+import type { z } from 'zod';
+import { parseQuantity } from '../quantity/index.js';
+import { type BoardFile, chainBoards, idOf } from './board-chain.js';
+import { boardRules } from './board-rules.js';
+import { checkDocument } from './check.js';
+import { type BoardDocument, boardDocument } from './documents/board-document.js';
+import {
+  type FinishDocument,
+  type FoilDocument,
+  finishesDocument,
+  foilsDocument,
+  type LaminateDocument,
+  laminatesDocument,
+} from './documents/library-documents.js';
+import { type PackDocument, packDocument } from './documents/pack-document.js';
+import { type RequirementsDocument, requirementsDocument } from './documents/requirement-document.js';
+import type { PackFiles } from './files.js';
+import { variantDocument } from './json-schema.js';
+import { finishRules, foilRules, laminateRules } from './library-rules.js';
+import type { Board, Pack } from './model.js';
+import { type OpenFile, Reader } from './open-files.js';
+import { type Path, type Problem, sortProblems } from './problem.js';
+import { requirementRules } from './requirement-rules.js';
+import { boardOf, type Libraries } from './resolve-board.js';
+import { finishOf, foilOf, laminateOf } from './resolve-library.js';
+import { requirementsOf } from './resolve-requirements.js';
+import type { KnownIds } from './rules.js';
+import { child, type Node, nodeAt, problemAt, toData } from './tree.js';
+
+export type LoadResult = { readonly pack: Pack } | { readonly problems: readonly Problem[] };
+
+/** A document whose shape fits its schema, with the file it stands in. */
+interface Checked<D> {
+  readonly file: OpenFile;
+  readonly doc: D;
+}
+
+/**
+ * Reads a pack and everything it refers to.
+ *
+ * @param files     reads files under the root folder
+ * @param packPath  path of the pack file, relative to the root, forward slashes
+ * @returns         the typed pack, or all problems of all files, sorted by place
+ */
+export function loadPack(files: PackFiles, packPath: string): LoadResult {
+  const reader = new Reader(files);
+  const packFile = reader.openPack(packPath);
+  if (packFile === undefined) return { problems: sortProblems(reader.problems) };
+  const { problems } = reader;
+  const pack = checked<PackDocument>(packDocument, packFile, problems);
+
+  const laminates = openLibrary<{ laminates: LaminateDocument[] }>(
+    reader,
+    packFile,
+    'laminates',
+    laminatesDocument,
+    laminateRules,
+  );
+  const foils = openLibrary<{ foils: FoilDocument[] }>(reader, packFile, 'foils', foilsDocument, foilRules);
+  const finishes = openLibrary<{ finishes: FinishDocument[] }>(
+    reader,
+    packFile,
+    'finishes',
+    finishesDocument,
+    finishRules,
+  );
+
+  const requirementFiles = reader.openReferences(packFile, ['requirements']);
+  const sets = requirementFiles.files.map((file) =>
+    checked<RequirementsDocument>(requirementsDocument, file, problems),
+  );
+  for (const set of sets) if (set) problems.push(...requirementRules(set.file.root, set.doc));
+
+  const boards = openBoards(reader, packFile);
+  const { chained, problems: chainProblems } = chainBoards(boards.files, boards.complete);
+  problems.push(...chainProblems);
+  const step = parseQuantity(idOf(nodeAt(packFile.root, ['analysis']) ?? packFile.root, 'frequency_step'), 'frequency');
+  const context = {
+    laminates: laminates.known,
+    foils: foils.known,
+    finishes: finishes.known,
+    ...(step.ok && step.value > 0 ? { frequencyStep: step.value } : {}),
+  };
+  const complete = chained.flatMap((board) => {
+    const merged = checked<BoardDocument>(boardDocument, { path: board.file.path, root: board.root }, problems);
+    if (!merged) return [];
+    problems.push(...boardRules(board.root, merged.doc, context));
+    return [{ doc: merged.doc, board }];
+  });
+
+  const set = sets[0];
+  if (problems.length > 0 || !pack || !set) return { problems: sortProblems(problems) };
+  const libraries: Libraries = {
+    laminates: byId(laminates.checked, (d) => d.laminates, laminateOf),
+    foils: byId(foils.checked, (d) => d.foils, foilOf),
+    finishes: byId(finishes.checked, (d) => d.finishes, finishOf),
+  };
+  const resolved = complete.map(({ doc, board }) =>
+    boardOf(
+      doc,
+      { root: board.root, file: board.file.path, basedOn: board.basedOn, overrides: board.overrides },
+      libraries,
+    ),
+  );
+  return { pack: packOf(pack.doc, resolved, requirementsOf(set.doc, set.file.path), reader) };
+}
+
+function checked<D>(schema: z.ZodType, file: OpenFile, problems: Problem[]): Checked<D> | undefined {
+  const found = checkDocument(schema, file.root);
+  problems.push(...found);
+  if (found.length > 0) return undefined;
+  // The walk reports in our words; zod has the last one, so that no shape slips through a gap between the two.
+  const parsed = schema.safeParse(toData(file.root));
+  if (parsed.success) return { file, doc: parsed.data as D };
+  for (const issue of parsed.error.issues) {
+    const mark = nodeAt(file.root, issue.path as Path)?.mark ?? file.root.mark;
+    problems.push(problemAt(mark, issue.path.join('.'), 'something that does not fit', issue.message));
+  }
+  return undefined;
+}
+
+function openLibrary<D>(
+  reader: Reader,
+  packFile: OpenFile,
+  kind: 'laminates' | 'foils' | 'finishes',
+  schema: z.ZodType,
+  rules: (root: Node, doc: never) => readonly Problem[],
+): { readonly checked: readonly Checked<D>[]; readonly known: KnownIds } {
+  const { files, complete } = reader.openReferences(packFile, ['libraries', kind]);
+  const ids = new Map<string, string>();
+  const documents: Checked<D>[] = [];
+  for (const file of files) {
+    const one = checked<D>(schema, file, reader.problems);
+    if (one) {
+      reader.problems.push(...rules(file.root, one.doc as never));
+      documents.push(one);
+    }
+    const list = child(file.root, kind);
+    for (const [i, item] of (list?.kind === 'list' ? list.items : []).entries()) {
+      uniqueId(item, `${kind}[${i}].id`, file.path, ids, `the ${kind} of a pack have one id each`, reader.problems);
+    }
+  }
+  return { checked: documents, known: { ids: new Set(ids.keys()), complete } };
+}
+
+function openBoards(
+  reader: Reader,
+  packFile: OpenFile,
+): { readonly files: readonly BoardFile[]; readonly complete: boolean } {
+  const { files, complete } = reader.openReferences(packFile, ['boards']);
+  const ids = new Map<string, string>();
+  const boards = files.map((file): BoardFile => {
+    const isVariant = file.root.kind === 'map' && file.root.entries.has('based_on');
+    const found = checkDocument(isVariant ? variantDocument : boardDocument, file.root);
+    reader.problems.push(...found);
+    uniqueId(file.root, 'id', file.path, ids, 'the boards of a pack have one id each', reader.problems);
+    const id = idOf(file.root, 'id');
+    const basedOn = idOf(file.root, 'based_on');
+    return { ...file, sound: found.length === 0, ...(id ? { id } : {}), ...(basedOn ? { basedOn } : {}) };
+  });
+  return { files: boards, complete };
+}
+
+function uniqueId(
+  node: Node,
+  path: string,
+  file: string,
+  ids: Map<string, string>,
+  allowed: string,
+  problems: Problem[],
+): void {
+  const id = idOf(node, 'id');
+  if (id === undefined) return;
+  const first = ids.get(id);
+  if (first === undefined) ids.set(id, file);
+  else
+    problems.push(
+      problemAt(
+        (child(node, 'id') ?? node).mark,
+        path,
+        `"${id}" a second time`,
+        `${allowed}; the first is in ${first}`,
+      ),
+    );
+}
+
+function byId<D, I, M>(
+  documents: readonly Checked<D>[],
+  items: (doc: D) => readonly (I & { readonly id: string })[],
+  make: (item: I, file: string) => M,
+): ReadonlyMap<string, M> {
+  return new Map(
+    documents.flatMap(({ doc, file }) => items(doc).map((item) => [item.id, make(item, file.path)] as const)),
+  );
+}
+
+const STATUS = { draft: 'draft', for_review: 'for review', released: 'released' } as const;
+
+function packOf(doc: PackDocument, boards: readonly Board[], requirements: Pack['requirements'], reader: Reader): Pack {
+  return {
+    id: doc.id,
+    title: doc.title,
+    documentNumber: doc.document_number,
+    revision: doc.revision,
+    date: doc.date,
+    status: STATUS[doc.status],
+    authors: doc.authors,
+    owner: doc.owner,
+    ...(doc.notice === undefined ? {} : { notice: doc.notice }),
+    boards,
+    requirements,
+    analysis: {
+      roughnessModel: doc.analysis.roughness_model,
+      frequencyStep: parseSi(doc.analysis.frequency_step),
+    },
+    inputs: reader.inputs(),
+  };
+}
+
+function parseSi(frequency: string): number {
+  const read = parseQuantity(frequency, 'frequency');
+  if (!read.ok) throw new Error('unchecked frequency step reached the model');
+  return read.value;
+}

@@ -1,0 +1,91 @@
+import { createHash } from 'node:crypto';
+import { quoted } from '../quantity/index.js';
+import type { PackFiles } from './files.js';
+import type { InputFile } from './model.js';
+import { resolveReference } from './paths.js';
+import { dotted, type Path, type Problem } from './problem.js';
+import { readYaml } from './read-yaml.js';
+import { makeSource, type Node, nodeAt, problemAt } from './tree.js';
+
+/** A manifest that could be read as YAML. */
+export interface OpenFile {
+  readonly path: string;
+  readonly root: Node;
+}
+
+/** Reads files once each, remembers their hashes and every problem met. */
+export class Reader {
+  readonly problems: Problem[] = [];
+  private readonly hashes = new Map<string, string>();
+
+  constructor(private readonly files: PackFiles) {}
+
+  /** The pack file itself, named on the command line rather than by a manifest. */
+  openPack(packPath: string): OpenFile | undefined {
+    const resolved = resolveReference('', packPath);
+    const start = { source: makeSource(packPath, ''), offset: 0 };
+    if ('refused' in resolved) {
+      this.problems.push(problemAt(start, '', quoted(packPath), resolved.refused, resolved.fix));
+      return undefined;
+    }
+    const problem = (found: string, allowed: string) => {
+      this.problems.push(problemAt({ source: makeSource(resolved.path, ''), offset: 0 }, '', found, allowed));
+    };
+    return this.open(resolved.path, problem);
+  }
+
+  /** Files named by a list (or one value) of a manifest, in order; those that fail are reported at the name. */
+  openReferences(from: OpenFile, path: Path): { readonly files: readonly OpenFile[]; readonly complete: boolean } {
+    const node = nodeAt(from.root, path);
+    const items = node?.kind === 'list' ? node.items : node ? [node] : [];
+    const files: OpenFile[] = [];
+    let complete = node !== undefined;
+    const seen = new Set<string>();
+    items.forEach((item, i) => {
+      const where = dotted(node?.kind === 'list' ? [...path, i] : path);
+      const problem = (found: string, allowed: string, fix?: string) => {
+        this.problems.push(problemAt(item.mark, where, found, allowed, fix));
+        complete = false;
+      };
+      // Other kinds of value are reported by the check of the document.
+      if (item.kind !== 'scalar' || typeof item.value !== 'string' || item.value === '') {
+        complete = false;
+        return;
+      }
+      const resolved = resolveReference(from.path, item.value);
+      if ('refused' in resolved) return problem(quoted(item.value), resolved.refused, resolved.fix);
+      if (seen.has(resolved.path)) return problem(`${quoted(item.value)} a second time`, 'a file is listed once');
+      seen.add(resolved.path);
+      const file = this.open(resolved.path, problem, item.value);
+      if (file) files.push(file);
+      else complete = false;
+    });
+    return { files, complete };
+  }
+
+  private open(path: string, problem: (found: string, allowed: string) => void, name = path): OpenFile | undefined {
+    const bytes = this.files.read(path);
+    if (bytes === undefined) {
+      problem(quoted(name), `a file that exists; there is no ${path} under the root folder`);
+      return undefined;
+    }
+    if (!(bytes instanceof Uint8Array)) {
+      problem(quoted(name), `a file that may be read; ${bytes.refused}`);
+      return undefined;
+    }
+    this.hashes.set(path, createHash('sha256').update(bytes).digest('hex'));
+    const read = readYaml(path, bytes);
+    if ('problems' in read) {
+      this.problems.push(...read.problems);
+      return undefined;
+    }
+    return { path, root: read.root };
+  }
+
+  /** Every file that was read, sorted by path. */
+  inputs(): readonly InputFile[] {
+    return [...this.hashes]
+      .map(([path, sha256]) => ({ path, sha256 }))
+      .sort((a, b) => (a.path < b.path ? -1 : a.path > b.path ? 1 : 0));
+  }
+}

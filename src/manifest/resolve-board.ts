@@ -1,0 +1,142 @@
+import type { Dimension } from '../quantity/index.js';
+import type { BoardDocument } from './documents/board-document.js';
+import type { FigureDocument } from './documents/fields.js';
+import { figureOf, si } from './figures.js';
+import type { Board, ColumnLayout, FeedPath, Figure, Finish, Foil, Laminate, Link, StackUp, Texture } from './model.js';
+import { expandPieces, patchCount } from './pieces.js';
+import { dotted, type Path } from './problem.js';
+import { declaredOf, textureOf } from './resolve-library.js';
+import { type Node, nodeAt } from './tree.js';
+
+export interface Libraries {
+  readonly laminates: ReadonlyMap<string, Laminate>;
+  readonly foils: ReadonlyMap<string, Foil>;
+  readonly finishes: ReadonlyMap<string, Finish>;
+}
+
+/** A complete board as read: its own keys over those of the boards it is based on. */
+export interface BoardInput {
+  readonly root: Node;
+  readonly file: string;
+  readonly basedOn: readonly string[];
+  readonly overrides: readonly string[];
+}
+
+function found<T>(map: ReadonlyMap<string, T>, id: string): T {
+  const item = map.get(id);
+  if (item === undefined) throw new Error(`unchecked id ${id} reached the model`);
+  return item;
+}
+
+/** A checked board document as the model holds it. */
+export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Libraries): Board {
+  // An inherited figure names the file in which it stands.
+  const where = (path: Path) => `${nodeAt(input.root, path)?.mark.source.path ?? input.file}: ${dotted(path)}`;
+  const figure = (figureDoc: FigureDocument, dimension: Dimension | 'number', path: Path) =>
+    figureOf(figureDoc, dimension, where(path));
+  return {
+    id: doc.id,
+    title: doc.title,
+    ...(doc.description === undefined ? {} : { description: doc.description }),
+    basedOn: input.basedOn,
+    file: input.file,
+    overrides: input.overrides,
+    stackUp: stackUpOf(doc.stack_up, libraries, figure, where),
+    columns: columnsOf(doc.array),
+    pitch: si(doc.array.pitch, 'length'),
+    feed: feedOf(doc.feed, doc.array.columns, figure),
+    referenceImpedance: doc.reference_impedance === 'line' ? 'line' : si(doc.reference_impedance, 'resistance'),
+    band: { low: si(doc.band.low, 'frequency'), high: si(doc.band.high, 'frequency') },
+    temperature: {
+      lowC: si(doc.temperature.low, 'temperature'),
+      nominalC: si(doc.temperature.nominal, 'temperature'),
+      highC: si(doc.temperature.high, 'temperature'),
+    },
+    tolerances: doc.tolerances?.etch ? { etch: figure(doc.tolerances.etch, 'length', ['tolerances', 'etch']) } : {},
+    ...(doc.cost ? { cost: doc.cost } : {}),
+    declared: declaredOf(doc.declared),
+  };
+}
+
+type MakeFigure = (doc: FigureDocument, dimension: Dimension | 'number', path: Path) => Figure;
+
+function stackUpOf(
+  doc: BoardDocument['stack_up'],
+  libraries: Libraries,
+  figure: MakeFigure,
+  where: (path: Path) => string,
+): StackUp {
+  const thickness = (layer: { readonly thickness: FigureDocument }, key: string) =>
+    figure(layer.thickness, 'length', ['stack_up', key, 'thickness']);
+  const stripFoil = found(libraries.foils, doc.strip.foil);
+  const groundFoil = found(libraries.foils, doc.ground.foil);
+  const face = (foil: Foil, kind: 'treated' | 'untreated') =>
+    kind === 'treated' ? foil.treatedFace : foil.untreatedFace;
+  const outer = doc.strip.outer_face;
+  // The foil's outer face is the one that does not lie towards the laminate.
+  const outerTexture: Texture =
+    outer.texture === undefined
+      ? face(stripFoil, doc.strip.dielectric_face === 'treated' ? 'untreated' : 'treated')
+      : textureOf(outer.texture, where(['stack_up', 'strip', 'outer_face', 'texture']));
+  return {
+    ...(doc.cover
+      ? {
+          cover: {
+            material: doc.cover.material,
+            permittivity: figure(doc.cover.permittivity, 'number', ['stack_up', 'cover', 'permittivity']),
+            lossTangent: figure(doc.cover.loss_tangent, 'number', ['stack_up', 'cover', 'loss_tangent']),
+            thickness: thickness(doc.cover, 'cover'),
+          },
+        }
+      : {}),
+    strip: {
+      foil: stripFoil,
+      thickness: thickness(doc.strip, 'strip'),
+      finish: found(libraries.finishes, doc.strip.finish),
+      outerFace: { kind: outer.kind === 'micro_etched' ? 'micro-etched' : outer.kind, texture: outerTexture },
+      dielectricFace: { kind: doc.strip.dielectric_face, texture: face(stripFoil, doc.strip.dielectric_face) },
+    },
+    laminate: {
+      material: found(libraries.laminates, doc.laminate.material),
+      thickness: thickness(doc.laminate, 'laminate'),
+    },
+    ground: {
+      foil: groundFoil,
+      thickness: thickness(doc.ground, 'ground'),
+      dielectricFace: { kind: doc.ground.dielectric_face, texture: face(groundFoil, doc.ground.dielectric_face) },
+    },
+    below: (doc.below ?? []).map(({ name, thickness: t }) => ({ name, thickness: si(t, 'length') })),
+  };
+}
+
+const lineOf = (doc: { readonly width: string; readonly length: string }): Link => ({
+  width: si(doc.width, 'length'),
+  length: si(doc.length, 'length'),
+});
+
+function columnsOf(doc: BoardDocument['array']): readonly ColumnLayout[] {
+  const count = patchCount(doc.patches);
+  const pitch = si(doc.pitch, 'length');
+  const patches = expandPieces(doc.patches, count);
+  const links = doc.links === undefined ? [] : expandPieces(doc.links, count - 1);
+  return Array.from({ length: doc.columns }, (_, i) => ({
+    y: (i - (doc.columns - 1) / 2) * pitch,
+    x: doc.offset_x ? si(doc.offset_x[i]!, 'length') : 0,
+    feedLine: lineOf(doc.feed_line),
+    patches,
+    links,
+  }));
+}
+
+function feedOf(doc: BoardDocument['feed'], columns: number, figure: MakeFigure): readonly FeedPath[] {
+  return Array.from({ length: columns }, (_, i) => {
+    const path = Array.isArray(doc.path) ? doc.path[i]! : doc.path;
+    const place: Path = Array.isArray(doc.path) ? ['feed', 'path', i, 'loss'] : ['feed', 'path', 'loss'];
+    return {
+      amplitude: doc.amplitude[i]!,
+      phase: doc.phase ? si(doc.phase[i]!, 'angle') : 0,
+      ...(path.loss ? { lossDb: figure(path.loss, 'level', place) } : {}),
+      ...(path.line ? { line: lineOf(path.line) } : {}),
+    };
+  });
+}

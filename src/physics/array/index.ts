@@ -1,0 +1,1 @@
+export { type ArrayFigures, arrayFigures, incidentWaves } from './array-figures.js';

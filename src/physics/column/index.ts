@@ -1,0 +1,15 @@
+export type {
+  ColumnConditions,
+  ColumnEngine,
+  ColumnGeometry,
+  ColumnProblem,
+  ColumnSolution,
+  ExcitedArray,
+  ExcitedEdges,
+  PowerBudget,
+  RadiatingEdge,
+  Slab,
+} from './engine.js';
+export { edgeNetwork } from './network.js';
+export { NETWORK_CONSTANTS } from './network-constants.js';
+export { slabGuidesOneWave, slabSpectrum, tm0Wavenumber } from './slab-spectrum.js';

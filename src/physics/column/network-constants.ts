@@ -1,0 +1,32 @@
+/**
+ * Constants of the edge network, provisional: found by others of this project's authors by fitting independent
+ * full-wave solutions of isolated patches and one-patch two-ports (never columns), and stated to hold in `range`.
+ * They are to be derived anew from this project's own full wave once it has one.
+ */
+export const NETWORK_CONSTANTS = {
+  source: 'fit to independent full-wave solutions of single patches and one-patch two-ports, 71 to 83 GHz, 2026',
+  /** Step reactance over that of the planar-cavity sum of higher modes. */
+  stepReactance: 0.59,
+  /** Weight of the patch's effective width in the cavity width: We = W + 0.4 (weff − W). */
+  cavityWidening: 0.4,
+  /** Magnetic moment of an edge over its effective width. */
+  edgeMoment: 0.893,
+  /** Part of the attached line's effective width that it silences. */
+  coveredMoment: 0.956,
+  /**
+   * Open-end length over that of Kirschning, Jansen and Koster. The fit on isolated patches gave 1.094; 1.115, found on
+   * columns of two laminates, halves the error of column reflections and held on laminates and layouts kept apart.
+   */
+  openEnd: 1.115,
+  /** Part of the open-end susceptance that an attached line removes, per effective width ratio. */
+  coveredSusceptance: 1.249,
+  range: {
+    /** k0 h */
+    electricalHeight: [0.16, 0.33],
+    permittivity: [2.9, 3.6],
+    /** m */
+    patchWidth: [0.5e-3, 1.45e-3],
+    /** w/h of feed line and links */
+    lineWidthOverHeight: [0.6, 1.7],
+  },
+} as const;

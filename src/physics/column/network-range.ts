@@ -1,0 +1,33 @@
+/** Says where a layout lies outside the range in which the network's constants were compared with full wave. */
+import { SPEED_OF_LIGHT } from '../constants.js';
+import type { ValidityFlag } from '../validity.js';
+import type { ColumnProblem } from './engine.js';
+import { NETWORK_CONSTANTS } from './network-constants.js';
+
+const MODEL = 'edge network of the patch columns';
+
+export function networkFlags(problem: ColumnProblem, frequency: number): ValidityFlag[] {
+  const { range } = NETWORK_CONSTANTS;
+  const { slab, columns } = problem;
+  const flags: ValidityFlag[] = [];
+  const check = (code: string, what: string, values: readonly number[], limits: readonly [number, number]): void => {
+    const low = Math.min(...values);
+    const high = Math.max(...values);
+    if (low >= limits[0] * (1 - 1e-9) && high <= limits[1] * (1 + 1e-9)) return;
+    const found = low === high ? low.toPrecision(3) : `${low.toPrecision(3)} to ${high.toPrecision(3)}`;
+    flags.push({
+      code,
+      severity: 'outside',
+      model: MODEL,
+      text: `${what} is ${found}; the constants of the network were compared with full wave from ${limits[0]} to ${limits[1]}. Reflection, beam direction and gain may err by more than stated.`,
+    });
+  };
+  const electrical = (2 * Math.PI * frequency * slab.height) / SPEED_OF_LIGHT;
+  check('column.k0h', 'Electrical height k0h of the laminate', [electrical], range.electricalHeight);
+  check('column.permittivity', 'Permittivity of the laminate', [slab.permittivity], range.permittivity);
+  const widths = columns.flatMap((c) => c.patches.map((p) => p.width * 1e3));
+  check('column.patch-width', 'Patch width in mm', widths, [range.patchWidth[0] * 1e3, range.patchWidth[1] * 1e3]);
+  const lines = columns.flatMap((c) => [c.feedLineWidth, ...c.links.map((l) => l.width)]).map((w) => w / slab.height);
+  check('column.line-width', 'Line width over laminate height', lines, range.lineWidthOverHeight);
+  return flags;
+}

@@ -1,0 +1,3 @@
+export { type IndexEntry, renderIndex } from './index-page.js';
+export { renderPack } from './pack.js';
+export { styleSheet } from './style.js';

@@ -1,0 +1,92 @@
+import { statusShapeBox, statusShapes } from '../../chart/status-shapes.js';
+import type { Block, Cell, Inline, Status, TableBlock } from '../../dossier/document.js';
+import { figureSvg } from './figure.js';
+import { statusClass } from './style.js';
+
+/** What templates print. Every field is there, so that a template that asks for another one fails. */
+export interface InlineView {
+  /** Name of the partial that prints it. */
+  readonly partial: string;
+  readonly text: string;
+  readonly href: string;
+  readonly status: StatusView | null;
+}
+
+export interface StatusView {
+  readonly word: Status;
+  readonly className: string;
+  readonly shape: string;
+  readonly box: number;
+}
+
+/** Resolves a link of the document, or throws where it leads nowhere. */
+export type LinkTo = (page: string, anchor: string | undefined) => string;
+
+/** Gives an element of the page its id. */
+export type TakeId = (id: string) => string;
+
+export function statusView(status: Status): StatusView {
+  return { word: status, className: statusClass(status), shape: statusShapes[status], box: statusShapeBox };
+}
+
+export function inlineView(part: Inline, linkTo: LinkTo): InlineView {
+  const view = (partial: string, text: string, more: Partial<InlineView> = {}): InlineView => ({
+    partial,
+    text,
+    href: '',
+    status: null,
+    ...more,
+  });
+  if (typeof part === 'string') return view('inline-text', part);
+  if ('strong' in part) return view('inline-strong', part.strong);
+  if ('code' in part) return view('inline-code', part.code);
+  if ('status' in part) return view('inline-status', '', { status: statusView(part.status) });
+  return view('inline-link', part.text, { href: linkTo(part.page, part.anchor) });
+}
+
+export const inlineViews = (content: readonly Inline[], linkTo: LinkTo) =>
+  content.map((part) => inlineView(part, linkTo));
+
+/** A block ready for its partial; ids are taken in reading order. */
+export async function blockView(block: Block, linkTo: LinkTo, takeId: TakeId): Promise<object> {
+  const inline = (content: readonly Inline[]) => inlineViews(content, linkTo);
+  const partial = `block-${block.kind}`;
+  switch (block.kind) {
+    case 'prose':
+      return { partial, content: inline(block.content) };
+    case 'list':
+      return { partial, ordered: block.ordered === true, items: block.items.map(inline) };
+    case 'facts':
+      return {
+        partial,
+        id: takeId(block.id),
+        items: block.items.map((item) => ({ label: item.label, content: inline(item.content) })),
+      };
+    case 'verdict':
+      return { partial, status: statusView(block.status), content: inline(block.content) };
+    case 'caution':
+      return { partial, title: block.title, paragraphs: block.content.map(inline) };
+    case 'table':
+      return { partial, id: takeId(block.id), ...tableView(block, inline) };
+    case 'figure': {
+      const id = takeId(block.id);
+      const { title, reading } = block;
+      return { partial, id, title, reading, svg: await figureSvg(block, id) };
+    }
+  }
+}
+
+function tableView(table: TableBlock, inline: (content: readonly Inline[]) => readonly InlineView[]) {
+  const align = (numeric: boolean | undefined) => (numeric ? 'number' : 'words');
+  const cell = (entry: Cell) => ({ align: align(entry.numeric), content: inline(entry.content) });
+  return {
+    caption: table.caption,
+    columns: table.columns.map((column) => ({ title: column.title, align: align(column.numeric) })),
+    rows: table.rows.map((row) => {
+      const cells = row.map(cell);
+      return table.rowHeaders ? { header: cells[0] ?? null, cells: cells.slice(1) } : { header: null, cells };
+    }),
+    empty: table.rows.length === 0,
+    span: table.columns.length,
+  };
+}

@@ -1,0 +1,1 @@
+export { type Attachment, type PdfContext, renderPdf } from './render-pdf.js';

@@ -1,0 +1,39 @@
+/** What pdfkit 0.20 offers and its published types lack. */
+declare namespace PDFKit.Mixins {
+  interface StructureElementOptions {
+    /** Left, top, right, bottom in points from the top left. */
+    bbox?: [number, number, number, number];
+    placement?: 'Block' | 'Inline';
+    scope?: 'Column' | 'Row' | 'Both';
+  }
+  interface AnnotationOption {
+    structParent?: PDFKit.PDFStructureElement;
+  }
+  interface PDFVector {
+    dash(lengths: number[], options?: { phase?: number }): this;
+  }
+  interface PDFAttachmentOptions {
+    relationship?: 'Source' | 'Data' | 'Alternative' | 'Supplement' | 'Unspecified';
+  }
+}
+
+declare namespace PDFKit {
+  interface OutlineOptions {
+    expanded?: boolean;
+    pageNumber?: number;
+    fit?: boolean;
+    /** Distances that pdfkit takes off the top and the right edge of the page. */
+    top?: number;
+    left?: number;
+  }
+  interface PDFOutline {
+    options: OutlineOptions;
+    addItem(title: string, options?: OutlineOptions): PDFOutline;
+  }
+  interface PDFDocument {
+    /** The font in use; `font` is the parsed file. */
+    _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean } };
+    /** Writes the descriptive part of the XMP packet. */
+    _addInfo(): void;
+  }
+}

@@ -1,0 +1,213 @@
+import type { Cell, TableBlock } from '../../dossier/document.js';
+import type { BlockContext } from './blocks.js';
+import { columnWidths } from './column-widths.js';
+import type { Box } from './flow.js';
+import { bodyWidth, colours, page, type TypeSize, type } from './layout.js';
+import { type Line, LineSetter } from './lines.js';
+import { paintBareLine, paintLine } from './paint-line.js';
+import type { Element, Press } from './press.js';
+import { bold, inlineRuns, plain, type Run, textRuns } from './runs.js';
+
+const padX = 4;
+const padY = 3;
+/** A table that does not fit is set smaller, in these steps of its size. */
+const shrink = [1, 0.92, 0.84, 0.76];
+/** Figures longer than this may wrap. */
+const longestFigure = 110;
+
+interface Column {
+  readonly x: number;
+  readonly width: number;
+  readonly numeric: boolean;
+}
+interface CellText {
+  readonly runs: readonly Run[];
+  readonly numeric: boolean;
+}
+interface SetCell {
+  readonly lines: readonly Line[];
+  readonly numeric: boolean;
+}
+
+/**
+ * A table with its caption. The head stands again on every page; a row is never cut, unless it is taller than a page:
+ * then it goes on, line by line, on the next page under the head.
+ */
+export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight: number): Box[] {
+  const { press } = context;
+  const count = Math.max(1, table.columns.length, ...table.rows.map((row) => row.length));
+  const numericColumn = (i: number) => table.columns[i]?.numeric === true;
+  const heads: CellText[] = Array.from({ length: count }, (_, i) => ({
+    runs: textRuns(table.columns[i]?.title ?? '', bold),
+    numeric: numericColumn(i),
+  }));
+  const cellOf = (cell: Cell | undefined, i: number): CellText => ({
+    runs: inlineRuns(cell?.content ?? [], plain, context),
+    numeric: cell?.numeric ?? numericColumn(i),
+  });
+  const empty: Cell[] = [{ content: ['none'] }];
+  const rows = (table.rows.length === 0 ? [empty] : table.rows).map((row) =>
+    Array.from({ length: count }, (_, i) => cellOf(row[i], i)),
+  );
+
+  const { columns, set } = layColumns(press, table, heads, rows);
+  const element = press.element('Table', context.parent);
+  const caption = captionBoxes(context, table, element);
+  const setter = new LineSetter(press, set.size);
+  const setRow = (cells: readonly CellText[]): SetCell[] =>
+    cells.map((cell, i) => ({ lines: setter.lines(cell.runs, columns[i].width - 2 * padX), numeric: cell.numeric }));
+
+  const painter = new RowPainter(press, columns, set);
+  const head = setRow(heads);
+  const headHeight = painter.height(head);
+  const repeat =
+    headHeight < bodyHeight / 3
+      ? { height: headHeight, paint: (top: number) => painter.repeatHead(head, top) }
+      : undefined;
+  const room = bodyHeight - (repeat?.height ?? 0);
+  const headBoxes = painter.boxes(head, bodyHeight, press.element('TR', element), () => ['TH', 'Column']);
+  const bodyRows = rows.map((cells) =>
+    painter
+      .boxes(setRow(cells), room, press.element('TR', element), (i) =>
+        table.rowHeaders && i === 0 ? ['TH', 'Row'] : ['TD', undefined],
+      )
+      .map((box) => ({ ...box, repeat })),
+  );
+  return [
+    ...caption,
+    ...headBoxes.map((box) => ({ ...box, keep: true })),
+    // The last row is not left alone on a page.
+    ...bodyRows.flatMap((boxes, i) =>
+      i === bodyRows.length - 2 ? boxes.map((box) => ({ ...box, keep: true })) : boxes,
+    ),
+  ];
+}
+
+function captionBoxes(context: BlockContext, table: TableBlock, element: Element): Box[] {
+  const { press } = context;
+  const caption = press.element('Caption', element);
+  const lines = new LineSetter(press, type.label.size).lines(textRuns(table.caption, bold), bodyWidth);
+  return lines.map((line, i) => ({
+    before: i === 0 ? 12 : 0,
+    height: type.label.leading + (i === lines.length - 1 ? 3 : 0),
+    keep: true,
+    paint: (top) => {
+      if (i === 0) press.markPlace(table.id, top);
+      paintLine(press, line, type.label, page.left, top, caption, 'Caption');
+    },
+  }));
+}
+
+/** The largest size of type at which no word breaks, and the columns at that size. */
+function layColumns(
+  press: Press,
+  table: TableBlock,
+  heads: readonly CellText[],
+  rows: readonly (readonly CellText[])[],
+): { readonly columns: Column[]; readonly set: TypeSize } {
+  const measured = heads.map((head, i) => {
+    const setter = new LineSetter(press, 1);
+    const cells = [head, ...rows.map((row) => row[i])];
+    let [least, most] = [0, 0];
+    for (const cell of cells) {
+      const { widest, whole } = setter.extent(cell.runs);
+      const unbroken = cell.numeric && cell !== head && whole * type.table.size <= longestFigure;
+      least = Math.max(least, unbroken ? whole : widest);
+      most = Math.max(most, whole);
+    }
+    return { least, most };
+  });
+  const wishes = (size: number) =>
+    measured.map(({ least, most }, i) => ({
+      least: least * size + 2 * padX + 0.5,
+      most: most * size + 2 * padX + 0.5,
+      hint: Math.max(0.1, table.columns[i]?.width ?? 1),
+    }));
+  const sizes = shrink.map((factor) => type.table.size * factor);
+  const size =
+    sizes.find((s) => wishes(s).reduce((sum, wish) => sum + wish.least, 0) <= bodyWidth) ?? sizes[sizes.length - 1];
+  const widths = columnWidths(wishes(size), bodyWidth);
+  let x: number = page.left;
+  const columns = widths.map((width, i) => {
+    const column = { x, width, numeric: table.columns[i]?.numeric === true };
+    x += width;
+    return column;
+  });
+  return { columns, set: { size, leading: (type.table.leading / type.table.size) * size } };
+}
+
+class RowPainter {
+  constructor(
+    private readonly press: Press,
+    private readonly columns: readonly Column[],
+    private readonly set: TypeSize,
+  ) {}
+
+  height(cells: readonly SetCell[]): number {
+    return Math.max(...cells.map((cell) => cell.lines.length)) * this.set.leading + 2 * padY;
+  }
+
+  private left(i: number, cell: SetCell, line: Line): number {
+    const { x, width } = this.columns[i];
+    return cell.numeric ? x + width - padX - line.width : x + padX;
+  }
+
+  private rule(top: number, colour: string, width: number): void {
+    const { doc } = this.press;
+    doc.moveTo(page.left, top).lineTo(page.right, top).lineWidth(width).undash().stroke(colour);
+  }
+
+  private headGround(top: number, height: number): void {
+    this.press.doc.rect(page.left, top, bodyWidth, height).fill(colours.wash);
+    this.rule(top + height, colours.muted, 0.6);
+  }
+
+  repeatHead(cells: readonly SetCell[], top: number): void {
+    this.press.artifact('Pagination', () => {
+      this.headGround(top, this.height(cells));
+      for (const [i, cell] of cells.entries()) {
+        for (const [n, line] of cell.lines.entries()) {
+          paintBareLine(this.press, line, this.set, this.left(i, cell, line), top + padY + n * this.set.leading);
+        }
+      }
+    });
+  }
+
+  /** One box per row; several where the row is taller than the room. */
+  boxes(
+    cells: readonly SetCell[],
+    room: number,
+    row: Element,
+    kind: (column: number) => readonly ['TH', 'Column' | 'Row'] | readonly ['TD', undefined],
+  ): Box[] {
+    const { press, set } = this;
+    const elements = cells.map((_, i) => {
+      const [tag, scope] = kind(i);
+      return press.element(tag, row, scope === undefined ? {} : { scope });
+    });
+    const lines = Math.max(...cells.map((cell) => cell.lines.length));
+    const perBox = Math.max(1, Math.floor((room - 2 * padY) / set.leading));
+    const boxes: Box[] = [];
+    for (let start = 0; start < lines; start += perBox) {
+      const end = Math.min(lines, start + perBox);
+      const height = (end - start) * set.leading + 2 * padY;
+      boxes.push({
+        height,
+        paint: (top) => {
+          press.artifact('Layout', () => {
+            if (kind(0)[1] === 'Column') this.headGround(top, height);
+            else this.rule(top + height, colours.rule, 0.5);
+          });
+          for (const [i, cell] of cells.entries()) {
+            for (const [n, line] of cell.lines.slice(start, end).entries()) {
+              if (line.pieces.length === 0) continue;
+              const y = top + padY + n * set.leading;
+              paintLine(press, line, set, this.left(i, cell, line), y, elements[i], kind(i)[0]);
+            }
+          }
+        },
+      });
+    }
+    return boxes;
+  }
+}

@@ -1,0 +1,161 @@
+import type { QuantityName } from '../manifest/model.js';
+
+/**
+ * How far the column network may be from the truth, by quantity. One file, so that a reader can check every number of
+ * the uncertainty against its ground.
+ *
+ * `compared`: from the project's own comparison of the network with independent full-wave solutions of series-fed
+ * columns (6 to 12 patches, permittivity 2.9 to 3.6, 0.10 to 0.20 mm laminate, 76 to 81 GHz). `argued`: follows from
+ * compared figures by the argument given. Neither is a comparison with a measured board.
+ */
+export interface EngineAccuracy {
+  readonly quantity: QuantityName;
+  /** For print: the figure and how it applies. */
+  readonly statement: string;
+  readonly ground: 'compared' | 'argued';
+  readonly source: string;
+  /** How far the true value may lie above and below the value found, in the unit of the quantity, both ≥ 0. */
+  readonly spread: (value: number, context: AccuracyContext) => Spread;
+}
+
+export interface Spread {
+  readonly up: number;
+  readonly down: number;
+}
+
+export interface AccuracyContext {
+  /** Magnitude of the reflection of the driven array where the worst value occurs. */
+  readonly reflection: number;
+}
+
+const FULL_WAVE = 'own comparison of the network with independent full-wave solutions of series-fed columns';
+
+/** Largest |ΔS11| found on columns is 0.12, after all five corrections 0.04 to 0.12; 0.10 is used. */
+export const REFLECTION_ERROR = 0.1;
+/** Two neighbours of about 0.05 each, their coupling overstated by up to 2.8 dB: 2 × 0.05 × 0.38, added to the passive figure. */
+export const ACTIVE_REFLECTION_ERROR = 0.14;
+/** Beam direction and pattern edges, rad. */
+export const DIRECTION_ERROR = (0.5 * Math.PI) / 180;
+
+const GAIN_ERROR_DB = 0.35;
+/** Lower bounds of a reflection go down to a perfect match; −60 dB stands for it, to keep numbers finite. */
+const PERFECT_MATCH = 1e-3;
+
+const both = (amount: number): Spread => ({ up: amount, down: amount });
+
+/** A complex error of fixed magnitude turned into dB at the value found: larger downwards than upwards. */
+export function reflectionSpread(valueDb: number, error: number): Spread {
+  const magnitude = 10 ** (valueDb / 20);
+  const lowest = Math.min(magnitude, Math.max(magnitude - error, PERFECT_MATCH));
+  return {
+    up: 20 * Math.log10((magnitude + error) / magnitude),
+    down: 20 * Math.log10(magnitude / lowest),
+  };
+}
+
+/** 1.0 dB down to −20 dB, 2.0 dB at −25 dB, linear between and below: about a constant error of the far field. */
+export const sidelobeSpread = (valueDb: number): Spread => both(1 + Math.max(0, -20 - valueDb) / 5);
+
+/** Gain's own figure and what an error of the reflection does to the mismatch, root sum of squares. */
+function realizedGainSpread(reflection: number): Spread {
+  const mismatchDb = (magnitude: number) => 10 * Math.log10(1 - Math.min(magnitude, 0.99) ** 2);
+  const here = mismatchDb(reflection);
+  return {
+    up: Math.hypot(GAIN_ERROR_DB, mismatchDb(Math.max(0, reflection - REFLECTION_ERROR)) - here),
+    down: Math.hypot(GAIN_ERROR_DB, here - mismatchDb(reflection + REFLECTION_ERROR)),
+  };
+}
+
+export const ENGINE_ACCURACY: readonly EngineAccuracy[] = [
+  {
+    quantity: 'reflection',
+    statement: '±0.10 as a complex number, turned into dB at the value found',
+    ground: 'compared',
+    source: `${FULL_WAVE}: |ΔS11| 0.04 to 0.12`,
+    spread: (value) => reflectionSpread(value, REFLECTION_ERROR),
+  },
+  {
+    quantity: 'active_reflection',
+    statement: '±0.14 as a complex number, turned into dB at the value found',
+    ground: 'argued',
+    source:
+      'passive figure of 0.10 plus 0.04: two neighbours coupled by about 0.05 each, the network overstating that by up to 2.8 dB',
+    spread: (value) => reflectionSpread(value, ACTIVE_REFLECTION_ERROR),
+  },
+  {
+    quantity: 'beam_direction',
+    statement: '±0.5 deg',
+    ground: 'compared',
+    source: `${FULL_WAVE}: 0.2 to 0.6 deg`,
+    spread: () => both(0.5),
+  },
+  {
+    quantity: 'half_power_beamwidth',
+    statement: '±0.5 deg or ±4 %, whichever is larger',
+    ground: 'argued',
+    source:
+      'sidelobe errors of 0.4 to 1 dB mean errors of a few per cent in the aperture distribution, which move the beamwidth by about as much',
+    spread: (value) => both(Math.max(0.5, 0.04 * Math.abs(value))),
+  },
+  {
+    quantity: 'sidelobe_level',
+    statement: '±1.0 dB down to −20 dB, ±2.0 dB at −25 dB, linear between and below',
+    ground: 'compared',
+    source: `${FULL_WAVE}: 0.3 to 0.65 dB uniform, up to 1.9 dB tapered; below −25 dB continued by argument`,
+    spread: (value) => sidelobeSpread(value),
+  },
+  {
+    quantity: 'pattern_mask',
+    statement:
+      'as sidelobe level at the lowest piece of the mask; besides, the pattern is moved by ±0.5 deg and compared again',
+    ground: 'argued',
+    source: 'figures of sidelobe level and beam direction',
+    spread: (lowestPiece) => sidelobeSpread(lowestPiece),
+  },
+  {
+    quantity: 'directivity',
+    statement: '±0.15 dB',
+    ground: 'compared',
+    source: `${FULL_WAVE}: 0.05 to 0.15 dB`,
+    spread: () => both(0.15),
+  },
+  {
+    quantity: 'gain',
+    statement: '±0.35 dB',
+    ground: 'compared',
+    source: `${FULL_WAVE}: up to 0.37 dB`,
+    spread: () => both(GAIN_ERROR_DB),
+  },
+  {
+    quantity: 'realized_gain',
+    statement: '±0.35 dB of gain with the effect of ±0.10 of reflection on the mismatch, root sum of squares',
+    ground: 'argued',
+    source: 'figures of gain and reflection',
+    spread: (_, { reflection }) => realizedGainSpread(reflection),
+  },
+  {
+    quantity: 'radiation_efficiency',
+    statement: '±0.35 dB of the value, that is +8.4 % and −7.7 %',
+    ground: 'argued',
+    source: 'figure of gain, which is directivity times efficiency; directivity is the better known of the two',
+    spread: (value) => ({
+      up: Math.abs(value) * (10 ** (GAIN_ERROR_DB / 10) - 1),
+      down: Math.abs(value) * (1 - 10 ** (-GAIN_ERROR_DB / 10)),
+    }),
+  },
+  {
+    quantity: 'line_loss',
+    statement: '+10 % and −3 % of the value',
+    ground: 'compared',
+    source:
+      'own full-wave solutions of lines against the quasi-static section: conductor loss 3 to 10 % higher, dielectric loss 1.5 to 4 % higher; section and current shares within 1 %',
+    spread: (value) => ({ up: 0.1 * Math.abs(value), down: 0.03 * Math.abs(value) }),
+  },
+];
+
+/** @throws RangeError for a quantity that is not computed */
+export function engineAccuracyOf(quantity: QuantityName): EngineAccuracy {
+  const found = ENGINE_ACCURACY.find((entry) => entry.quantity === quantity);
+  if (found === undefined) throw new RangeError(`no engine accuracy for ${quantity}`);
+  return found;
+}

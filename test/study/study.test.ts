@@ -1,0 +1,108 @@
+import { describe, expect, it } from 'vitest';
+import { planBoard, studyBoard, tolerances } from '../../src/study/index.js';
+import { figure, fixtureBoard } from './fixture-board.js';
+
+const analysis = { roughnessModel: 'hammerstad', frequencyStep: 1e9 } as const;
+
+describe('study of a board', () => {
+  const board = fixtureBoard();
+  const study = studyBoard(board, analysis);
+
+  it('covers band and temperature, with the band centre among the frequencies', () => {
+    expect(study.nominal.points.map((p) => p.temperatureC)).toEqual([-40, -40, -40, 25, 25, 25, 85, 85, 85]);
+    expect(study.nominal.points.slice(3, 6).map((p) => p.frequency)).toEqual([76e9, 76.5e9, 77e9]);
+  });
+
+  it('shares the accepted power without remainder', () => {
+    for (const { shares, powerResidual } of study.nominal.points) {
+      expect(Object.values(shares).reduce((a, b) => a + b, 0)).toBeCloseTo(1, 9);
+      expect(Math.abs(powerResidual)).toBeLessThan(1e-9);
+    }
+    expect(study.losslessClosure).toBeCloseTo(1, 2);
+  });
+
+  it('makes gain from directivity, efficiency, feed and mismatch, and nothing else', () => {
+    for (const p of study.nominal.points) {
+      expect(p.gain).toBeCloseTo(p.directivity * p.radiationEfficiency * p.feedTransmission, 9);
+      expect(p.realizedGain).toBeCloseTo(p.gain * p.mismatch, 9);
+      // 0.8 dB given and 1 mm of feed line of some 0.4 to 0.8 dB/cm.
+      expect(-10 * Math.log10(p.feedTransmission)).toBeGreaterThan(0.8);
+      expect(-10 * Math.log10(p.feedTransmission)).toBeLessThan(0.9);
+    }
+  });
+
+  it('loses more when hot and more with a rougher model', () => {
+    const at = (temperature: number) =>
+      study.nominal.points.find((p) => p.temperatureC === temperature && p.frequency === 76.5e9)!;
+    expect(at(85).lineLossDbPerM).toBeGreaterThan(at(-40).lineLossDbPerM);
+    const centre = study.models.map(({ sweep }) => sweep.points[4].lineLossDbPerM);
+    expect(centre[2]).toBeGreaterThan(centre[0]);
+  });
+
+  it('moves a figure that two faces share once, and leaves out what has no spread', () => {
+    const ids = tolerances(board).map((t) => t.id);
+    expect(ids).toEqual([
+      'laminate-permittivity',
+      'laminate-loss-tangent',
+      'laminate-thickness',
+      'strip-thickness',
+      'texture-of-the-face-to-the-laminate',
+      'texture-of-the-outer-face',
+      'feed-path-loss',
+      'etched-outline',
+    ]);
+    const texture = tolerances(board)[4];
+    expect(texture.high.undersideRq).toBeCloseTo(0.48e-6, 12);
+    expect(texture.high.groundRq).toBeCloseTo(0.48e-6, 12);
+  });
+
+  it('gives the same hash for the same inputs and another for others', () => {
+    expect(studyBoard(fixtureBoard({ patches: 2, columns: 1 }), analysis).hash).not.toBe(study.hash);
+    expect(studyBoard(board, analysis).hash).toBe(study.hash);
+  });
+
+  it('does not count slow wave twice where the permittivity is a design value', () => {
+    const shift = (kind: 'bulk' | 'design'): number => {
+      const at = (rq: number) =>
+        studyBoard(fixtureBoard({ kind, rq, columns: 1, patches: 2 }), { ...analysis, roughnessModel: 'gradient' })
+          .nominal.points[4].lineEffectivePermittivity;
+      return at(1e-6) / at(0.05e-6) - 1;
+    };
+    // Gradient, Rq 1 µm on both faces of 127 µm: about 4 % more permittivity on a wide line, 0.75 of it on a 50 Ω line.
+    expect(shift('bulk')).toBeGreaterThan(0.02);
+    expect(Math.abs(shift('design'))).toBeLessThan(0.001);
+  });
+
+  it('does not evaluate a board with a cover layer, and says why', () => {
+    const covered = {
+      ...board,
+      stackUp: {
+        ...board.stackUp,
+        cover: {
+          material: 'solder mask',
+          permittivity: figure('c.er', 3.5),
+          lossTangent: figure('c.tand', 0.02),
+          thickness: figure('c.t', 25e-6),
+        },
+      },
+    };
+    expect(planBoard(covered, analysis)).toEqual([]);
+    const result = studyBoard(covered, analysis);
+    expect(result.nominal.points).toEqual([]);
+    expect(result.notEvaluated[0].reason).toContain('cover layer');
+    expect(result.notEvaluated[0].quantities).toContain('realized_gain');
+  });
+
+  it.each([24e9, 60e9])('runs outside its range at %d Hz and flags it', (f) => {
+    const k = 77e9 / f;
+    const scaled = fixtureBoard({ columns: 1, patches: 2, band: { low: f, high: f * 1.01 } });
+    const columns = scaled.columns.map((c) => ({
+      ...c,
+      patches: c.patches.map((p) => ({ width: p.width * k, length: p.length * k })),
+      links: c.links.map((l) => ({ ...l, length: l.length * k })),
+    }));
+    const result = studyBoard({ ...scaled, columns }, analysis);
+    expect(result.flags.some((x) => x.severity === 'outside')).toBe(true);
+    expect(result.nominal.points.every((p) => p.gain > 0 && Number.isFinite(p.gain))).toBe(true);
+  });
+});
