@@ -4,6 +4,7 @@ import {
   endLabels,
   frameSpec,
   type Layer,
+  labelMargin,
   limitBoxes,
   limitHatch,
   limitLabelPlaces,
@@ -77,7 +78,9 @@ export function cutSpec(chart: CutChart, theme: Theme): VegaLiteSpec {
     taken.push(...limitBoxes(pieces, 'above'));
     const place = choosePlace(limitLabelPlaces(frame, text, pieces, 'above'), taken, pixels);
     taken.push(place);
-    masks.push(texts(frame, [{ x: place.x + 2, y: place.y + place.height / 2, text }], { color: theme.figure.limit }));
+    masks.push(
+      texts(frame, [{ x: place.x + labelMargin, y: place.y + place.height / 2, text }], { color: theme.figure.limit }),
+    );
   }
 
   return frameSpec(

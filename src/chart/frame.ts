@@ -243,6 +243,9 @@ export function limitBoxes(
   return [...strips, ...steps];
 }
 
+/** Free space beside the name of a limit. */
+export const labelMargin = 6;
+
 /** Where the name of a limit may stand: on the forbidden side first, along the piece, then on the other side. */
 export function limitLabelPlaces(
   frame: Frame,
@@ -250,7 +253,7 @@ export function limitLabelPlaces(
   pieces: readonly { readonly from: number; readonly to: number; readonly level: number }[],
   side: 'above' | 'below',
 ): Box[] {
-  const width = textWidth(text, frame.theme.chartFontSize) + 4;
+  const width = textWidth(text, frame.theme.chartFontSize) + 2 * labelMargin;
   const height = frame.theme.chartFontSize + 2;
   const boxes: Box[] = [];
   const clamp = (x: number) => Math.max(2, Math.min(frame.width - width - 2, x));
@@ -308,7 +311,9 @@ export function frameSpec(
     padding: { left: frame.left, right: frame.right, top: frame.top, bottom: 42 },
     autosize: { type: 'none' },
     config: {
+      // The picture has one description of its own; its parts have none.
       aria: false,
+      mark: { aria: false },
       font: theme.chartFont,
       view: { stroke: null },
       text: { fontSize: size },

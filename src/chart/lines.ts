@@ -6,6 +6,7 @@ import {
   flagLayers,
   frameSpec,
   type Layer,
+  labelMargin,
   limitBoxes,
   limitHatch,
   limitLabelPlaces,
@@ -90,7 +91,9 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
     taken.push(...limitBoxes([piece], side));
     const place = choosePlace(limitLabelPlaces(frame, text, [piece], side), taken, pixels);
     taken.push(place);
-    limits.push(texts(frame, [{ x: place.x + 2, y: place.y + place.height / 2, text }], { color: theme.figure.limit }));
+    limits.push(
+      texts(frame, [{ x: place.x + labelMargin, y: place.y + place.height / 2, text }], { color: theme.figure.limit }),
+    );
   }
 
   return frameSpec(

@@ -1,4 +1,4 @@
-import { composePack, packData } from '../dossier/index.js';
+import { composePack, dataSchemas, type PackInput, packData } from '../dossier/index.js';
 import { allChecks, methods, runChecks } from '../evidence/index.js';
 import { loadPack, type PackFiles, type Problem } from '../manifest/index.js';
 import type { Pack } from '../manifest/model.js';
@@ -94,12 +94,14 @@ async function studyPack(pack: Pack, { workers, progress }: BuildEffects, enter:
   );
 }
 
-async function drawPack(parts: Parameters<typeof composePack>[0], effects: BuildEffects, enter: Enter): Promise<Files> {
+async function drawPack(parts: PackInput, effects: BuildEffects, enter: Enter): Promise<Files> {
   const document = composePack(parts);
   const dossiers = document.pages.filter((page) => page.kind === 'dossier');
   enter('writing the pages');
   const files = new Map<string, Uint8Array | string>(await renderPack(document));
-  for (const [path, content] of packData(parts)) files.set(`data/${path}`, content);
+  for (const [path, content] of Object.entries({ ...packData(parts), ...dataSchemas() })) {
+    files.set(path, `${JSON.stringify(content, null, 1)}\n`);
+  }
   const created = new Date(effects.epoch === undefined ? `${parts.pack.date}T00:00:00Z` : effects.epoch * 1000);
   enter('drawing the PDF dossiers', dossiers.length);
   const titles = new Map(document.pages.map((page) => [page.id, page.title]));

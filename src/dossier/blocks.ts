@@ -25,7 +25,6 @@ export const chapter = (id: string, title: string, ...blocks: Block[]): Chapter 
 
 export const cell = (...content: Inline[]): Cell => ({ content });
 export const number = (...content: Inline[]): Cell => ({ content, numeric: true });
-export const EMPTY: Cell = cell('–');
 
 type Column = TableBlock['columns'][number];
 
@@ -40,12 +39,24 @@ function columnOf(text: string): Column {
   };
 }
 
+export const DASH = '–';
+
+/** A dash in a column of numbers stands where the numbers stand. */
+const aligned = (columns: readonly Column[], rows: readonly (readonly Cell[])[]): readonly (readonly Cell[])[] =>
+  rows.map((row) =>
+    row.map((entry, i) =>
+      columns[i]?.numeric === true && entry.content.length === 1 && entry.content[0] === DASH
+        ? { ...entry, numeric: true }
+        : entry,
+    ),
+  );
+
 export const table = (
   id: string,
   caption: string,
   columns: readonly string[],
   rows: readonly (readonly Cell[])[],
-): TableBlock => ({ kind: 'table', id, caption, columns: columns.map(columnOf), rows, rowHeaders: true });
+): TableBlock => plainTable(id, caption, columns.map(columnOf), rows);
 
 /** The same with titles that come from outside and must not be read as marks. */
 export const plainTable = (
@@ -53,6 +64,6 @@ export const plainTable = (
   caption: string,
   columns: readonly Column[],
   rows: readonly (readonly Cell[])[],
-): TableBlock => ({ kind: 'table', id, caption, columns, rows, rowHeaders: true });
+): TableBlock => ({ kind: 'table', id, caption, columns, rows: aligned(columns, rows), rowHeaders: true });
 
 export const figureBlock = (figure: Omit<FigureBlock, 'kind'>): FigureBlock => ({ kind: 'figure', ...figure });

@@ -3,12 +3,12 @@ import { cell, chapter, facts, figureBlock, number, prose, table } from './block
 import { type BoardContext, bandPoints } from './context.js';
 import type { Chapter } from './document.js';
 import { gainBudget } from './gain-budget.js';
-import { celsius, gigahertz } from './values.js';
+import { celsius, GAP, gigahertz } from './values.js';
 
 export const NO_RESULTS = 'Nothing was computed for this board; the reason stands under Verdict.';
 
-const levelText = (value: number): string => `${formatNumber(value, 2)} dBi`;
-const changeText = (value: number): string => `${formatNumber(value, 2, { plus: true })} dB`;
+const levelText = (value: number): string => `${formatNumber(value, 2)}${GAP}dBi`;
+const changeText = (value: number): string => `${formatNumber(value, 2, { plus: true })}${GAP}dB`;
 
 export function budgetChapter(context: BoardContext): Chapter {
   const points = bandPoints(context);
@@ -42,7 +42,7 @@ export function budgetChapter(context: BoardContext): Chapter {
         [cell('Directivity'), cell('–'), cell('–'), number(levelText(directivity))],
         ...steps.map(({ label, share, change, level }) => [
           cell(label),
-          share === undefined ? cell('–') : number(`${formatNumber(100 * share, 2)} %`),
+          share === undefined ? cell('–') : number(`${formatNumber(100 * share, 2)}${GAP}%`),
           number(changeText(change)),
           number(levelText(level)),
         ]),
@@ -59,7 +59,7 @@ export function budgetChapter(context: BoardContext): Chapter {
       ['Gain at the input of the feed network', `${levelText(gain)} (feed loss in, mismatch out)`],
       [
         'Radiated share of the accepted power',
-        `${formatNumber(100 * centre.shares.radiated, 2)} %, the rest of the shares above`,
+        `${formatNumber(100 * centre.shares.radiated, 2)} %, what the shares above leave`,
       ],
     ),
     prose(

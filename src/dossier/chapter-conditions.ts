@@ -3,7 +3,7 @@ import { cell, chapter, facts, number, plainTable, prose } from './blocks.js';
 import { type BoardContext, bandPoints, type Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
-import { bandText, celsius, count, differenceText, temperatureText } from './values.js';
+import { bandText, celsius, changeText, count, temperatureText } from './values.js';
 
 /** More columns than this do not fit a printed page. */
 const COLUMNS = 5;
@@ -13,7 +13,7 @@ function effectCell({ verdict }: Judged, toleranceId: string): Cell {
   if (part?.atLimits === undefined || typeof verdict.value !== 'number') return cell('–');
   const { low, high } = part.atLimits;
   const { unit, value } = verdict;
-  return number(`${differenceText(low - value, unit)} / ${differenceText(high - value, unit)}`);
+  return number(`${changeText(low - value, unit)} / ${changeText(high - value, unit)}`);
 }
 
 function toleranceTables({ board, study, judged }: BoardContext): readonly Block[] {

@@ -6,7 +6,7 @@ import { NO_RESULTS } from './chapter-budget.js';
 import type { BoardContext } from './context.js';
 import type { Block, Chapter, LinesChart } from './document.js';
 import { micrometres } from './figures.js';
-import { limitText, rounded, statedNumber } from './values.js';
+import { GAP, limitText, rounded, statedNumber } from './values.js';
 
 const MODEL_TITLES: Readonly<Record<RoughnessModelName | 'smooth', string>> = {
   smooth: 'Smooth copper',
@@ -66,7 +66,7 @@ function lineLossFigure({ input, board, study, judged }: BoardContext): Block {
       level: r.limit?.value ?? Number.NaN,
       forbidden: r.limit?.direction === 'at_least' ? ('below' as const) : ('above' as const),
     }));
-  const loss = (value: number) => `${formatNumber(value, 3)} dB/cm`;
+  const loss = (value: number) => `${formatNumber(value, 3)}${GAP}dB/cm`;
   return figureBlock({
     id: 'line-loss',
     title: 'Loss of the feed line over frequency, by roughness model',
@@ -152,7 +152,7 @@ function saturation({ study }: BoardContext): readonly Block[] {
     return [
       prose(
         { strong: `${modelTitle(model)} is saturated. ` },
-        `On ${faces.map((f) => f.face).join(' and ')} it is within 5 % of its ceiling of ${statedNumber(ceiling)}: rougher copper would give the same figure. The plateau belongs to the formula, not to copper; do not rank foils by it.`,
+        `On ${faces.map((f) => f.face).join(' and ')} it is within 5 % of its ceiling of ${statedNumber(ceiling)}: rougher copper would give nearly the same figure. The plateau belongs to the formula, not to copper; do not rank foils by it.`,
       ),
     ];
   });

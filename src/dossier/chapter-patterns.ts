@@ -5,7 +5,7 @@ import { cell, chapter, figureBlock, number, prose, table } from './blocks.js';
 import { NO_RESULTS } from './chapter-budget.js';
 import { type BandPoints, type BoardContext, bandPoints } from './context.js';
 import type { Block, Chapter, CutChart } from './document.js';
-import { differenceText, gigahertz, rounded, statedNumber, valueText } from './values.js';
+import { changeText, gigahertz, rounded, statedNumber, valueText } from './values.js';
 
 const DEGREES = 180 / Math.PI;
 const FLOOR_DB = -40;
@@ -72,9 +72,9 @@ function masks(requirements: readonly Requirement[], plane: Plane, points: BandP
 
 const angleText = (radians: number, signed: boolean): string => {
   if (!Number.isFinite(radians)) return 'not evaluated';
-  return signed ? differenceText(radians * DEGREES, 'deg') : valueText(radians * DEGREES, 'deg');
+  return signed ? changeText(radians * DEGREES, 'deg') : valueText(radians * DEGREES, 'deg');
 };
-const levelText = (db: number): string => (Number.isFinite(db) ? valueText(db, 'dB') : 'not evaluated');
+const levelText = (db: number): string => (Number.isFinite(db) ? valueText(db, 'dB') : 'none');
 
 function reading(points: BandPoints, plane: Plane): string {
   const { low, centre, high } = points;
@@ -106,42 +106,47 @@ function cutFigure(context: BoardContext, points: BandPoints, cut: (typeof CUTS)
   });
 }
 
-const beamRow = (point: PointResult) => [
-  cell(gigahertz(point.frequency)),
-  number(valueText(10 * Math.log10(point.directivity), 'dBi')),
-  number(valueText(10 * Math.log10(point.realizedGain), 'dBi')),
-  ...CUTS.flatMap(({ plane }) => [
-    number(angleText(point[plane].beamDirection, true)),
-    number(angleText(point[plane].halfPowerBeamwidth, false)),
-    number(levelText(point[plane].sidelobeDb)),
-  ]),
+const figuresOfCut = (point: PointResult, plane: Plane) => [
+  number(angleText(point[plane].beamDirection, true)),
+  number(angleText(point[plane].halfPowerBeamwidth, false)),
+  number(levelText(point[plane].sidelobeDb)),
 ];
+
+function beamTables({ nominal, low, high }: BandPoints): readonly Block[] {
+  const step = nominal.length > 1 ? (high.frequency - low.frequency) / (nominal.length - 1) : 0;
+  const over = `over frequency at nominal temperature, in steps of ${formatNumber(step / 1e6, 0)} MHz`;
+  return [
+    table(
+      'gain-table',
+      `Directivity and gain ${over}`,
+      ['Frequency', '#Directivity', '#Gain', '#Realized gain', '#Radiation efficiency'],
+      nominal.map((p) => [
+        cell(gigahertz(p.frequency)),
+        number(valueText(10 * Math.log10(p.directivity), 'dBi')),
+        number(valueText(10 * Math.log10(p.gain), 'dBi')),
+        number(valueText(10 * Math.log10(p.realizedGain), 'dBi')),
+        number(valueText(p.radiationEfficiency, '1')),
+      ]),
+    ),
+    ...CUTS.map(({ plane, name }) =>
+      table(
+        `${plane}-table`,
+        `${name} cut ${over}`,
+        ['Frequency', '#Beam direction', '#Half-power beamwidth', '#Sidelobe level'],
+        nominal.map((p) => [cell(gigahertz(p.frequency)), ...figuresOfCut(p, plane)]),
+      ),
+    ),
+  ];
+}
 
 export function patternsChapter(context: BoardContext): Chapter {
   const points = bandPoints(context);
   if (points === undefined) return chapter('patterns', 'Patterns', prose(NO_RESULTS));
-  const step =
-    points.nominal.length > 1 ? (points.high.frequency - points.low.frequency) / (points.nominal.length - 1) : 0;
   return chapter(
     'patterns',
     'Patterns',
     ...CUTS.map((cut) => cutFigure(context, points, cut)),
-    table(
-      'beam-table',
-      `Beam figures over frequency at nominal temperature, in steps of ${formatNumber(step / 1e6, 0)} MHz`,
-      [
-        'Frequency',
-        '#Directivity',
-        '#Realized gain',
-        '#Elevation: direction',
-        '#Elevation: beamwidth',
-        '#Elevation: sidelobe',
-        '#Azimuth: direction',
-        '#Azimuth: beamwidth',
-        '#Azimuth: sidelobe',
-      ],
-      points.nominal.map(beamRow),
-    ),
+    ...beamTables(points),
     prose(
       'Each curve is relative to its own maximum. A sidelobe limit is drawn outside the main lobe only, that is beyond the minima next to it over the three frequencies.',
     ),

@@ -5,7 +5,7 @@ import type { BoardContext, PackInput } from './context.js';
 import type { Block, Chapter } from './document.js';
 import { DEFINITIONS, link } from './links.js';
 import { CAUTIONS } from './statements.js';
-import { scientific } from './values.js';
+import { powerAbove } from './values.js';
 
 export function shortDefinitions({ board }: BoardContext): Chapter {
   const to = (text: string, anchor: string) => link(text, DEFINITIONS, anchor);
@@ -71,7 +71,7 @@ export function balanceChapter({ study }: BoardContext): Chapter {
         'Circuit: largest residual',
         residuals.length === 0
           ? 'not evaluated'
-          : `${scientific(Math.max(...residuals.map(Math.abs)))} of the input power, over ${residuals.length} points (below 1 × 10⁻⁹ by test)`,
+          : `below ${powerAbove(Math.max(...residuals.map(Math.abs)))} of the input power at all ${residuals.length} points (below 10⁻⁹ by test)`,
       ],
       ['Far field and guided wave over power into the edges', closureText(points.map((p) => p.farFieldClosure))],
       [

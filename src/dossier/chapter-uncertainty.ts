@@ -5,14 +5,14 @@ import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
 import { DEFINITIONS, EVIDENCE, link } from './links.js';
-import { differenceText, valueText } from './values.js';
+import { changeText, marginText, valueText } from './values.js';
 
 const KIND = { engine: 'root sum of squares', roughness: 'linearly', tolerance: 'root sum of squares' } as const;
 
 function partTable({ board, study }: BoardContext, { requirement, verdict }: Judged): Block {
   const { unit, parts, models, adverse = 0, favourable = 0, margin = 0 } = verdict;
-  const against = (value: number): Cell => number(value === 0 ? '0' : differenceText(-value, unit));
-  const forIt = (value: number): Cell => number(value === 0 ? '0' : differenceText(value, unit));
+  const against = (value: number): Cell => number(changeText(-value, unit));
+  const forIt = (value: number): Cell => number(changeText(value, unit));
   const detailOf = (id: string, detail: string): string => {
     const tolerance = study.tolerances.find((t) => `tolerance-${t.id}` === id);
     return tolerance === undefined ? detail : `${figureTextByPath(board, tolerance.figure)}; ${detail}`;
@@ -20,7 +20,7 @@ function partTable({ board, study }: BoardContext, { requirement, verdict }: Jud
   const byModel = models.map((m) => `${modelTitle(m.model)} ${valueText(m.value, unit)}`).join(', ');
   return table(
     `uncertainty-${requirement.id}`,
-    `${requirement.id}, ${quantityTitle(requirement)}: margin ${differenceText(margin, unit)}, parts of its uncertainty`,
+    `${requirement.id}, ${quantityTitle(requirement)}: margin ${marginText(margin, unit)}, parts of its uncertainty`,
     ['Part|1.3', '#Against', '#For', 'Added', 'What was done|3'],
     [
       ...parts.map((part) => [
@@ -35,9 +35,7 @@ function partTable({ board, study }: BoardContext, { requirement, verdict }: Jud
         against(adverse),
         forIt(favourable),
         cell('–'),
-        cell(
-          `margin between ${differenceText(margin - adverse, unit)} and ${differenceText(margin + favourable, unit)}`,
-        ),
+        cell(`margin between ${marginText(margin - adverse, unit)} and ${marginText(margin + favourable, unit)}`),
       ],
     ],
   );

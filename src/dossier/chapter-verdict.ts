@@ -5,18 +5,19 @@ import type { Block, Cell, Chapter, Inline } from './document.js';
 import { concernsOf, figureText } from './figures.js';
 import { boardPage, DEFINITIONS, link, requirementPage } from './links.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
-import { differenceText, limitText, placeText, uncertaintyText, valueText } from './values.js';
+import { limitText, marginText, placeText, uncertaintyText, valueText } from './values.js';
 
 /** Worst value, or why there is none. */
-export function valueCell({ verdict }: Judged): Cell {
+export function valueCell({ requirement, verdict }: Judged): Cell {
   if (verdict.value === undefined) return cell(verdict.reason ?? '–');
-  const value = valueText(verdict.value, verdict.unit);
+  const kind = requirement.quantity === 'pattern_mask' ? 'excess ' : '';
+  const value = kind + valueText(verdict.value, verdict.unit);
   const reason = verdict.reason === undefined ? '' : ` (${verdict.reason})`;
   return { content: [value + reason], numeric: typeof verdict.value === 'number' && reason === '' };
 }
 
 export const marginCell = ({ verdict }: Judged): Cell =>
-  verdict.margin === undefined ? cell('–') : number(differenceText(verdict.margin, verdict.unit));
+  verdict.margin === undefined ? cell('–') : number(marginText(verdict.margin, verdict.unit));
 
 export const uncertaintyCell = ({ requirement, verdict }: Judged): Cell => {
   if (requirement.quantity === 'declared') return cell('as declared');

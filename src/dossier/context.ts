@@ -46,6 +46,14 @@ export function boardContexts(input: PackInput): readonly BoardContext[] {
   });
 }
 
+export function judgedOn(context: BoardContext, requirementId: string): Judged {
+  const found = context.judged.find((j) => j.requirement.id === requirementId);
+  if (found === undefined) {
+    throw new RangeError(`board ${context.board.id} was not judged against ${requirementId}`);
+  }
+  return found;
+}
+
 /** Representative points: lower edge, centre and upper edge of the band at nominal temperature; none without results. */
 export interface BandPoints {
   readonly low: PointResult;

@@ -12,9 +12,7 @@ const gain = (): Chapter =>
     'gain',
     'Directivity, gain and realized gain',
     list([
-      [
-        'Directivity: radiation intensity in the direction of the maximum over the mean over all directions of the half-space above the ground.',
-      ],
+      ['Directivity: radiation intensity in the direction of the maximum over the radiated power divided by 4π.'],
       [
         'Gain: directivity times the efficiency of the circuit, referred to the input of the feed network. Losses of the feed paths, copper, finish, dielectric and surface wave are in it; mismatch is not.',
       ],
@@ -24,7 +22,7 @@ const gain = (): Chapter =>
       [
         'Radiation efficiency: radiated power over the power accepted at the column ports. The power of the surface wave counts as lost, although the edge of a real board radiates part of it.',
       ],
-      ['All are given in the direction of the maximum and for the co-polar field.'],
+      ['All are given in the direction of the maximum.'],
     ]),
   );
 

@@ -28,7 +28,7 @@ export function stackUpDrawing(board: Board): StackUpDrawing {
       ...coverLayers,
       {
         label: `Strip: ${strip.foil.name}, ${strip.finish.name}`,
-        detail: `outer face ${strip.outerFace.kind}, ${textureText(strip.outerFace.texture)}; dielectric face ${strip.dielectricFace.kind}, ${textureText(strip.dielectricFace.texture)}`,
+        detail: `outer face ${strip.outerFace.kind === 'foil' ? 'as supplied' : strip.outerFace.kind}, ${textureText(strip.outerFace.texture)}; dielectric face ${strip.dielectricFace.kind}, ${textureText(strip.dielectricFace.texture)}`,
         thicknessUm: um(strip.thickness.value),
         material: 'copper-strip',
         computed: true,

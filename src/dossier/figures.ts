@@ -47,8 +47,9 @@ export function figuresOf(board: Board): readonly FigureUse[] {
   add('Thickness of the cover layer', cover?.thickness, 'length');
   add('Permittivity of the cover layer', cover?.permittivity, 'number', true);
   add('Loss tangent of the cover layer', cover?.lossTangent, 'number', true);
+  const lossPaths = new Set(board.feed.flatMap((path) => path.lossDb?.path ?? []));
   board.feed.forEach((path, i) => {
-    add(`Feed loss to column ${i + 1}`, path.lossDb, 'level');
+    add(lossPaths.size === 1 ? 'Feed loss' : `Feed loss to column ${i + 1}`, path.lossDb, 'level');
   });
   add('Change of copper outlines by etching', board.tolerances.etch, 'length');
   return uses;

@@ -2,27 +2,21 @@ import { formatNumber } from '../quantity/index.js';
 import { quantityOf, quantityTitle } from '../verdict/index.js';
 import { caution, cell, chapter, facts, list, number, plainTable, prose, table } from './blocks.js';
 import { cautionsChapter, inputTable } from './chapter-record.js';
-import { type BoardContext, type Judged, type PackInput, page } from './context.js';
+import { type BoardContext, type Judged, judgedOn, type PackInput, page } from './context.js';
 import { differencesBetween } from './differences.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
 import { concernsOf } from './figures.js';
 import { boardPage, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
 import { rankedRequirements, standing, tightest } from './standing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
-import { count, differenceText, limitText, statedNumber, valueText } from './values.js';
-
-const judgedOn = (board: BoardContext, requirementId: string): Judged => {
-  const found = board.judged.find((j) => j.requirement.id === requirementId);
-  if (found === undefined) throw new RangeError(`board ${board.board.id} was not judged against ${requirementId}`);
-  return found;
-};
+import { count, limitText, marginText, statedNumber, valueText } from './values.js';
 
 /** Status with the worst margin, or the declared value. */
 function matrixCell(entry: Judged): Cell {
   const { verdict } = entry;
   const detail =
     verdict.margin !== undefined
-      ? differenceText(verdict.margin, verdict.unit)
+      ? marginText(verdict.margin, verdict.unit)
       : typeof verdict.value === 'string'
         ? valueText(verdict.value, verdict.unit)
         : '';
@@ -91,9 +85,7 @@ function standings(boards: readonly BoardContext[]): Block {
         cell({ status: context.verdict.overall }),
         cell(context.verdict.reason),
         tight === undefined ? cell('–') : cell(link(tight.requirement.id, requirementPage(tight.requirement.id))),
-        tight?.verdict.margin === undefined
-          ? cell('–')
-          : number(differenceText(tight.verdict.margin, tight.verdict.unit)),
+        tight?.verdict.margin === undefined ? cell('–') : number(marginText(tight.verdict.margin, tight.verdict.unit)),
         ratio === undefined || !Number.isFinite(ratio) ? cell('–') : number(formatNumber(ratio, 2)),
         number(costText(context)),
       ];
@@ -128,7 +120,7 @@ function differences(boards: readonly BoardContext[]): Block {
   if (boards.length < 2) return prose('The pack holds a single board.');
   if (found.length === 0) return prose('The boards do not differ in any field that changes a result.');
   return plainTable(
-    'differences',
+    'difference-table',
     'Fields in which the boards differ',
     [{ title: 'Field', width: 1.3 }, ...boards.map(({ board }) => ({ title: board.title }))],
     found.map(({ label, values }) => [cell(label), ...values.map((value) => cell(value))]),
@@ -183,19 +175,27 @@ function summary(boards: readonly BoardContext[]): readonly Block[] {
   ];
 }
 
+/** What was not evaluated on a board, one line per reason. */
+function gapsOf({ board, judged }: BoardContext): readonly (readonly Inline[])[] {
+  const reasonOf = ({ verdict }: Judged): string => verdict.reason ?? 'no reason recorded';
+  const open = judged.filter(({ verdict }) => (verdict.calculated ?? verdict.status) === 'not evaluated');
+  return [...new Set(open.map(reasonOf))].map((reason) => [
+    link(board.title, boardPage(board.id)),
+    ': ',
+    ...open
+      .filter((entry) => reasonOf(entry) === reason)
+      .flatMap(({ requirement }, i): Inline[] => [
+        ...(i === 0 ? [] : [', ']),
+        link(requirement.id, requirementPage(requirement.id)),
+      ]),
+    `. Reason: ${reason}`,
+  ]);
+}
+
 export function overviewPage(input: PackInput, boards: readonly BoardContext[]): DocumentPage {
   const { pack } = input;
   const ranked = rankedRequirements(pack.requirements.requirements, boards);
-  const gaps = boards.flatMap((board) =>
-    board.judged
-      .filter(({ verdict }) => (verdict.calculated ?? verdict.status) === 'not evaluated')
-      .map(({ requirement, verdict }): readonly Inline[] => [
-        link(board.board.title, boardPage(board.board.id)),
-        ', ',
-        link(requirement.id, requirementPage(requirement.id)),
-        ` (${verdict.reason ?? 'no reason recorded'})`,
-      ]),
-  );
+  const gaps = boards.flatMap(gapsOf);
   return page(input, {
     id: OVERVIEW,
     kind: 'overview',
@@ -224,7 +224,7 @@ export function overviewPage(input: PackInput, boards: readonly BoardContext[]):
         ),
         requirementList(boards, ranked),
       ),
-      chapter('differences-chapter', 'What differs between the boards', differences(boards)),
+      chapter('differences', 'What differs between the boards', differences(boards)),
       chapter('assumptions', 'What the verdicts rest on', assumptionTable(boards)),
       pagesChapter(input, boards),
       chapter(

@@ -4,7 +4,7 @@ import { quantityOf, quantityTitle } from '../verdict/index.js';
 import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
 import { cautionsChapter } from './chapter-record.js';
 import { marginCell, statusInline, uncertaintyCell, valueCell, whereCell } from './chapter-verdict.js';
-import { type BoardContext, type Judged, type PackInput, page } from './context.js';
+import { type BoardContext, type Judged, judgedOn, type PackInput, page } from './context.js';
 import type { Block, DocumentPage, Inline } from './document.js';
 import { boardPage, DEFINITIONS, link, OVERVIEW, requirementPage } from './links.js';
 import { standing } from './standing.js';
@@ -45,8 +45,7 @@ interface Row {
 /** Worst standing first; boards without a value before all. */
 function rowsOf(requirement: Requirement, boards: readonly BoardContext[]): readonly Row[] {
   const rows = boards.map((context) => {
-    const entry = context.judged.find((j) => j.requirement.id === requirement.id);
-    if (entry === undefined) throw new RangeError(`board ${context.board.id} was not judged against ${requirement.id}`);
+    const entry = judgedOn(context, requirement.id);
     return { context, entry, at: standing(entry.verdict) ?? Number.NEGATIVE_INFINITY };
   });
   return rows.sort((a, b) => (a.at === b.at ? 0 : a.at < b.at ? -1 : 1));

@@ -1,6 +1,6 @@
 import type { Requirement } from '../manifest/model.js';
 import type { RequirementVerdict } from '../verdict/index.js';
-import type { BoardContext, Judged } from './context.js';
+import { type BoardContext, type Judged, judgedOn } from './context.js';
 
 /**
  * Margin over the uncertainty on its side: 1 or more meets, below −1 misses, between them undecided. It makes margins in
@@ -31,9 +31,7 @@ export function rankedRequirements(
   boards: readonly BoardContext[],
 ): readonly RankedRequirement[] {
   const ranked = requirements.map((requirement) => {
-    const standings = boards.map((board) =>
-      standing(board.judged.find((j) => j.requirement.id === requirement.id)?.verdict as RequirementVerdict),
-    );
+    const standings = boards.map((board) => standing(judgedOn(board, requirement.id).verdict));
     const known = standings.filter((s) => s !== undefined);
     const gap = requirement.weight === 'binding' && known.length < standings.length;
     return { requirement, lowest: known.length === 0 ? undefined : Math.min(...known), gap };

@@ -77,8 +77,8 @@ const lines: readonly Method[] = [
   },
   {
     id: 'impedance-hammerstad-jensen',
-    name: 'Impedance dispersion of the column network',
-    whatItIs: 'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1); the network constants are fitted with it.',
+    name: 'Impedance dispersion, cross-check',
+    whatItIs: 'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1): a second opinion on the line impedance, not used in figures.',
     source: 'E. Hammerstad and Ø. Jensen, IEEE MTT-S Digest 1980',
     range: '1.5 to 3 % above the power-current impedance at 77 GHz on 0.1 to 0.2 mm',
   },
@@ -122,7 +122,7 @@ const columns: readonly Method[] = [
     source:
       'Transmission-line model of patches with edge admittances (A. G. Derneryd, 1976 and 1978, and later work), with five corrections found against independent full-wave solutions',
     range:
-      'k0h 0.16 to 0.33, permittivity 3.0 to 3.6, patch width 0.5 to 1.45 mm, line w/h 0.6 to 1.7. There: resonance 0.22 % rms, reflection |ΔS11| 0.04 to 0.12, tilt 0.2 to 0.6°, sidelobes 0.3 to 0.7 dB (uniform) or 1.7 to 1.9 dB (tapered). Constants provisional; flagged outside',
+      'k0h 0.16 to 0.33, permittivity 2.9 to 3.6, patch width 0.5 to 1.45 mm, line w/h 0.6 to 1.7. There: resonance within 0.3 %, reflection |ΔS11| 0.02 to 0.12, tilt 0.2 to 0.6°, sidelobes 0.3 to 0.7 dB (uniform) or 1.7 to 1.9 dB (tapered). Constants provisional; flagged outside',
   },
   {
     id: 'slab-kernel',

@@ -75,7 +75,7 @@ function describeNode(node: Node): string {
   if (node.kind === 'list') return 'a list';
   if (node.kind === 'map') return 'a map';
   if (node.value === null && node.text === '') return 'nothing';
-  return typeof node.value === 'string' ? quoted(node.value) : quoted(node.text);
+  return typeof node.value === 'string' ? quoted(node.value) : node.text;
 }
 
 const keysOf = (schema: z.ZodType) => Object.keys(shapeOf(schema)!).join(', ');
@@ -209,7 +209,7 @@ function checkFigure(schema: z.ZodType, node: MapNode, path: Path, problems: Pro
   const spread = child(node, 'spread');
   if (figure?.floor === undefined || value?.kind !== 'scalar' || spread === undefined) return;
   const { dimension, floor } = figure;
-  const number = dimension === 'number' ? Number(value.value) : valueOf(value.value, dimension);
+  const number = dimension === 'number' ? Number(value.value) : readable(value.value, dimension);
   const lower = spread.kind === 'map' ? child(spread, 'minus') : spread;
   if (number === undefined || number < floor || lower?.kind !== 'scalar') return;
   const distance = spreadDistance(lower.value, number, dimension);
@@ -221,7 +221,7 @@ function checkFigure(schema: z.ZodType, node: MapNode, path: Path, problems: Pro
   );
 }
 
-function valueOf(written: unknown, dimension: Parameters<typeof parseQuantity>[1]): number | undefined {
+function readable(written: unknown, dimension: Parameters<typeof parseQuantity>[1]): number | undefined {
   const read = parseQuantity(written, dimension);
   return read.ok ? read.value : undefined;
 }

@@ -3,10 +3,7 @@ import { boardDocument } from './documents/board-document.js';
 import { finishesDocument, foilsDocument, laminatesDocument } from './documents/library-documents.js';
 import { packDocument } from './documents/pack-document.js';
 import { requirementsDocument } from './documents/requirement-document.js';
-import { variantOf } from './variant.js';
-
-/** A board that inherits from another: every key optional, an empty one drops the inherited key. */
-export const variantDocument = variantOf(boardDocument.required({ based_on: true }), ['id', 'title', 'based_on']);
+import { variantDocument } from './documents/variant-document.js';
 
 type JsonSchema = Record<string, unknown>;
 

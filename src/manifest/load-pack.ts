@@ -1,5 +1,4 @@
 import type { z } from 'zod';
-import { parseQuantity } from '../quantity/index.js';
 import { type BoardFile, chainBoards, idOf } from './board-chain.js';
 import { boardRules } from './board-rules.js';
 import { checkDocument } from './check.js';
@@ -14,8 +13,9 @@ import {
 } from './documents/library-documents.js';
 import { type PackDocument, packDocument } from './documents/pack-document.js';
 import { type RequirementsDocument, requirementsDocument } from './documents/requirement-document.js';
+import { variantDocument } from './documents/variant-document.js';
+import { si } from './figures.js';
 import type { PackFiles } from './files.js';
-import { variantDocument } from './json-schema.js';
 import { finishRules, foilRules, laminateRules } from './library-rules.js';
 import type { Board, Pack } from './model.js';
 import { type OpenFile, Reader } from './open-files.js';
@@ -74,12 +74,11 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   const boards = openBoards(reader, packFile);
   const { chained, problems: chainProblems } = chainBoards(boards.files, boards.complete);
   problems.push(...chainProblems);
-  const step = parseQuantity(idOf(nodeAt(packFile.root, ['analysis']) ?? packFile.root, 'frequency_step'), 'frequency');
   const context = {
     laminates: laminates.known,
     foils: foils.known,
     finishes: finishes.known,
-    ...(step.ok && step.value > 0 ? { frequencyStep: step.value } : {}),
+    ...(pack ? { frequencyStep: si(pack.doc.analysis.frequency_step, 'frequency') } : {}),
   };
   const complete = chained.flatMap((board) => {
     const merged = checked<BoardDocument>(boardDocument, { path: board.file.path, root: board.root }, problems);
@@ -211,14 +210,8 @@ function packOf(doc: PackDocument, boards: readonly Board[], requirements: Pack[
     requirements,
     analysis: {
       roughnessModel: doc.analysis.roughness_model,
-      frequencyStep: parseSi(doc.analysis.frequency_step),
+      frequencyStep: si(doc.analysis.frequency_step, 'frequency'),
     },
     inputs: reader.inputs(),
   };
-}
-
-function parseSi(frequency: string): number {
-  const read = parseQuantity(frequency, 'frequency');
-  if (!read.ok) throw new Error('unchecked frequency step reached the model');
-  return read.value;
 }

@@ -41,25 +41,27 @@ export class Reader {
     const files: OpenFile[] = [];
     let complete = node !== undefined;
     const seen = new Set<string>();
-    items.forEach((item, i) => {
+    for (const [i, item] of items.entries()) {
       const where = dotted(node?.kind === 'list' ? [...path, i] : path);
+      let faulty = false;
       const problem = (found: string, allowed: string, fix?: string) => {
         this.problems.push(problemAt(item.mark, where, found, allowed, fix));
-        complete = false;
+        faulty = true;
       };
       // Other kinds of value are reported by the check of the document.
-      if (item.kind !== 'scalar' || typeof item.value !== 'string' || item.value === '') {
-        complete = false;
-        return;
+      const name = item.kind === 'scalar' && typeof item.value === 'string' ? item.value : '';
+      const resolved = resolveReference(from.path, name);
+      let file: OpenFile | undefined;
+      if (name === '') faulty = true;
+      else if ('refused' in resolved) problem(quoted(name), resolved.refused, resolved.fix);
+      else if (seen.has(resolved.path)) problem(`${quoted(name)} a second time`, 'a file is listed once');
+      else {
+        seen.add(resolved.path);
+        file = this.open(resolved.path, problem, name);
       }
-      const resolved = resolveReference(from.path, item.value);
-      if ('refused' in resolved) return problem(quoted(item.value), resolved.refused, resolved.fix);
-      if (seen.has(resolved.path)) return problem(`${quoted(item.value)} a second time`, 'a file is listed once');
-      seen.add(resolved.path);
-      const file = this.open(resolved.path, problem, item.value);
       if (file) files.push(file);
-      else complete = false;
-    });
+      if (faulty || !file) complete = false;
+    }
     return { files, complete };
   }
 

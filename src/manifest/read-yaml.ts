@@ -99,8 +99,9 @@ function attach(node: Draft, data: unknown, done: Set<Draft>): void {
   if (done.has(node)) return;
   done.add(node);
   if (node.kind === 'scalar') node.value = data as string | number | boolean | null;
-  else if (node.kind === 'list') node.items.forEach((item, i) => attach(item, (data as unknown[])[i], done));
-  else for (const [key, { value }] of node.entries) attach(value, (data as Record<string, unknown>)[key], done);
+  else if (node.kind === 'list') {
+    for (const [i, item] of node.items.entries()) attach(item, (data as unknown[])[i], done);
+  } else for (const [key, { value }] of node.entries) attach(value, (data as Record<string, unknown>)[key], done);
 }
 
 interface Frame {

@@ -39,7 +39,8 @@ export function quantityPattern(
   const spellings = units.flatMap((u) => u.spellings);
   if (options.percent && !spellings.includes('%')) spellings.push('%');
   const number = options.nonNegative ? NUMBER.replace('[+\\u2212-]?', '\\+?') : NUMBER;
-  return `^${SPACE}${number}${SPACE}(?:${spellings.map(escapePattern).join('|')})${bareNumber ? '?' : ''}${SPACE}$`;
+  // A unit that begins with a digit stands apart: 0.003931/K is not 0.00393 1/K.
+  return `^${SPACE}${number}(?![0-9])${SPACE}(?:${spellings.map(escapePattern).join('|')})${bareNumber ? '?' : ''}${SPACE}$`;
 }
 
 const ascii = (number: string) => number.replaceAll('\u2212', '-').replace(/^\+/, '');
@@ -59,6 +60,7 @@ export function quoted(value: unknown): string {
 /** Makes control, bidirectional-override and lone surrogate characters visible: messages go to terminals. */
 export function visible(text: string): string {
   return text.replace(
+    // biome-ignore lint/suspicious/noControlCharactersInRegex: control characters are what is looked for
     /[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u2028-\u202e\u2066-\u2069\ufeff\ud800-\udfff]/gu,
     (c) => `\\u${c.charCodeAt(0).toString(16).padStart(4, '0')}`,
   );

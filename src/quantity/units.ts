@@ -95,7 +95,7 @@ export const DIMENSIONS: Readonly<Record<Dimension, DimensionInfo>> = {
     units: [
       unit('ppm/K', ['ppm/K', 'ppm/degC', 'ppm/°C'], -6),
       unit('%/K', ['%/K', '%/degC', '%/°C'], -2),
-      unit('1/K', ['1/K', '/K', '1/degC', '1/°C'], 0),
+      unit('1/K', ['1/K', '1/degC', '1/°C'], 0),
     ],
   },
   angle: {

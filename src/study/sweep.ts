@@ -3,6 +3,7 @@ import type { Analysis, Board } from '../manifest/model.js';
 import { abs2 } from '../numerics/complex.js';
 import { arrayFigures, incidentWaves } from '../physics/array/index.js';
 import { type ColumnEngine, type ColumnProblem, edgeNetwork, type PowerBudget } from '../physics/column/index.js';
+import { SPEED_OF_LIGHT } from '../physics/constants.js';
 import { type MicrostripLine, microstripLine } from '../physics/line/index.js';
 import { type CutShape, farFieldPower, guidedWavePower } from '../physics/pattern/index.js';
 import type { RoughnessModel } from '../physics/roughness/index.js';
@@ -127,7 +128,7 @@ function evaluate(
     elevation: cutFigures(figures.elevation),
     azimuth: cutFigures(figures.azimuth),
     lineLossDbPerM: DB_PER_NEPER * line.gamma.re,
-    lineEffectivePermittivity: (line.gamma.im / ((2 * Math.PI * frequency) / 299792458)) ** 2,
+    lineEffectivePermittivity: (line.gamma.im / ((2 * Math.PI * frequency) / SPEED_OF_LIGHT)) ** 2,
     powerResidual: figures.powerResidual,
     farFieldClosure: closure
       ? (farFieldPower(figures.excited.edges) + guidedWavePower(figures.excited.edges)) /

@@ -36,6 +36,6 @@ export function sceneTexts(view: View): SceneText[] {
     }
   };
   const [dx, dy] = pictureOf(view).origin;
-  visit(view.scenegraph().root as unknown as Mark, dx, dy);
+  visit((view.scenegraph() as unknown as { readonly root: Mark }).root, dx, dy);
   return found;
 }

@@ -60,7 +60,7 @@ describe.each(charts)('%s', (_, chart) => {
 
   it('holds no definitions, links or styles, and no hyphen in place of a minus', async () => {
     const svg = await svgOf(chart);
-    expect(svg).not.toMatch(/\sid="|url\(|<defs|<style|\shref=/);
+    expect(svg).not.toMatch(/\sid="|url\(|<defs|<style|\shref=|graphics-symbol|\saria-label/);
     const words = [...svg.matchAll(/<text[^>]*>([^<]*)</g)].map((match) => match[1]);
     expect(words.filter((word) => /(^|\s)-\d/.test(word))).toEqual([]);
   });

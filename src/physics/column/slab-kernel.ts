@@ -11,7 +11,7 @@
 import { besselJ0, besselK0, besselY0 } from '../../numerics/bessel.js';
 import { gaussLegendre } from '../../numerics/gauss-legendre.js';
 import { splineSlopes } from '../../numerics/spline.js';
-import { EPS0, MU0 } from '../constants.js';
+import { EPS0, MU0, SPEED_OF_LIGHT } from '../constants.js';
 import { type SlabSpectrum, slabSpectrum } from './slab-spectrum.js';
 
 /** Distances and the tail of the integrals that a family of kernels (one board, all frequencies and slabs near one height) shares. */
@@ -42,7 +42,7 @@ export interface SlabKernel {
 export function kernelGrid(maximumFrequency: number, permittivity: number, height: number, reach: number): KernelGrid {
   const split = 6 * height;
   const near = Float64Array.from({ length: 49 }, (_, i) => (split * 1.05 * i) / 48);
-  const k0 = (2 * Math.PI * maximumFrequency) / 299792458;
+  const k0 = (2 * Math.PI * maximumFrequency) / SPEED_OF_LIGHT;
   // Geometric steps until they reach a twentieth of a wavelength, equal steps from there.
   const far: number[] = [];
   const step = (2 * Math.PI) / k0 / 20;

@@ -1,6 +1,5 @@
 import { printable } from '../../chart/svg.js';
 import { checkRelativeHref } from './paths.js';
-import { styleSheet } from './style.js';
 import { fillTemplate } from './templates.js';
 
 export interface IndexEntry {
@@ -14,7 +13,7 @@ export interface IndexEntry {
   readonly summary: string;
 }
 
-/** The page that lists packs and their revisions, in the order given: one file that needs no other. */
+/** The page that lists packs and their revisions, in the order given; `styleSheet()` lies beside it as `style.css`. */
 export function renderIndex(packs: readonly IndexEntry[]): string {
   const groups = new Map<string, IndexEntry[]>();
   for (const entry of printable(packs)) {
@@ -23,8 +22,7 @@ export function renderIndex(packs: readonly IndexEntry[]): string {
     groups.set(entry.packId, group);
   }
   return fillTemplate('index', {
-    // The index is one file: its style stands in it.
-    css: styleSheet(),
+    style: 'style.css',
     packs: [...groups.values()].map((entries, index) => ({
       id: `pack-${index + 1}`,
       title: entries[0].title,

@@ -27,6 +27,7 @@ interface Segment {
   readonly run: Run;
   readonly face: Face;
   readonly text: string;
+  readonly fromRight: boolean;
   readonly shape?: Status;
 }
 /** Unbreakable unless it is wider than the line by itself. */
@@ -39,7 +40,6 @@ interface Word {
 
 const cluster = /\P{M}\p{M}*|\p{M}+/gu;
 const breakAfter = /[- –/_.,:;=+]$/;
-const rightToLeft = /[\u0590-\u08FF\uFB1D-\uFDFF\uFE70-\uFEFF]/;
 
 /**
  * Sets runs into lines of a width. Breaks at spaces; a word wider than the line is broken after a separator where one
@@ -69,11 +69,11 @@ export class LineSetter {
     };
     for (const run of runs) {
       let { shape } = run;
-      for (const { text, face } of this.press.glyphs(run.text, run.face)) {
+      for (const { text, face, fromRight } of this.press.glyphs(run.text, run.face)) {
         text.split(' ').forEach((part, index) => {
-          if (index > 0) close({ run, face, text: ' ' });
+          if (index > 0) close({ run, face, text: ' ', fromRight: false });
           if (part === '') return;
-          segments.push({ run, face, text: part, shape });
+          segments.push({ run, face, text: part, fromRight, shape });
           shape = undefined;
         });
       }
@@ -186,7 +186,8 @@ export class LineSetter {
     const joined: Segment[] = [];
     for (const segment of segments) {
       const last = joined.at(-1);
-      if (last?.run === segment.run && last.face === segment.face && segment.shape === undefined) {
+      const sameStyle = last?.run === segment.run && last.face === segment.face && last.fromRight === segment.fromRight;
+      if (last !== undefined && sameStyle && segment.shape === undefined) {
         joined[joined.length - 1] = { ...last, text: last.text + segment.text };
       } else {
         joined.push(segment);
@@ -216,7 +217,7 @@ function belongTogether(before: string, after: string): boolean {
 
 /** Words of scripts written from the right stand in their order; the spaces between them stay in place. */
 function inReadingOrder(words: readonly Word[]): Word[] {
-  const fromRight = (word: Word) => word.segments.some((segment) => rightToLeft.test(segment.text));
+  const fromRight = (word: Word) => word.segments.some((segment) => segment.fromRight);
   const ordered = [...words];
   for (let start = 0; start < ordered.length; start += 1) {
     let end = start;

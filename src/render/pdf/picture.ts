@@ -17,23 +17,20 @@ export interface Picture {
   readonly finalize: () => void;
 }
 
-declare module 'vega' {
-  /** Exported by the package, missing from its types. */
-  export const CanvasRenderer: new (
-    loader: unknown,
-  ) => {
-    initialize(
-      element: null,
-      width: number,
-      height: number,
-      origin: readonly [number, number],
-      scale: number,
-      options: { readonly externalContext: unknown },
-    ): InstanceType<typeof CanvasRenderer>;
-    background(colour: string): InstanceType<typeof CanvasRenderer>;
-    render(scene: unknown): InstanceType<typeof CanvasRenderer>;
-  };
+interface Renderer {
+  initialize(
+    element: null,
+    width: number,
+    height: number,
+    origin: readonly [number, number],
+    scale: number,
+    options: { readonly externalContext: unknown },
+  ): Renderer;
+  background(colour: string): Renderer;
+  render(scene: unknown): Renderer;
 }
+/** Exported by the package, missing from its types. */
+const { CanvasRenderer } = vega as unknown as { readonly CanvasRenderer: new (loader: unknown) => Renderer };
 
 const printTheme = { ...theme, figure: { ...theme.figure, paper: '#ffffff' } };
 
@@ -63,7 +60,7 @@ export async function preparePicture(figure: FigureBlock): Promise<Picture> {
     paint: (press, x, y, scale) => {
       const context = new CanvasContext(press, x, y, scale);
       context.save();
-      new vega.CanvasRenderer(view.loader())
+      new CanvasRenderer(view.loader())
         .initialize(null, width, height, [left + originX, top + originY], 1, { externalContext: context })
         .background(printTheme.figure.paper)
         .render((view.scenegraph() as unknown as { readonly root: unknown }).root);

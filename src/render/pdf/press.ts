@@ -14,10 +14,14 @@ const facePaths: Readonly<Record<Face, string>> = {
 };
 
 export type Element = PDFKit.PDFStructureElement;
+/** Text of one face and one direction of writing. */
 export interface Glyphs {
   readonly text: string;
   readonly face: Face;
+  readonly fromRight: boolean;
 }
+
+const rightToLeft = /[\u0590-\u08FF\uFB1D-\uFDFF\uFE70-\uFEFF]|[\u{10800}-\u{10FFF}\u{1E800}-\u{1EFFF}]/u;
 
 /**
  * The document being written: fonts, measuring, tagging, named places. All painting goes through here, so that
@@ -78,14 +82,18 @@ export class Press {
     return known;
   }
 
-  /** Text split by the face that has its glyphs: the wished one, else the regular one, else the replacement sign. */
+  /**
+   * Text split by the face that has its glyphs: the wished one, else the regular one, else the replacement sign. Split
+   * by direction too: a text that mixes both would be turned round as a whole.
+   */
   glyphs(text: string, wished: Face): Glyphs[] {
-    const parts: { text: string; face: Face }[] = [];
+    const parts: { text: string; face: Face; fromRight: boolean }[] = [];
     for (const sign of safeText(text)) {
       const face = this.covers(wished, sign) ? wished : this.covers('sans', sign) ? 'sans' : undefined;
-      const part = { text: face === undefined ? replacementSign : sign, face: face ?? wished };
+      const fromRight = face !== undefined && rightToLeft.test(sign);
+      const part = { text: face === undefined ? replacementSign : sign, face: face ?? wished, fromRight };
       const last = parts.at(-1);
-      if (last?.face === part.face) last.text += part.text;
+      if (last?.face === part.face && last.fromRight === fromRight) last.text += part.text;
       else parts.push(part);
     }
     return parts;

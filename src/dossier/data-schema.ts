@@ -1,0 +1,186 @@
+import { z } from 'zod';
+
+/**
+ * Shape of the JSON data of a pack: the one source of the TypeScript types, of the check before writing and of the JSON
+ * Schema beside the files. Numbers are SI unless their name says otherwise, with 12 significant digits; `null` stands
+ * where a value does not exist or was not evaluated.
+ */
+const value = z.number().nullable();
+const text = z.string();
+
+const place = z.strictObject({ frequencyHz: z.number(), temperatureC: z.number() });
+const status = z.enum(['meets', 'undecided', 'misses', 'not evaluated', 'open until measured']);
+
+const part = z.strictObject({
+  id: text,
+  kind: z.enum(['engine', 'roughness', 'tolerance']),
+  label: text,
+  detail: text,
+  adverse: z.number().describe('how far the margin may be smaller, ≥ 0'),
+  favourable: z.number().describe('how far the margin may be larger, ≥ 0'),
+  atLimits: z.strictObject({ low: z.number(), high: z.number() }).optional(),
+});
+
+const verdict = z.strictObject({
+  boardId: text,
+  requirementId: text,
+  status,
+  calculated: z.enum(['meets', 'undecided', 'misses', 'not evaluated']).optional(),
+  unit: text.describe('unit of value, limit, margin and uncertainty; 1 for a ratio'),
+  value: z.union([z.number(), z.string()]).nullable(),
+  where: place.nullable(),
+  margin: value.describe('distance to the limit, positive inside'),
+  adverse: value,
+  favourable: value,
+  parts: z.array(part),
+  byModel: z.array(z.strictObject({ model: text, value: z.number(), margin: z.number() })),
+  reason: text.optional(),
+});
+
+const requirement = z.strictObject({
+  id: text,
+  text,
+  quantity: text,
+  cut: text.optional(),
+  unit: text,
+  limit: z.strictObject({ direction: z.enum(['at_least', 'at_most']), value: z.number() }).optional(),
+  mask: z.array(z.strictObject({ fromRad: z.number(), toRad: z.number(), levelDb: z.number() })).optional(),
+  property: text.optional(),
+  allowed: z.array(text).optional(),
+  weight: z.enum(['binding', 'target']),
+  verification: z.enum(['calculation', 'test']),
+  source: text,
+});
+
+const header = {
+  program: z.literal('boardcase'),
+  programVersion: text,
+  notices: z.array(text).describe('cautions that go with the data'),
+};
+
+const evidence = z.strictObject({
+  id: text,
+  topic: text,
+  quantity: text,
+  source: text,
+  howKnown: text,
+  unit: text,
+  expected: value,
+  value,
+  deviation: value,
+  tolerance: value,
+  ok: z.boolean(),
+});
+
+export const packDataSchema = z
+  .strictObject({
+    ...header,
+    kind: z.literal('pack'),
+    pack: z.strictObject({
+      id: text,
+      title: text,
+      documentNumber: text,
+      revision: text,
+      date: text,
+      status: text,
+      authors: z.array(text),
+      owner: text,
+    }),
+    boards: z.array(
+      z.strictObject({
+        id: text,
+        title: text,
+        overall: z.enum(['meets', 'undecided', 'misses', 'open until measured', 'incomplete']),
+        reason: text,
+        inputsHash: text,
+        cost: z.strictObject({ amount: z.number(), currency: text }).nullable(),
+        data: text.describe('name of the file with the results of the board, beside this one'),
+      }),
+    ),
+    requirements: z.array(requirement),
+    verdicts: z.array(verdict),
+    evidence: z.array(evidence),
+    inputs: z.array(z.strictObject({ path: text, sha256: text })),
+  })
+  .describe('Verdicts of a pack of boards: calculated design evidence, not a declaration of conformity');
+
+const complexValue = z.strictObject({ re: value, im: value });
+const cutFigures = z.strictObject({
+  beamDirectionRad: value,
+  halfPowerBeamwidthRad: value,
+  sidelobeDb: value,
+});
+const cut = z.strictObject({ angleRad: z.array(z.number()), gainDbi: z.array(value) });
+
+const point = z.strictObject({
+  frequencyHz: z.number(),
+  temperatureC: z.number(),
+  directivity: value.describe('ratio'),
+  gain: value.describe('ratio, at the input of the feed network, without mismatch'),
+  realizedGain: value.describe('ratio'),
+  radiationEfficiency: value,
+  feedTransmission: value,
+  mismatch: value.describe('1 less reflected over incident power, all columns driven'),
+  shares: z.record(text, value).describe('fractions of the power accepted at the column ports; they sum to 1'),
+  columnReflection: z.array(complexValue),
+  activeReflection: z.array(complexValue),
+  referenceImpedanceOhm: z.array(value),
+  elevation: cutFigures,
+  azimuth: cutFigures,
+  lineLossDbPerM: value,
+  lineEffectivePermittivity: value,
+  powerResidual: value.describe('power of ten above the residual of the circuit, over the input power'),
+  farFieldClosure: value,
+});
+
+const curves = z.strictObject({
+  x: z.array(z.number()),
+  curves: z.array(z.strictObject({ model: text, y: z.array(value) })),
+});
+
+export const boardDataSchema = z
+  .strictObject({
+    ...header,
+    kind: z.literal('board'),
+    packId: text,
+    revision: text,
+    boardId: text,
+    title: text,
+    inputsHash: text,
+    nominal: z.array(point),
+    models: z.array(z.strictObject({ model: text, points: z.array(point) })),
+    cuts: z
+      .array(z.strictObject({ frequencyHz: z.number(), temperatureC: z.number(), elevation: cut, azimuth: cut }))
+      .describe('at the band edges and the band centre, nominal temperature'),
+    lineLossDbPerM: curves.describe('over Hz'),
+    lossFactor: curves.describe('over Rq in m'),
+    faces: z.array(
+      z.strictObject({
+        face: text,
+        rqM: value,
+        skinDepthM: value,
+        models: z.array(z.strictObject({ model: text, lossFactor: value, reactance: value, planeShiftM: value })),
+      }),
+    ),
+    flags: z.array(z.strictObject({ code: text, severity: text, model: text, text })),
+    notEvaluated: z.array(z.strictObject({ quantities: z.array(text), reason: text })),
+    losslessClosure: value,
+    verdicts: z.array(verdict),
+  })
+  .describe('Results of one board: calculated design evidence, not a declaration of conformity');
+
+export type PackData = z.infer<typeof packDataSchema>;
+export type BoardData = z.infer<typeof boardDataSchema>;
+export type VerdictData = z.infer<typeof verdict>;
+export type PointData = z.infer<typeof point>;
+
+const file = (schema: z.ZodType, title: string): object => ({
+  ...z.toJSONSchema(schema, { target: 'draft-2020-12', io: 'input' }),
+  title,
+});
+
+/** JSON Schema of the data files, by the name under which it stands beside them. */
+export const dataSchemas = (): Readonly<Record<string, object>> => ({
+  'data/pack.schema.json': file(packDataSchema, 'Data of a pack'),
+  'data/board.schema.json': file(boardDataSchema, 'Data of a board'),
+});

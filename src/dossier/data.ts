@@ -1,0 +1,197 @@
+import type { Requirement } from '../manifest/model.js';
+import type { Complex } from '../numerics/complex.js';
+import type { Cut, CutFigures, ModelCurves, PointResult } from '../study/results.js';
+import { type BoardVerdict, quantityOf, type RequirementVerdict } from '../verdict/index.js';
+import { type BoardContext, bandPoints, boardContexts, type PackInput } from './context.js';
+import {
+  type BoardData,
+  boardDataSchema,
+  type PackData,
+  type PointData,
+  packDataSchema,
+  type VerdictData,
+} from './data-schema.js';
+import { slug } from './links.js';
+import { CAUTION_NOTICE, COMPARED_WITH } from './statements.js';
+import { exponentAbove } from './values.js';
+
+const DIGITS = 12;
+
+/** 12 significant digits: more than any figure here deserves, fewer than differ between engines of the language. */
+const num = (x: number): number => Number(x.toPrecision(DIGITS));
+const maybe = (x: number | undefined): number | null => (x === undefined || !Number.isFinite(x) ? null : num(x));
+
+const complexData = ({ re, im }: Complex) => ({ re: maybe(re), im: maybe(im) });
+const figuresData = (f: CutFigures) => ({
+  beamDirectionRad: maybe(f.beamDirection),
+  halfPowerBeamwidthRad: maybe(f.halfPowerBeamwidth),
+  sidelobeDb: maybe(f.sidelobeDb),
+});
+const cutData = (c: Cut) => ({ angleRad: Array.from(c.angle, num), gainDbi: Array.from(c.gainDbi, maybe) });
+const curvesData = ({ x, curves }: ModelCurves) => ({
+  x: x.map(num),
+  curves: curves.map(({ model, y }) => ({ model, y: y.map(maybe) })),
+});
+
+const pointData = (p: PointResult): PointData => ({
+  frequencyHz: num(p.frequency),
+  temperatureC: num(p.temperatureC),
+  directivity: maybe(p.directivity),
+  gain: maybe(p.gain),
+  realizedGain: maybe(p.realizedGain),
+  radiationEfficiency: maybe(p.radiationEfficiency),
+  feedTransmission: maybe(p.feedTransmission),
+  mismatch: maybe(p.mismatch),
+  shares: Object.fromEntries(Object.entries(p.shares).map(([name, share]) => [name, maybe(share)])),
+  columnReflection: p.columnReflection.map(complexData),
+  activeReflection: p.activeReflection.map(complexData),
+  referenceImpedanceOhm: p.referenceImpedance.map(maybe),
+  elevation: figuresData(p.elevation),
+  azimuth: figuresData(p.azimuth),
+  lineLossDbPerM: maybe(p.lineLossDbPerM),
+  lineEffectivePermittivity: maybe(p.lineEffectivePermittivity),
+  powerResidual: Number.isFinite(p.powerResidual) ? num(10 ** exponentAbove(p.powerResidual)) : null,
+  farFieldClosure: maybe(p.farFieldClosure),
+});
+
+const verdictData = (boardId: string, v: RequirementVerdict): VerdictData => ({
+  boardId,
+  requirementId: v.requirementId,
+  status: v.status,
+  ...(v.calculated === undefined ? {} : { calculated: v.calculated }),
+  unit: v.unit,
+  value: typeof v.value === 'string' ? v.value : maybe(v.value),
+  where:
+    v.where === undefined ? null : { frequencyHz: num(v.where.frequency), temperatureC: num(v.where.temperatureC) },
+  margin: maybe(v.margin),
+  adverse: maybe(v.adverse),
+  favourable: maybe(v.favourable),
+  parts: v.parts.map(({ id, kind, label, detail, adverse, favourable, atLimits }) => ({
+    id,
+    kind,
+    label,
+    detail,
+    adverse: num(adverse),
+    favourable: num(favourable),
+    ...(atLimits === undefined ? {} : { atLimits: { low: num(atLimits.low), high: num(atLimits.high) } }),
+  })),
+  byModel: v.models.map(({ model, value, margin }) => ({ model, value: num(value), margin: num(margin) })),
+  ...(v.reason === undefined ? {} : { reason: v.reason }),
+});
+
+const verdictsData = (verdict: BoardVerdict): VerdictData[] =>
+  verdict.requirements.map((v) => verdictData(verdict.boardId, v));
+
+const requirementData = (r: Requirement): PackData['requirements'][number] => ({
+  id: r.id,
+  text: r.text,
+  quantity: r.quantity,
+  ...(r.cut === undefined ? {} : { cut: r.cut }),
+  unit: quantityOf(r.quantity).unit,
+  ...(r.limit === undefined ? {} : { limit: { direction: r.limit.direction, value: num(r.limit.value) } }),
+  ...(r.mask === undefined
+    ? {}
+    : { mask: r.mask.map(({ from, to, levelDb }) => ({ fromRad: num(from), toRad: num(to), levelDb: num(levelDb) })) }),
+  ...(r.property === undefined ? {} : { property: r.property }),
+  ...(r.allowed === undefined ? {} : { allowed: [...r.allowed] }),
+  weight: r.weight,
+  verification: r.verification,
+  source: r.source,
+});
+
+const boardFile = (boardId: string): string => `board-${slug(boardId)}.json`;
+
+const header = ({ pack, programVersion }: PackInput) => ({
+  program: 'boardcase' as const,
+  programVersion,
+  notices: [...(pack.notice === undefined ? [] : [pack.notice]), CAUTION_NOTICE, COMPARED_WITH],
+});
+
+function boardData(context: BoardContext): BoardData {
+  const { input, board, study, verdict } = context;
+  const points = bandPoints(context);
+  const chosen = points === undefined ? [] : [points.low, points.centre, points.high];
+  return {
+    ...header(input),
+    kind: 'board',
+    packId: input.pack.id,
+    revision: input.pack.revision,
+    boardId: board.id,
+    title: board.title,
+    inputsHash: study.hash,
+    nominal: study.nominal.points.map(pointData),
+    models: study.models.map(({ model, sweep }) => ({ model, points: sweep.points.map(pointData) })),
+    cuts: [...new Set(chosen)].map((p) => ({
+      frequencyHz: num(p.frequency),
+      temperatureC: num(p.temperatureC),
+      elevation: cutData(p.cuts.elevation),
+      azimuth: cutData(p.cuts.azimuth),
+    })),
+    lineLossDbPerM: curvesData(study.lineLoss),
+    lossFactor: curvesData(study.lossFactor),
+    faces: study.faces.map(({ face, rq, skinDepth, models }) => ({
+      face,
+      rqM: maybe(rq),
+      skinDepthM: maybe(skinDepth),
+      models: models.map((m) => ({
+        model: m.model,
+        lossFactor: maybe(m.lossFactor),
+        reactance: maybe(m.reactance),
+        planeShiftM: maybe(m.planeShift),
+      })),
+    })),
+    flags: study.flags.map(({ code, severity, model, text }) => ({ code, severity, model, text })),
+    notEvaluated: study.notEvaluated.map(({ quantities, reason }) => ({ quantities: [...quantities], reason })),
+    losslessClosure: maybe(study.losslessClosure),
+    verdicts: verdictsData(verdict),
+  };
+}
+
+function packFile(input: PackInput, boards: readonly BoardContext[]): PackData {
+  const { id, title, documentNumber, revision, date, status, authors, owner, requirements, inputs } = input.pack;
+  return {
+    ...header(input),
+    kind: 'pack',
+    pack: { id, title, documentNumber, revision, date, status, authors: [...authors], owner },
+    boards: boards.map(({ board, study, verdict }) => ({
+      id: board.id,
+      title: board.title,
+      overall: verdict.overall,
+      reason: verdict.reason,
+      inputsHash: study.hash,
+      cost: board.cost === undefined ? null : { amount: num(board.cost.amount), currency: board.cost.currency },
+      data: boardFile(board.id),
+    })),
+    requirements: requirements.requirements.map(requirementData),
+    verdicts: boards.flatMap(({ verdict }) => verdictsData(verdict)),
+    evidence: input.evidence.map((e) => ({
+      id: e.id,
+      topic: e.topic,
+      quantity: e.quantity,
+      source: e.source,
+      howKnown: e.howKnown,
+      unit: e.unit,
+      expected: maybe(e.expected),
+      value: maybe(e.value),
+      deviation: maybe(e.deviation),
+      tolerance: maybe(e.tolerance),
+      ok: e.ok,
+    })),
+    inputs: inputs.map(({ path, sha256 }) => ({ path, sha256 })),
+  };
+}
+
+/**
+ * Results of a pack as plain JSON values, by file name, each checked against its schema.
+ *
+ * @throws ZodError when a result does not fit its schema, which is a fault of the program
+ */
+export function packData(input: PackInput): Readonly<Record<string, PackData | BoardData>> {
+  const boards = boardContexts(input);
+  return {
+    'data/pack.json': packDataSchema.parse(packFile(input, boards)),
+    ...Object.fromEntries(
+      boards.map((context) => [`data/${boardFile(context.board.id)}`, boardDataSchema.parse(boardData(context))]),
+    ),
+  };
+}

@@ -1,0 +1,80 @@
+import { describe, expect, it } from 'vitest';
+import { differencesBetween } from '../../src/dossier/differences.js';
+import type { Board } from '../../src/manifest/model.js';
+import { board, figure } from './board-fixture.js';
+
+/** Fields that say where something comes from or what it is called, and change no result. */
+const APART = new Set([
+  'id',
+  'title',
+  'description',
+  'basedOn',
+  'file',
+  'overrides',
+  'path',
+  'provenance',
+  'declared',
+  'stated',
+  'instrument',
+  'filter',
+  'conversion',
+  'basis',
+  'invented',
+  'untreatedFace',
+  'treatedFace',
+]);
+
+/** Every path to a number or text of the board that a result may depend on. */
+function leaves(value: unknown, path: readonly string[] = []): readonly (readonly string[])[] {
+  if (typeof value === 'number' || typeof value === 'string') return [path];
+  if (typeof value !== 'object' || value === null) return [];
+  return Object.entries(value).flatMap(([key, child]) => (APART.has(key) ? [] : leaves(child, [...path, key])));
+}
+
+function changed(value: unknown, [key, ...rest]: readonly string[]): unknown {
+  if (key === undefined) return typeof value === 'number' ? value * 1.5 + 1e-6 : `${value}x`;
+  const copy: Record<string, unknown> | unknown[] = Array.isArray(value) ? [...value] : { ...(value as object) };
+  (copy as Record<string, unknown>)[key] = changed((value as Record<string, unknown>)[key], rest);
+  return copy;
+}
+
+const base = board('qb-1');
+const full: Board = {
+  ...base,
+  referenceImpedance: 50,
+  stackUp: {
+    ...base.stackUp,
+    cover: {
+      material: 'mask',
+      permittivity: figure('c.permittivity', 3.5, 0.1),
+      lossTangent: figure('c.loss_tangent', 0.02, 0.01),
+      thickness: figure('c.thickness', 25e-6, 5e-6),
+    },
+    laminate: {
+      ...base.stackUp.laminate,
+      material: {
+        ...base.stackUp.laminate.material,
+        permittivityTemperatureCoefficient: figure('l.tce', -20e-6, 5e-6),
+        lossTangentTemperatureCoefficient: figure('l.tcd', 2e-3, 5e-4),
+      },
+    },
+  },
+  feed: base.feed.map((path, i) =>
+    i === 0 ? { ...path, line: { width: 0.16e-3, length: 4e-3 }, lossDb: undefined } : path,
+  ),
+};
+
+describe('differences between boards', () => {
+  it('are none between a board and itself', () => {
+    expect(differencesBetween([full, { ...full, id: 'other', title: 'Other' }])).toEqual([]);
+  });
+
+  const paths = leaves(full);
+  it('has something to walk', () => {
+    expect(paths.length).toBeGreaterThan(80);
+  });
+
+  it.each(paths.map((path) => [path.join('.'), path] as const))('show a change of %s', (_, path) => {
+    expect(differencesBetween([full, changed(full, path) as Board]).length).toBeGreaterThan(0);
+  });
+});

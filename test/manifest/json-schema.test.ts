@@ -1,0 +1,94 @@
+import { readFileSync } from 'node:fs';
+import { Ajv2020 } from 'ajv/dist/2020.js';
+import { CORE_SCHEMA, load as parse } from 'js-yaml';
+import { describe, expect, it } from 'vitest';
+import { manifestSchemas, schemaText } from '../../src/manifest/index.js';
+import { FIXTURE_FILES, fixtureText } from './fixture.js';
+
+const schemas = manifestSchemas();
+const ajv = new Ajv2020({ strict: true, strictTypes: false, strictRequired: false, allErrors: false });
+const validators = new Map(Object.entries(schemas).map(([name, schema]) => [name, ajv.compile(schema)]));
+
+const schemaFor = (file: string) =>
+  file.startsWith('boards/') ? 'board.schema.json' : `${file.replace('.yaml', '')}.schema.json`;
+const accepts = (file: string, text: string) => validators.get(schemaFor(file))!(parse(text, { schema: CORE_SCHEMA }));
+
+describe('manifestSchemas', () => {
+  it.each(Object.keys(schemas))('%s is committed as it is generated', (name) => {
+    const committed = readFileSync(new URL(`../../manifests/schema/${name}`, import.meta.url), 'utf8');
+    expect(committed === schemaText(schemas[name]!), `write it again with the command schema`).toBe(true);
+  });
+
+  it.each(FIXTURE_FILES)('accepts %s', (file) => {
+    expect(accepts(file, fixtureText(file))).toBe(true);
+    expect(fixtureText(file)).toMatch(
+      new RegExp(
+        `^# yaml-language-server: \\$schema=(\\.\\./)+manifests/schema/${schemaFor(file).replaceAll('.', '\\.')}\\n`,
+      ),
+    );
+  });
+
+  it.each([
+    ['boards/qs-1.yaml', '  pitch:', '  pich:'],
+    ['boards/qs-1.yaml', 'value: 127 um', 'value: 127'],
+    ['boards/qs-1.yaml', 'value: 127 um', 'value: 127 GHz'],
+    ['boards/qs-1.yaml', 'spread: 8 um', 'spread: -8 um'],
+    ['boards/qs-1.yaml', '  pitch: 2.15 mm\n', ''],
+    ['boards/qs-1.yaml', 'kind: foil', 'kind: plated'],
+    ['boards/qs-1.yaml', 'count: 4,', 'count: 4, width: 1 mm,'],
+    ['boards/qs-1.yaml', '  path:\n', '  path:\n    line: { width: 1 mm, length: 1 mm }\n'],
+    ['boards/qs-1.yaml', 'reference_impedance: line', 'reference_impedance: 50'],
+    ['boards/qs-1.yaml', 'id: qs-1', 'id: QS 1'],
+    ['boards/qs-2.yaml', 'based_on: qs-1\n', ''],
+    ['boards/qs-2.yaml', 'foil: kf-10', 'foli: kf-10'],
+    ['laminates.yaml', 'spread: 0.05, ', ''],
+    ['laminates.yaml', 'basis: guaranteed, ', ''],
+    ['laminates.yaml', 'value: 3.00', 'value: 300'],
+    ['laminates.yaml', 'invented: true', 'invented: yes'],
+    [
+      'foils.yaml',
+      '      Rq: { value: 0.4 um',
+      '      Rz: { value: 2 um, spread: 0 um, basis: typical }\n      Rq: { value: 0.4 um',
+    ],
+    ['finishes.yaml', 'relative_permeability: 1', 'relative_permeability: one'],
+    ['pack.yaml', 'status: for_review', 'status: for review'],
+    ['pack.yaml', 'date: 2026-11-02', 'date: 2.11.2026'],
+    ['pack.yaml', 'revision: A', 'revision: 1'],
+    ['requirements.yaml', 'at_least: 13 dBi', 'at_least: 13 dB'],
+    ['requirements.yaml', 'at_least: 13 dBi', 'at_least: 13 dBi, at_most: 14 dBi'],
+    ['requirements.yaml', '    cut: azimuth\n', ''],
+    ['requirements.yaml', '    limit: { at_least: 13 dBi }\n', ''],
+    ['requirements.yaml', '    property: flammability\n', ''],
+  ])('refuses %s with %j as %j', (file, from, to) => {
+    const text = fixtureText(file);
+    expect(text).toContain(from);
+    expect(accepts(file, text.replace(from, to))).toBe(false);
+  });
+
+  it('takes an empty value in a variant only', () => {
+    expect(accepts('boards/qs-2.yaml', `${fixtureText('boards/qs-2.yaml').replace(/cost:.*/, 'cost:')}`)).toBe(true);
+    expect(accepts('boards/qs-1.yaml', fixtureText('boards/qs-1.yaml').replace(/cost:.*/, 'cost:'))).toBe(false);
+  });
+
+  it('describes every field', () => {
+    const bare: string[] = [];
+    let fields = 0;
+    const visit = (node: unknown, path: string) => {
+      if (Array.isArray(node)) for (const [i, item] of node.entries()) visit(item, `${path}/${i}`);
+      if (node === null || typeof node !== 'object' || Array.isArray(node)) return;
+      // Conditions (if, then, else of our own) repeat fields described elsewhere.
+      const { properties, if: _if, ...rest } = node as Record<string, unknown>;
+      const conditional = 'if' in node && !('properties' in node) && !path.endsWith('board.schema.json');
+      if (conditional) return;
+      for (const [key, field] of Object.entries((properties ?? {}) as Record<string, { description?: string }>)) {
+        fields++;
+        if (!field.description) bare.push(`${path}.${key}`);
+        visit(field, `${path}.${key}`);
+      }
+      for (const [key, inner] of Object.entries(rest)) visit(inner, `${path}/${key}`);
+    };
+    for (const [name, schema] of Object.entries(schemas)) visit(schema, name);
+    expect(bare).toEqual([]);
+    expect(fields).toBeGreaterThan(200);
+  });
+});
