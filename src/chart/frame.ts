@@ -54,6 +54,7 @@ export interface FrameInput {
 const sampleWidth = 22;
 const flagRow = 14;
 const longestLabel = 190;
+const longestFlag = 320;
 
 /** Measures what stands around the plot and leaves it the rest of the width. */
 export function makeFrame(input: FrameInput): Frame {
@@ -70,7 +71,7 @@ export function makeFrame(input: FrameInput): Frame {
   const width = chartWidth - left - right;
   const x = makeScale(input.xType, input.xDomain, [0, width]);
   const shown = input.flags
-    .map((flag) => ({ text: shorten(flag.text, size, longestLabel), at: x.toPixel(flag.at) }))
+    .map((flag) => ({ text: shorten(flag.text, size, longestFlag), at: x.toPixel(flag.at) }))
     .filter((flag) => flag.at >= -0.5 && flag.at <= width + 0.5);
   const flags = stackFlags(shown, size, chartWidth - left - 4);
   const rows = flags.reduce((most, flag) => Math.max(most, flag.row + 1), 0);

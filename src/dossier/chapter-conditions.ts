@@ -3,7 +3,7 @@ import { cell, chapter, facts, number, plainTable, prose } from './blocks.js';
 import { type BoardContext, bandPoints, type Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
-import { bandText, celsius, changeText, count, temperatureText } from './values.js';
+import { bandText, celsius, changePair, count, temperatureText } from './values.js';
 
 /** More columns than this do not fit a printed page. */
 const COLUMNS = 5;
@@ -13,7 +13,7 @@ function effectCell({ verdict }: Judged, toleranceId: string): Cell {
   if (part?.atLimits === undefined || typeof verdict.value !== 'number') return cell('–');
   const { low, high } = part.atLimits;
   const { unit, value } = verdict;
-  return number(`${changeText(low - value, unit)} / ${changeText(high - value, unit)}`);
+  return number(changePair(low - value, high - value, unit));
 }
 
 function toleranceTables({ board, study, judged }: BoardContext): readonly Block[] {
@@ -26,7 +26,7 @@ function toleranceTables({ board, study, judged }: BoardContext): readonly Block
   return groups.map((group, n) =>
     plainTable(
       `tolerances-${n + 1}`,
-      'Each declared tolerance moved alone: change of the worst value at its lower / upper limit, nominal roughness model',
+      'Change of the worst value at the lower / upper limit of each tolerance, nominal roughness model',
       [
         { title: 'Tolerance', width: 1.6 },
         { title: 'Range', width: 1.2 },

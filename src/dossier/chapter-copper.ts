@@ -87,13 +87,13 @@ function lineLossFigure({ input, board, study, judged }: BoardContext): Block {
   });
 }
 
-/** Faces with the same Rq share a mark, which would otherwise print over itself. */
+/** Faces with the same Rq share a mark, which would otherwise print over itself; notes in brackets stay in the table. */
 function faceMarks(faces: readonly FaceState[]): NonNullable<LinesChart['marks']> {
   const places = [...new Set(faces.map((face) => rounded(face.rq * 1e6, 4)))];
   return places.map((place) => ({
     label: faces
       .filter((face) => rounded(face.rq * 1e6, 4) === place)
-      .map((face) => face.face)
+      .map((face) => face.face.replace(/ \(.*$/, ''))
       .join(' + '),
     at: place,
   }));

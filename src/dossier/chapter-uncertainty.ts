@@ -7,34 +7,32 @@ import { figureTextByPath } from './figures.js';
 import { DEFINITIONS, EVIDENCE, link } from './links.js';
 import { changeText, marginText, valueText } from './values.js';
 
-const KIND = { engine: 'root sum of squares', roughness: 'linearly', tolerance: 'root sum of squares' } as const;
-
 function partTable({ board, study }: BoardContext, { requirement, verdict }: Judged): Block {
   const { unit, parts, models, adverse = 0, favourable = 0, margin = 0 } = verdict;
   const against = (value: number): Cell => number(changeText(-value, unit));
   const forIt = (value: number): Cell => number(changeText(value, unit));
   const detailOf = (id: string, detail: string): string => {
     const tolerance = study.tolerances.find((t) => `tolerance-${t.id}` === id);
-    return tolerance === undefined ? detail : `${figureTextByPath(board, tolerance.figure)}; ${detail}`;
+    if (tolerance === undefined) return detail;
+    const shared = study.tolerances.filter((t) => t.label === tolerance.label).length > 1;
+    return `${figureTextByPath(board, tolerance.figure)}${shared ? ` (${tolerance.figure.path})` : ''}`;
   };
   const byModel = models.map((m) => `${modelTitle(m.model)} ${valueText(m.value, unit)}`).join(', ');
   return table(
     `uncertainty-${requirement.id}`,
     `${requirement.id}, ${quantityTitle(requirement)}: margin ${marginText(margin, unit)}, parts of its uncertainty`,
-    ['Part|1.3', '#Against', '#For', 'Added', 'What was done|3'],
+    ['Part|2', '#Against', '#For', 'Range or ground|3'],
     [
       ...parts.map((part) => [
         cell(part.label),
         against(part.adverse),
         forIt(part.favourable),
-        cell(KIND[part.kind]),
-        cell(part.kind === 'roughness' ? `${part.detail}: ${byModel}` : detailOf(part.id, part.detail)),
+        cell(part.kind === 'roughness' ? `worst value with each model: ${byModel}` : detailOf(part.id, part.detail)),
       ]),
       [
         cell({ strong: 'Together' }),
         against(adverse),
         forIt(favourable),
-        cell('–'),
         cell(`margin between ${marginText(margin - adverse, unit)} and ${marginText(margin + favourable, unit)}`),
       ],
     ],
@@ -47,7 +45,7 @@ export function uncertaintyChapter(context: BoardContext): Chapter {
     'uncertainty',
     'Uncertainty',
     prose(
-      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread over the roughness models is added linearly, because nobody knows which model is right for this copper. The rule stands under ',
+      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread over the roughness models is added linearly, because nobody knows which model is right for this copper. Every tolerance is moved alone to both its limits under every roughness model, and its largest effect counts. The rule stands under ',
       link('Definitions', DEFINITIONS, 'uncertainty-rule'),
       ', the engine accuracy with its sources under ',
       link('Evidence', EVIDENCE, 'engine-accuracy'),

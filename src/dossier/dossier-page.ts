@@ -10,7 +10,7 @@ import { uncertaintyChapter } from './chapter-uncertainty.js';
 import { verdictChapter } from './chapter-verdict.js';
 import { type BoardContext, page } from './context.js';
 import type { DocumentPage } from './document.js';
-import { boardPage, slug } from './links.js';
+import { boardPage, boardTitle, slug } from './links.js';
 
 /** Dossier of one board; chapters in the order in which a reviewer decides. */
 export function dossierPage(context: BoardContext): DocumentPage {
@@ -18,8 +18,8 @@ export function dossierPage(context: BoardContext): DocumentPage {
   return page(input, {
     id: boardPage(board.id),
     kind: 'dossier',
-    title: board.title,
-    subtitle: `Board ${board.id}: ${verdict.overall}`,
+    title: boardTitle(board),
+    subtitle: `Verdict: ${verdict.overall}`,
     suffix: slug(board.id).toUpperCase(),
     chapters: [
       verdictChapter(context),

@@ -15,5 +15,9 @@ export const DEFINITIONS = 'definitions';
 export const boardPage = (boardId: string): string => `board/${slug(boardId)}`;
 export const requirementPage = (requirementId: string): string => `requirement/${slug(requirementId)}`;
 
+/** A board in headings, tables and navigation: titles may speak of other boards by their ids. */
+export const boardTitle = (board: { readonly id: string; readonly title: string }): string =>
+  `${board.id}: ${board.title}`;
+
 export const link = (text: string, page: string, anchor?: string): Inline =>
   anchor === undefined ? { text, page } : { text, page, anchor };

@@ -6,7 +6,7 @@ import { type BoardContext, type Judged, judgedOn, type PackInput, page } from '
 import { differencesBetween } from './differences.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
 import { concernsOf } from './figures.js';
-import { boardPage, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
+import { boardPage, boardTitle, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
 import { rankedRequirements, standing, tightest } from './standing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
 import { count, limitText, marginText, statedNumber, valueText } from './values.js';
@@ -29,7 +29,7 @@ const notEvaluatedOn = (board: BoardContext): number =>
 function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof rankedRequirements>): Block {
   return plainTable(
     'matrix',
-    'Every board against every requirement: status and worst margin over band and temperature; the requirement with the worst margin first',
+    'Status and worst margin of every board against every requirement, worst first',
     [
       { title: 'Board', width: 1.4 },
       { title: 'Overall', width: 1.2 },
@@ -38,7 +38,7 @@ function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof ranke
       })),
     ],
     boards.map((board) => [
-      cell(link(board.board.title, boardPage(board.board.id))),
+      cell(link(boardTitle(board.board), boardPage(board.board.id))),
       cell({ status: board.verdict.overall }),
       ...ranked.map(({ requirement }) => matrixCell(judgedOn(board, requirement.id))),
     ]),
@@ -62,7 +62,7 @@ function requirementList(boards: readonly BoardContext[], ranked: ReturnType<typ
         cell(quantityTitle(requirement)),
         cell(limitText(requirement, unit)),
         cell(requirement.weight),
-        worst === undefined ? cell('–') : cell(link(worst.board.title, boardPage(worst.board.id))),
+        worst === undefined ? cell('–') : cell(link(boardTitle(worst.board), boardPage(worst.board.id))),
       ];
     }),
   );
@@ -81,7 +81,7 @@ function standings(boards: readonly BoardContext[]): Block {
       const tight = tightest(context);
       const ratio = tight === undefined ? undefined : standing(tight.verdict);
       return [
-        cell(link(context.board.title, boardPage(context.board.id))),
+        cell(link(boardTitle(context.board), boardPage(context.board.id))),
         cell({ status: context.verdict.overall }),
         cell(context.verdict.reason),
         tight === undefined ? cell('–') : cell(link(tight.requirement.id, requirementPage(tight.requirement.id))),
@@ -104,7 +104,7 @@ function assumptionTable(boards: readonly BoardContext[]): Block {
       const strongest = concerns.slice(0, 3).map((c) => c.use.label);
       const more = concerns.length - strongest.length;
       return [
-        cell(link(board.title, boardPage(board.id))),
+        cell(link(boardTitle(board), boardPage(board.id))),
         number(String(concerns.filter((c) => c.outsideFrequency).length)),
         number(String(basis('estimated'))),
         number(String(basis('typical'))),
@@ -122,14 +122,14 @@ function differences(boards: readonly BoardContext[]): Block {
   return plainTable(
     'difference-table',
     'Fields in which the boards differ',
-    [{ title: 'Field', width: 1.3 }, ...boards.map(({ board }) => ({ title: board.title }))],
+    [{ title: 'Field', width: 1.3 }, ...boards.map(({ board }) => ({ title: boardTitle(board) }))],
     found.map(({ label, values }) => [cell(label), ...values.map((value) => cell(value))]),
   );
 }
 
 function pagesChapter({ pack }: PackInput, boards: readonly BoardContext[]): Chapter {
   const dossier = ({ board, verdict }: BoardContext): readonly Inline[] => [
-    link(`Dossier: ${board.title}`, boardPage(board.id)),
+    link(`Dossier of ${boardTitle(board)}`, boardPage(board.id)),
     ' ',
     { status: verdict.overall },
   ];
@@ -164,7 +164,7 @@ function summary(boards: readonly BoardContext[]): readonly Block[] {
         ` ${count(found.length, 'board')}: `,
         ...found.flatMap(({ board }, i): Inline[] => [
           ...(i === 0 ? [] : [', ']),
-          link(board.title, boardPage(board.id)),
+          link(boardTitle(board), boardPage(board.id)),
         ]),
       ]),
     ),
@@ -180,7 +180,7 @@ function gapsOf({ board, judged }: BoardContext): readonly (readonly Inline[])[]
   const reasonOf = ({ verdict }: Judged): string => verdict.reason ?? 'no reason recorded';
   const open = judged.filter(({ verdict }) => (verdict.calculated ?? verdict.status) === 'not evaluated');
   return [...new Set(open.map(reasonOf))].map((reason) => [
-    link(board.title, boardPage(board.id)),
+    link(boardTitle(board), boardPage(board.id)),
     ': ',
     ...open
       .filter((entry) => reasonOf(entry) === reason)

@@ -6,7 +6,7 @@ import { cautionsChapter } from './chapter-record.js';
 import { marginCell, statusInline, uncertaintyCell, valueCell, whereCell } from './chapter-verdict.js';
 import { type BoardContext, type Judged, judgedOn, type PackInput, page } from './context.js';
 import type { Block, DocumentPage, Inline } from './document.js';
-import { boardPage, DEFINITIONS, link, OVERVIEW, requirementPage } from './links.js';
+import { boardPage, boardTitle, DEFINITIONS, link, OVERVIEW, requirementPage } from './links.js';
 import { standing } from './standing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
 import { bandText, limitText, statedNumber, temperatureText } from './values.js';
@@ -98,7 +98,7 @@ export function requirementPageOf(
           'Worst value of every board over the condition, the smallest margin over uncertainty first',
           ['Board|1.4', '#Worst value|1.2', 'Where|1.2', '#Margin', '#Uncertainty (against / for)|1.3', 'Status|1.3'],
           rows.map(({ context, entry }) => [
-            cell(link(context.board.title, boardPage(context.board.id))),
+            cell(link(boardTitle(context.board), boardPage(context.board.id))),
             valueCell(entry),
             whereCell(entry),
             marginCell(entry),

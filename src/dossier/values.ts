@@ -47,6 +47,10 @@ export function changeText(value: number, unit: string): string {
   return formatNumber(value, decimals, { plus: true }) + difference;
 }
 
+/** Two changes with one unit: `−1.42 / +0.44 dB`. */
+export const changePair = (a: number, b: number, unit: string): string =>
+  `${formatNumber(a, printOf(unit, a).decimals, { plus: true })} / ${changeText(b, unit)}`;
+
 /**
  * A margin with its sign. One that would round to zero gets more digits, so that a requirement missed by little never
  * reads as met by nothing.
@@ -78,7 +82,7 @@ export const placeText = (place: Place): string => `${gigahertz(place.frequency)
 /** `−1.42 / +0.44 dB`: how far the margin may be smaller and larger. */
 export function uncertaintyText({ adverse, favourable }: RequirementVerdict, unit: string): string {
   if (adverse === undefined || favourable === undefined) return '–';
-  return `${formatNumber(-adverse, printOf(unit, adverse).decimals, { plus: true })} / ${changeText(favourable, unit)}`;
+  return changePair(-adverse, favourable, unit);
 }
 
 const SUPERSCRIPT: Readonly<Record<string, string>> = Object.fromEntries(

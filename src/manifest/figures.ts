@@ -1,4 +1,4 @@
-import { type Dimension, type PlausibleRange, parseQuantity, quoted, splitQuantity } from '../quantity/index.js';
+import { type Dimension, parseQuantity, quoted, splitQuantity } from '../quantity/index.js';
 import type { FigureDocument } from './documents/fields.js';
 import type { Figure, Provenance } from './model.js';
 
@@ -34,8 +34,8 @@ export function spreadProblem(
 }
 
 /** Number in the base unit from a text that the check has accepted. */
-export function si(written: string | number, dimension: Dimension, plausible?: PlausibleRange): number {
-  const read = parseQuantity(written, dimension, plausible);
+export function si(written: string | number, dimension: Dimension): number {
+  const read = parseQuantity(written, dimension);
   if (!read.ok) throw new Error(`unchecked quantity ${quoted(written)} reached the model`);
   return read.value;
 }

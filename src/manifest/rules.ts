@@ -4,7 +4,7 @@ import { TEXTURE_PARAMETERS } from './documents/library-documents.js';
 import { nearest } from './nearest.js';
 import { dotted, type Path, type Problem } from './problem.js';
 import type { Node } from './tree.js';
-import { type Mark, markAt, nodeAt, problemAt } from './tree.js';
+import { markAt, nodeAt, problemAt } from './tree.js';
 
 /** Ids of one kind that boards may refer to; `complete` is false when a file of the kind could not be read. */
 export interface KnownIds {
@@ -33,10 +33,6 @@ export class RuleReport {
   written(path: Path): string {
     const node = nodeAt(this.root, path);
     return node?.kind === 'scalar' ? quoted(node.text) : 'this';
-  }
-
-  mark(path: Path): Mark {
-    return markAt(this.root, path);
   }
 }
 

@@ -123,7 +123,7 @@ describe('pages of a pack', () => {
         },
       }),
     );
-    expect(pageOf(pages, 'board/qb-1').title).toBe(hostile);
+    expect(pageOf(pages, 'board/qb-1').title).toBe(`qb-1: ${hostile}`);
     expect(textOf(pageOf(pages, 'board/qb-1'))).toContain(hostile);
     const matrix = blocksOf(pageOf(pages, 'overview')).find((b) => b.kind === 'table' && b.id === 'matrix');
     expect(matrix).toMatchObject({ rows: [[{ content: [{ text: hostile, page: 'board/qb-1' }] }, {}, {}]] });

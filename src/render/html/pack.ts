@@ -86,6 +86,7 @@ async function pageView(
   }
   return {
     packTitle: pack.title,
+    kind: page.kind,
     isOverview: page.kind === 'overview',
     title: page.title,
     subtitle: page.subtitle,

@@ -13,7 +13,9 @@ export interface InlineView {
 }
 
 export interface StatusView {
-  readonly word: Status;
+  /** First word, which keeps the sign beside it, and what follows. */
+  readonly lead: string;
+  readonly rest: string;
   readonly className: string;
   readonly shape: string;
   readonly box: number;
@@ -26,7 +28,8 @@ export type LinkTo = (page: string, anchor: string | undefined) => string;
 export type TakeId = (id: string) => string;
 
 export function statusView(status: Status): StatusView {
-  return { word: status, className: statusClass(status), shape: statusShapes[status], box: statusShapeBox };
+  const [lead, ...rest] = status.split(/(?= )/);
+  return { lead, rest: rest.join(''), className: statusClass(status), shape: statusShapes[status], box: statusShapeBox };
 }
 
 export function inlineView(part: Inline, linkTo: LinkTo): InlineView {
@@ -81,7 +84,12 @@ function tableView(table: TableBlock, inline: (content: readonly Inline[]) => re
   const cell = (entry: Cell) => ({ align: align(entry.numeric), content: inline(entry.content) });
   return {
     caption: table.caption,
-    columns: table.columns.map((column) => ({ title: column.title, align: align(column.numeric) })),
+    columns: table.columns.map((column, index) => ({
+      title: column.title,
+      align: align(column.numeric),
+      room: roomFor(table.rows.map((row) => row[index])),
+    })),
+    named: table.rowHeaders,
     rows: table.rows.map((row) => {
       const cells = row.map(cell);
       return table.rowHeaders ? { header: cells[0] ?? null, cells: cells.slice(1) } : { header: null, cells };
@@ -89,4 +97,22 @@ function tableView(table: TableBlock, inline: (content: readonly Inline[]) => re
     empty: table.rows.length === 0,
     span: table.columns.length,
   };
+}
+
+/** Class of a column by its longest text, so that sentences are not squeezed into towers of single words. */
+function roomFor(cells: readonly (Cell | undefined)[]): string {
+  const longest = Math.max(0, ...cells.map((cell) => (cell === undefined ? 0 : textLength(cell.content))));
+  return longest > 60 ? 'sentence-column' : longest > 22 ? 'phrase' : '';
+}
+
+function textLength(content: readonly Inline[]): number {
+  let length = 0;
+  for (const part of content) {
+    if (typeof part === 'string') length += part.length;
+    else if ('strong' in part) length += part.strong.length;
+    else if ('code' in part) length += part.code.length;
+    else if ('text' in part) length += part.text.length;
+    // A status stands on a line of its own.
+  }
+  return length;
 }

@@ -79,6 +79,9 @@ function listBoxes(context: BlockContext, items: readonly (readonly Inline[])[],
   });
 }
 
+/** A fact of more lines than this may go on over a page. */
+const unbrokenLines = 20;
+
 /** Names and what they are: two columns, the names not wider than a third of the body. */
 function factBoxes(context: BlockContext, block: Extract<Block, { kind: 'facts' }>): Box[] {
   const { press, parent } = context;
@@ -97,7 +100,7 @@ function factBoxes(context: BlockContext, block: Extract<Block, { kind: 'facts' 
     return Array.from({ length: count }, (_, i) => ({
       before: i > 0 ? 0 : n === 0 ? 8 : 2.5,
       height: set.leading,
-      keep: keepsNext(i, count),
+      keep: count <= unbrokenLines ? i < count - 1 : keepsNext(i, count),
       paint: (top: number) => {
         if (n === 0 && i === 0) press.markPlace(block.id, top);
         if (i < left.length) paintLine(press, left[i], set, page.left, top, label, 'Lbl');

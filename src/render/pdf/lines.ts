@@ -39,6 +39,7 @@ interface Word {
 }
 
 const cluster = /\P{M}\p{M}*|\p{M}+/gu;
+const longWord = 60;
 const breakAfter = /[- –/_.,:;=+]$/;
 
 /**
@@ -57,7 +58,15 @@ export class LineSetter {
   }
 
   private word(segments: readonly Segment[], space?: Segment): Word {
-    return { segments, space, width: segments.reduce((sum, segment) => sum + this.segmentWidth(segment), 0) };
+    return { segments, space, width: segments.reduce((sum, segment) => sum + this.wordWidth(segment), 0) };
+  }
+
+  /** A long word is broken anyway: the sum of its signs, without kerning, spares the shaping of what is left of it. */
+  private wordWidth(segment: Segment): number {
+    if (segment.text.length <= longWord) return this.segmentWidth(segment);
+    let width = segment.shape === undefined ? 0 : shapeAdvance * this.size;
+    for (const [sign] of segment.text.matchAll(cluster)) width += this.press.widthOf(sign, segment.face, this.size);
+    return width;
   }
 
   private words(runs: readonly Run[]): Word[] {
@@ -119,11 +128,11 @@ export class LineSetter {
     for (const [at, segment] of word.segments.entries()) {
       used += segment.shape === undefined ? 0 : shapeAdvance * this.size;
       let length = 0;
-      for (const sign of segment.text.match(cluster) ?? []) {
+      for (const [sign] of segment.text.matchAll(cluster)) {
         const advance = this.press.widthOf(sign, segment.face, this.size);
         if (taken > 0 && used + advance > room) {
-          const cut = good !== undefined && good.used > 0.6 * room ? good : { at, length };
-          return this.cut(word, cut.at, cut.length);
+          const cut = good !== undefined && good.used > 0.6 * room ? good : { at, length, used };
+          return this.cut(word, cut.at, cut.length, cut.used);
         }
         used += advance;
         taken += 1;
@@ -135,7 +144,7 @@ export class LineSetter {
     return [word, undefined];
   }
 
-  private cut(word: Word, at: number, length: number): [Word, Word] {
+  private cut(word: Word, at: number, length: number, used: number): [Word, Word] {
     const { text, ...rest } = word.segments[at];
     const first: Segment[] = [...word.segments.slice(0, at)];
     if (length > 0) first.push({ ...rest, text: text.slice(0, length) });
@@ -143,7 +152,10 @@ export class LineSetter {
     if (length < text.length)
       second.push({ ...rest, shape: length > 0 ? undefined : rest.shape, text: text.slice(length) });
     second.push(...word.segments.slice(at + 1));
-    return [this.word(first), this.word(second, word.space)];
+    const signs = second.reduce((sum, segment) => sum + segment.text.length, 0);
+    const { space } = word;
+    const tail = signs <= longWord ? this.word(second, space) : { segments: second, space, width: word.width - used };
+    return [this.word(first), tail];
   }
 
   lines(runs: readonly Run[], room: number): Line[] {

@@ -78,7 +78,7 @@ export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight:
     ...headBoxes.map((box) => ({ ...box, keep: true })),
     // The last row is not left alone on a page.
     ...bodyRows.flatMap((boxes, i) =>
-      i === bodyRows.length - 2 ? boxes.map((box) => ({ ...box, keep: true })) : boxes,
+      i === bodyRows.length - 2 ? [...boxes.slice(0, -1), { ...boxes[boxes.length - 1], keep: true }] : boxes,
     ),
   ];
 }
@@ -159,7 +159,7 @@ class RowPainter {
 
   private headGround(top: number, height: number): void {
     this.press.doc.rect(page.left, top, bodyWidth, height).fill(colours.wash);
-    this.rule(top + height, colours.muted, 0.6);
+    this.rule(top + height, colours.muted, 0.5);
   }
 
   repeatHead(cells: readonly SetCell[], top: number): void {
@@ -173,7 +173,7 @@ class RowPainter {
     });
   }
 
-  /** One box per row; several where the row is taller than the room. */
+  /** One box per row; one per line where the row is taller than the room. */
   boxes(
     cells: readonly SetCell[],
     room: number,
@@ -186,22 +186,24 @@ class RowPainter {
       return press.element(tag, row, scope === undefined ? {} : { scope });
     });
     const lines = Math.max(...cells.map((cell) => cell.lines.length));
-    const perBox = Math.max(1, Math.floor((room - 2 * padY) / set.leading));
+    const perBox = this.height(cells) <= room ? lines : 1;
     const boxes: Box[] = [];
     for (let start = 0; start < lines; start += perBox) {
       const end = Math.min(lines, start + perBox);
-      const height = (end - start) * set.leading + 2 * padY;
+      const [above, below] = [start === 0 ? padY : 0, end === lines ? padY : 0];
+      const height = (end - start) * set.leading + above + below;
       boxes.push({
         height,
+        keep: start === 0 && end < lines,
         paint: (top) => {
           press.artifact('Layout', () => {
-            if (kind(0)[1] === 'Column') this.headGround(top, height);
-            else this.rule(top + height, colours.rule, 0.5);
+            if (kind(0)[1] === 'Column') this.press.doc.rect(page.left, top, bodyWidth, height).fill(colours.wash);
+            if (end === lines) this.rule(top + height, kind(0)[1] === 'Column' ? colours.muted : colours.rule, 0.5);
           });
           for (const [i, cell] of cells.entries()) {
             for (const [n, line] of cell.lines.slice(start, end).entries()) {
               if (line.pieces.length === 0) continue;
-              const y = top + padY + n * set.leading;
+              const y = top + above + n * set.leading;
               paintLine(press, line, set, this.left(i, cell, line), y, elements[i], kind(i)[0]);
             }
           }

@@ -164,7 +164,7 @@ describe('faults that stop the build', () => {
         ...first,
         chapters: [{ id: 'x', title: 'x', blocks: [{ kind: 'prose', content: [{ text: 'there', page, anchor }] }] }],
       },
-      ...others.filter((other) => other.kind !== 'dossier'),
+      ...others.filter((other) => other.kind === 'evidence'),
     ]);
 
   it.each([

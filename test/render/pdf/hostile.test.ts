@@ -17,8 +17,8 @@ const bodyText = async (document: DocumentPage) => {
 };
 
 describe('hostile text', () => {
-  // A reader turns the order of right-to-left words back, each by its own rules: they are compared without them.
-  const comparable = (text: string) => text.replace(/[\u0590-\u08ff]/g, '');
+  // The reader orders right-to-left words by rules of its own and drops angle brackets beside them.
+  const comparable = (text: string) => text.replace(/[\u0590-\u08ff<>]/g, '');
 
   it.each(['overview', 'board/qb-1', 'requirement/r-gain'])(
     'stands on %s in full',
@@ -89,7 +89,8 @@ describe('hostile text', () => {
   ];
   it.each(places)('of 10,000 letters without a space stands in full in %s', async (_, block) => {
     const { pdf, text } = await bodyText(page(block));
-    expect(count(text)).toBe(10_000);
+    // A verdict that leaves no room under the front page is said there as well.
+    expect(count(text)).toBe(block.kind === 'verdict' ? 20_000 : 10_000);
     expect(pdf.pages.length).toBeGreaterThan(1);
   });
 
