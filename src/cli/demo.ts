@@ -5,6 +5,8 @@ import { formatProblem } from '../manifest/index.js';
 import { openOutput, packFilesUnder, realDisk, recover, swapAll, unfinished } from '../publish/index.js';
 import { buildPack } from './build.js';
 import { writeSchemas } from './command-schema.js';
+import { UsageError } from './errors.js';
+import { tellFailure } from './failures.js';
 import { processIo } from './io.js';
 import { noProgress, type Progress, terminalProgress } from './progress.js';
 import { boardList } from './render-top.js';
@@ -28,7 +30,7 @@ export interface Demo {
  */
 export async function buildDemo(demo: Demo, workers: Workers, progress: Progress): Promise<string[]> {
   const packs = realDisk.list(join(demo.manifests, 'packs')).map((name) => `packs/${name}/pack.yaml`);
-  if (packs.length === 0) throw new Error(`no pack in ${demo.manifests}`);
+  if (packs.length === 0) throw new UsageError(`no pack in ${demo.manifests}`);
   // Opened to see that it may be replaced.
   openOutput(demo.site, realDisk).close();
   recover(realDisk, demo.site);
@@ -43,7 +45,7 @@ export async function buildDemo(demo: Demo, workers: Workers, progress: Progress
         workers,
       },
     );
-    if (outcome.kind === 'bad input') throw new Error(outcome.problems.map(formatProblem).join('\n'));
+    if (outcome.kind === 'bad input') throw new UsageError(outcome.problems.map(formatProblem).join('\n'));
     const { packId, revision, boards } = outcome.summary;
     lines.push(`${packId} revision ${revision}: ${boardList(boards)}`);
   }
@@ -52,7 +54,7 @@ export async function buildDemo(demo: Demo, workers: Workers, progress: Progress
   return lines;
 }
 
-if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
+async function main(): Promise<void> {
   const { values } = parseArgs({ options: { site: { type: 'string' }, schemas: { type: 'string' } } });
   const top = fileURLToPath(new URL('../..', import.meta.url));
   const demo = {
@@ -62,5 +64,11 @@ if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
   };
   const progress = processIo.terminal ? terminalProgress(processIo.terminal) : noProgress;
   for (const line of await buildDemo(demo, studyWorkers(), progress)) processIo.out(line);
-  processIo.out(`Written to ${demo.site}; open index.html there`);
+  processIo.out(`Written to ${demo.site}: open index.html there`);
+}
+
+if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
+  await main().catch((error) => {
+    process.exitCode = tellFailure(error, processIo);
+  });
 }

@@ -1,9 +1,8 @@
-import { Command, CommanderError } from 'commander';
-import { OutputError } from '../publish/index.js';
+import { Command } from 'commander';
 import { schema } from './command-schema.js';
 import { validate } from './command-validate.js';
-import { describeFault, Fault, UsageError } from './errors.js';
 import { type ExitCode, exitCodeHelp, exitCodes } from './exit-codes.js';
+import { tellFailure } from './failures.js';
 import type { CommandIo } from './io.js';
 import { programVersion } from './version.js';
 
@@ -55,16 +54,4 @@ export async function runCommandLine(args: readonly string[], io: CommandIo): Pr
   } catch (error) {
     return tellFailure(error, io);
   }
-}
-
-function tellFailure(error: unknown, io: CommandIo): ExitCode {
-  // commander has said what is wrong; asking for help or the version also arrives here, with 0.
-  if (error instanceof CommanderError) return error.exitCode === 0 ? exitCodes.done : exitCodes.badInput;
-  if (error instanceof UsageError || error instanceof OutputError) {
-    io.err(error.message);
-    return exitCodes.badInput;
-  }
-  const fault = error instanceof Fault ? error : new Fault('starting', 'not known yet', error);
-  io.err(describeFault(fault, programVersion));
-  return exitCodes.fault;
 }

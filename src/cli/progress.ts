@@ -24,7 +24,7 @@ export function terminalProgress(terminal: Terminal): Progress {
   let shown = 0;
   const show = () => {
     const text = total === undefined ? name : `${name} ${count}/${total}`;
-    terminal.write(`\r\u001b[K${text.slice(0, (terminal.columns ?? 80) - 1)}`);
+    terminal.write(`\r\u001b[K${text.slice(0, (terminal.columns || 80) - 1)}`);
     shown = performance.now();
   };
   return {

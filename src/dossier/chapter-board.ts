@@ -5,7 +5,7 @@ import type { BoardContext } from './context.js';
 import type { Block, Chapter } from './document.js';
 import { arrayDrawing, stackUpDrawing } from './drawings.js';
 import { micrometres } from './figures.js';
-import { bandText, celsius, count, statedNumber, temperatureText } from './values.js';
+import { bandText, celsius, costText, count, statedNumber, temperatureText } from './values.js';
 
 const millimetres = (metres: number): string => formatQuantity(metres, 'length', { unit: 'mm', decimals: 3 });
 const inMillimetres = (metres: number): string => statedNumber(metres * 1e3, 4);
@@ -79,7 +79,7 @@ export function boardChapter({ board }: BoardContext): Chapter {
         'Cost',
         board.cost === undefined
           ? 'not given'
-          : `${statedNumber(board.cost.amount)} ${board.cost.currency}${board.cost.basis === undefined ? '' : `, ${board.cost.basis}`}`,
+          : `${costText(board.cost)}${board.cost.basis === undefined ? '' : `, ${board.cost.basis}`}`,
       ],
     ),
     figureBlock({

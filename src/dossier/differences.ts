@@ -1,7 +1,7 @@
 import type { Board, Figure, FinishLayer } from '../manifest/model.js';
 import { type Dimension, formatSpread } from '../quantity/index.js';
 import { micrometres } from './figures.js';
-import { bandText, celsius, statedNumber, temperatureText } from './values.js';
+import { bandText, celsius, costText, statedNumber, temperatureText } from './values.js';
 
 interface Field {
   readonly label: string;
@@ -129,7 +129,7 @@ const FIELDS: readonly Field[] = [
   { label: 'Etching tolerance', text: (b) => optional(b.tolerances.etch, 'length') },
   {
     label: 'Cost',
-    text: (b) => (b.cost === undefined ? 'not given' : `${statedNumber(b.cost.amount)} ${b.cost.currency}`),
+    text: (b) => (b.cost === undefined ? 'not given' : costText(b.cost)),
   },
 ];
 

@@ -9,7 +9,7 @@ import { concernsOf } from './figures.js';
 import { boardPage, boardTitle, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
 import { rankedRequirements, standing, tightest } from './standing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
-import { count, limitText, marginText, statedNumber, valueText } from './values.js';
+import { costText, count, limitText, marginText, valueText } from './values.js';
 
 /** Status with the worst margin, or the declared value. */
 function matrixCell(entry: Judged): Cell {
@@ -68,8 +68,7 @@ function requirementList(boards: readonly BoardContext[], ranked: ReturnType<typ
   );
 }
 
-const costText = ({ board }: BoardContext): string =>
-  board.cost === undefined ? 'not given' : `${statedNumber(board.cost.amount)} ${board.cost.currency}`;
+const boardCost = ({ board }: BoardContext): string => (board.cost === undefined ? 'not given' : costText(board.cost));
 
 /** Each board in one line: why it stands so, its tightest binding requirement, its cost. */
 function standings(boards: readonly BoardContext[]): Block {
@@ -87,7 +86,7 @@ function standings(boards: readonly BoardContext[]): Block {
         tight === undefined ? cell('–') : cell(link(tight.requirement.id, requirementPage(tight.requirement.id))),
         tight?.verdict.margin === undefined ? cell('–') : number(marginText(tight.verdict.margin, tight.verdict.unit)),
         ratio === undefined || !Number.isFinite(ratio) ? cell('–') : number(formatNumber(ratio, 2)),
-        number(costText(context)),
+        number(boardCost(context)),
       ];
     }),
   );

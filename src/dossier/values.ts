@@ -1,4 +1,4 @@
-import type { Requirement } from '../manifest/model.js';
+import type { Cost, Requirement } from '../manifest/model.js';
 import { decimalsFor, formatNumber } from '../quantity/index.js';
 import type { Place, RequirementVerdict } from '../verdict/index.js';
 
@@ -74,6 +74,9 @@ export function limitText(requirement: Requirement, unit: string): string {
 export const gigahertz = (hertz: number, decimals = 2): string => `${formatNumber(hertz / 1e9, decimals)}${GAP}GHz`;
 export const bandText = ({ low, high }: { readonly low: number; readonly high: number }): string =>
   `${statedNumber(low / 1e9, 4)} to ${statedNumber(high / 1e9, 4)}${GAP}GHz`;
+/** Prices to the hundredth, as quotations have them. */
+export const costText = (cost: Cost): string => `${formatNumber(cost.amount, 2)}${GAP}${cost.currency}`;
+
 export const celsius = (degrees: number): string => `${statedNumber(degrees, 1)}${GAP}°C`;
 export const temperatureText = ({ lowC, highC }: { readonly lowC: number; readonly highC: number }): string =>
   `${statedNumber(lowC, 1)} to ${statedNumber(highC, 1)}${GAP}°C`;

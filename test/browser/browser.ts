@@ -1,8 +1,8 @@
 import { existsSync } from 'node:fs';
 import { type Browser, chromium } from 'playwright-core';
 
-/** Where a browser may be; `CHROMIUM` names another. */
-const places = [process.env.CHROMIUM, '/usr/bin/chromium', '/usr/bin/chromium-browser'];
+/** Where a browser may be; `CHROMIUM` names the one to take instead. */
+const places = process.env.CHROMIUM ? [process.env.CHROMIUM] : ['/usr/bin/chromium', '/usr/bin/chromium-browser'];
 
 /**
  * Path of the browser, or undefined where there is none: then the tests say aloud that they are left out.
@@ -10,7 +10,7 @@ const places = [process.env.CHROMIUM, '/usr/bin/chromium', '/usr/bin/chromium-br
  * @throws Error when BOARDCASE_REQUIRE_BROWSER=1 demands one
  */
 export function findBrowser(): string | undefined {
-  const found = places.find((place) => place !== undefined && place !== '' && existsSync(place));
+  const found = places.find((place) => existsSync(place));
   if (found === undefined && process.env.BOARDCASE_REQUIRE_BROWSER === '1') {
     throw new Error('BOARDCASE_REQUIRE_BROWSER=1, but no browser is found; set CHROMIUM to its path');
   }

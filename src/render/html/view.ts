@@ -29,7 +29,13 @@ export type TakeId = (id: string) => string;
 
 export function statusView(status: Status): StatusView {
   const [lead, ...rest] = status.split(/(?= )/);
-  return { lead, rest: rest.join(''), className: statusClass(status), shape: statusShapes[status], box: statusShapeBox };
+  return {
+    lead,
+    rest: rest.join(''),
+    className: statusClass(status),
+    shape: statusShapes[status],
+    box: statusShapeBox,
+  };
 }
 
 export function inlineView(part: Inline, linkTo: LinkTo): InlineView {

@@ -129,7 +129,7 @@ function panel(press: Press, barColour: string, rows: readonly Omit<Box, 'before
       height,
       paint: (top) => {
         ground(top, height);
-        row.paint(top + above);
+        row.paint(top + above, row.height);
       },
     };
   });

@@ -9,6 +9,8 @@ import { bold, muted, textRuns } from './runs.js';
 import { safeText } from './safe-text.js';
 
 const largestScale = 1;
+/** Its text must stay readable: about 6.8 points in charts. */
+const smallestShrink = 0.82;
 
 /**
  * Title, picture and reading, kept on one page. The picture shrinks to the width of the body, and further where the
@@ -31,8 +33,6 @@ export function figureBoxes(
   const texts = titleLines.length * type.label.leading + readingLines.length * type.body.leading + 12;
   const room = Math.max(bodyHeight / 3, bodyHeight - texts);
   const scale = Math.min(largestScale, bodyWidth / picture.width, room / picture.height);
-  const [width, height] = [picture.width * scale, picture.height * scale];
-  const x = page.left + (bodyWidth - width) / 2;
 
   const titles = titleLines.map(
     (line, i): Box => ({
@@ -47,12 +47,16 @@ export function figureBoxes(
   );
   const body: Box = {
     before: 3,
-    height,
+    height: picture.height * scale,
+    least: picture.height * scale * smallestShrink,
     keep: true,
-    paint: (top) => {
+    paint: (top, height) => {
+      const shown = height / picture.height;
+      const width = picture.width * shown;
+      const x = page.left + (bodyWidth - width) / 2;
       const bbox: [number, number, number, number] = [x, top, x + width, top + height];
       const element = press.element('Figure', group, { alt: safeText(figure.alt), bbox, placement: 'Block' });
-      press.tagged(element, 'Figure', () => picture.paint(press, x, top, scale));
+      press.tagged(element, 'Figure', () => picture.paint(press, x, top, shown));
       reading = press.element('P', group);
     },
   };

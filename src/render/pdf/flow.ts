@@ -4,6 +4,8 @@ import type { Press } from './press.js';
 /** A piece of a page that is never broken. Paints itself at a height; its width is that of the body. */
 export interface Box {
   readonly height: number;
+  /** A picture may shrink to this height where that keeps its group on the page. */
+  readonly least?: number;
   /** Space over it, dropped at the top of a page. */
   readonly before?: number;
   /** Stays on one page with the box after it: headings, captions, first lines. */
@@ -12,7 +14,7 @@ export interface Box {
   readonly newPage?: boolean;
   /** Painted over it again where it is the first on a page: the head of a table. */
   readonly repeat?: { readonly height: number; readonly paint: (top: number) => void };
-  readonly paint: (top: number) => void;
+  readonly paint: (top: number, height: number) => void;
 }
 
 /** Height of boxes set one under another, from the top of a page or further down. */
@@ -51,9 +53,11 @@ export class Flow {
       let end = start + 1;
       while (end < boxes.length && boxes[end - 1].keep) end += 1;
       const group = boxes.slice(start, end);
-      const fits = this.y + stackHeight(group, this.atTop) <= this.bottom;
-      const wouldFit = stackHeight(group, true) <= this.bodyHeight;
-      if (!this.atTop && (group[0].newPage || (!fits && wouldFit))) this.breakPage();
+      const excess = this.y + stackHeight(group, this.atTop) - this.bottom;
+      const shrunk = group.findIndex(({ height, least }) => least !== undefined && height - least >= excess);
+      const mustBreak = excess > 0 && shrunk < 0 && stackHeight(group, true) <= this.bodyHeight;
+      if (!this.atTop && (group[0].newPage || mustBreak)) this.breakPage();
+      else if (excess > 0 && shrunk >= 0) group[shrunk] = { ...group[shrunk], height: group[shrunk].height - excess };
       for (const box of group) this.put(box);
       start = end;
     }
@@ -67,7 +71,7 @@ export class Flow {
       box.repeat.paint(this.y);
       this.y += box.repeat.height;
     }
-    box.paint(this.y);
+    box.paint(this.y, box.height);
     this.y += box.height;
   }
 }

@@ -29,9 +29,9 @@ export function titleBoxes(context: BlockContext, document: DocumentPage): Box[]
   );
   const first: Box = {
     ...kind[0],
-    paint: (top) => {
+    paint: (top, height) => {
       press.markPlace(topPlace, 0);
-      kind[0].paint(top);
+      kind[0].paint(top, height);
     },
   };
   const subtitle = paragraph(context, textRuns(document.subtitle, muted), { before: 1, type: type.lead });

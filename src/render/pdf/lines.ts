@@ -40,7 +40,10 @@ interface Word {
 
 const cluster = /\P{M}\p{M}*|\p{M}+/gu;
 const longWord = 60;
+/** Words wider than this, in units of the size of type, may break after a separator rather than widen a column. */
+const wideWord = 8;
 const breakAfter = /[- –/_.,:;=+]$/;
+const separators = /(?<=[- –/_.,:;=+])/;
 
 /**
  * Sets runs into lines of a width. Breaks at spaces; a word wider than the line is broken after a separator where one
@@ -112,11 +115,25 @@ export class LineSetter {
     return after.space === undefined ? 0 : this.segmentWidth(after.space);
   }
 
-  /** Width of the widest word and of all words in one line. */
-  extent(runs: readonly Run[]): { readonly widest: number; readonly whole: number } {
+  /** Widths of the widest word, of the widest piece between places to break, and of all words in one line. */
+  extent(runs: readonly Run[]): { readonly word: number; readonly piece: number; readonly whole: number } {
     const words = this.words(runs);
-    const whole = words.reduce((sum, word, i) => sum + word.width + (i < words.length - 1 ? this.space(word) : 0), 0);
-    return { widest: words.reduce((most, word) => Math.max(most, word.width), 0), whole };
+    let [word, piece, whole] = [0, 0, 0];
+    for (const [i, item] of words.entries()) {
+      word = Math.max(word, item.width);
+      piece = Math.max(piece, this.unbroken(item));
+      whole += item.width + (i < words.length - 1 ? this.space(item) : 0);
+    }
+    return { word, piece, whole };
+  }
+
+  /** A wide word, such as a path, may break after its separators. */
+  private unbroken(word: Word): number {
+    if (word.width <= wideWord * this.size) return word.width;
+    const parts = word.segments.flatMap((segment) =>
+      segment.text.split(separators).map((text) => this.wordWidth({ ...segment, text })),
+    );
+    return Math.max(wideWord * this.size, ...parts);
   }
 
   /** Breaks a word into one that fits and the rest; the first takes at least one sign. */
@@ -131,7 +148,7 @@ export class LineSetter {
       for (const [sign] of segment.text.matchAll(cluster)) {
         const advance = this.press.widthOf(sign, segment.face, this.size);
         if (taken > 0 && used + advance > room) {
-          const cut = good !== undefined && good.used > 0.6 * room ? good : { at, length, used };
+          const cut = good !== undefined && good.used > 0.35 * room ? good : { at, length, used };
           return this.cut(word, cut.at, cut.length, cut.used);
         }
         used += advance;
@@ -224,7 +241,7 @@ const unit =
 const relation = /^\(?[≤≥<>=±≈≠]$/;
 
 function belongTogether(before: string, after: string): boolean {
-  return relation.test(before) || (/\d$/.test(before) && unit.test(after));
+  return relation.test(before) || (/\d$/.test(before) && (unit.test(after) || after.startsWith('±')));
 }
 
 /** Words of scripts written from the right stand in their order; the spaces between them stay in place. */

@@ -47,7 +47,7 @@ function linkRun(
   }
   const title = running ? safeText(links.pageTitle(item.page) ?? '') : '';
   const said = title === '' || item.text.toLowerCase().includes(title.toLowerCase());
-  return { ...style, text: said ? item.text : `${item.text} (see “${title}” in this pack)` };
+  return { ...style, text: said ? item.text : `${item.text} (see “${title}”)` };
 }
 
 /** Id of the top of the document; a space keeps it apart from ids of blocks. */

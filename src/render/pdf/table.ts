@@ -1,6 +1,6 @@
 import type { Cell, TableBlock } from '../../dossier/document.js';
 import type { BlockContext } from './blocks.js';
-import { columnWidths } from './column-widths.js';
+import { type ColumnWish, columnWidths } from './column-widths.js';
 import type { Box } from './flow.js';
 import { bodyWidth, colours, page, type TypeSize, type } from './layout.js';
 import { type Line, LineSetter } from './lines.js';
@@ -10,8 +10,22 @@ import { bold, inlineRuns, plain, type Run, textRuns } from './runs.js';
 
 const padX = 4;
 const padY = 3;
-/** A table that does not fit is set smaller, in these steps of its size. */
-const shrink = [1, 0.92, 0.84, 0.76];
+interface Fit {
+  readonly factor: number;
+  /** Words stay whole. */
+  readonly whole: boolean;
+  /** Part of the room that the least widths may take: broken words need room to share out, or rows grow tall. */
+  readonly taken: number;
+}
+/** What is tried, in this order: a little smaller before words break after separators, much smaller after that. */
+const fitsInOrder: readonly Fit[] = [
+  { factor: 1, whole: true, taken: 1 },
+  { factor: 0.93, whole: true, taken: 1 },
+  { factor: 1, whole: false, taken: 0.85 },
+  { factor: 0.93, whole: false, taken: 0.85 },
+  { factor: 0.86, whole: false, taken: 0.85 },
+  { factor: 0.79, whole: false, taken: 1 },
+];
 /** Figures longer than this may wrap. */
 const longestFigure = 110;
 
@@ -98,42 +112,45 @@ function captionBoxes(context: BlockContext, table: TableBlock, element: Element
   }));
 }
 
-/** The largest size of type at which no word breaks, and the columns at that size. */
+/** The largest size of type at which no word breaks, or at which words break only after separators. */
 function layColumns(
   press: Press,
   table: TableBlock,
   heads: readonly CellText[],
   rows: readonly (readonly CellText[])[],
 ): { readonly columns: Column[]; readonly set: TypeSize } {
+  const setter = new LineSetter(press, 1);
   const measured = heads.map((head, i) => {
-    const setter = new LineSetter(press, 1);
-    const cells = [head, ...rows.map((row) => row[i])];
-    let [least, most] = [0, 0];
-    for (const cell of cells) {
-      const { widest, whole } = setter.extent(cell.runs);
+    let [words, pieces] = [0, 0];
+    const wholes: number[] = [];
+    for (const cell of [head, ...rows.map((row) => row[i])]) {
+      const { word, piece, whole } = setter.extent(cell.runs);
       const unbroken = cell.numeric && cell !== head && whole * type.table.size <= longestFigure;
-      least = Math.max(least, unbroken ? whole : widest);
-      most = Math.max(most, whole);
+      words = Math.max(words, unbroken ? whole : word);
+      pieces = Math.max(pieces, unbroken ? whole : piece);
+      wholes.push(whole);
     }
-    return { least, most };
+    return { words, pieces, wholes };
   });
-  const wishes = (size: number) =>
-    measured.map(({ least, most }, i) => ({
-      least: least * size + 2 * padX + 0.5,
-      most: most * size + 2 * padX + 0.5,
-      hint: Math.max(0.1, table.columns[i]?.width ?? 1),
-    }));
-  const sizes = shrink.map((factor) => type.table.size * factor);
-  const size =
-    sizes.find((s) => wishes(s).reduce((sum, wish) => sum + wish.least, 0) <= bodyWidth) ?? sizes[sizes.length - 1];
-  const widths = columnWidths(wishes(size), bodyWidth);
+  const wishes = ({ factor, whole }: Fit): ColumnWish[] =>
+    measured.map(({ words, pieces, wholes }, i) => {
+      const points = (width: number) => width * type.table.size * factor + 2 * padX + 0.5;
+      return {
+        least: points(whole ? words : pieces),
+        cells: wholes.map(points),
+        hint: Math.max(0.1, table.columns[i]?.width ?? 1),
+      };
+    });
+  const fits = (fit: Fit) => wishes(fit).reduce((sum, wish) => sum + wish.least, 0) <= fit.taken * bodyWidth;
+  const chosen = fitsInOrder.find(fits) ?? fitsInOrder[fitsInOrder.length - 1];
   let x: number = page.left;
-  const columns = widths.map((width, i) => {
+  const columns = columnWidths(wishes(chosen), bodyWidth).map((width, i) => {
     const column = { x, width, numeric: table.columns[i]?.numeric === true };
     x += width;
     return column;
   });
-  return { columns, set: { size, leading: (type.table.leading / type.table.size) * size } };
+  const { size, leading } = type.table;
+  return { columns, set: { size: size * chosen.factor, leading: leading * chosen.factor } };
 }
 
 class RowPainter {

@@ -117,9 +117,9 @@ describe('pages of a pack', () => {
     const shapes = new Map(
       [
         ...html.matchAll(
-          /<span class="status [^"]*"><svg[^>]*><path fill-rule="evenodd" d="([^"]*)"\/><\/svg> ([^<]*)</g,
+          /<span class="status [^"]*"><span class="lead"><svg[^>]*><path fill-rule="evenodd" d="([^"]*)"\/><\/svg> ([^<]*)<\/span>([^<]*)</g,
         ),
-      ].map(([, shape, word]) => [word, shape]),
+      ].map(([, shape, lead, rest]) => [lead + rest, shape]),
     );
     const words: readonly Status[] = [
       'meets',

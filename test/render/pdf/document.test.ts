@@ -104,7 +104,7 @@ describe('a dossier as PDF', () => {
   });
 
   it('repeats the head of a table on each page that it runs over, outside of the structure', () => {
-    const inputs = pdf.pages.filter((page) => page.text.includes('Material figure'));
+    const inputs = pdf.pages.filter((page) => squeeze(page.text).includes('Materialfigure'));
     expect(inputs.length).toBeGreaterThan(1);
     for (const page of inputs.slice(1)) expect(page.artifacts).toContain('Figure Value Basis Method Document');
     expect(inputs[0].artifacts).not.toContain('Figure Value Basis Method Document');
@@ -189,9 +189,7 @@ describe('links', () => {
   it('become plain words that name the page when they lead to another file', async () => {
     const { read, links } = await linked('overview', 'result');
     expect(links).toHaveLength(0);
-    expect(squeeze(read.pages[0].text)).toContain(
-      squeeze(`that place (see “${packDocument.pages[0].title}” in this pack)`),
-    );
+    expect(squeeze(read.pages[0].text)).toContain(squeeze(`that place (see “${packDocument.pages[0].title}”)`));
   });
 
   it('become plain words when the place does not exist', async () => {
