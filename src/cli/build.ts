@@ -1,22 +1,35 @@
-import { composePack, dataSchemas, type PackInput, packData } from '../dossier/index.js';
+import { composePack, dataSchemas, markingOf, PACK_PDF, type PackInput, packData, packPage } from '../dossier/index.js';
 import { allChecks, methods, runChecks } from '../evidence/index.js';
-import { loadPack, type PackFiles, type Problem } from '../manifest/index.js';
+import { audienceOf, loadPack, type PackFiles, type Problem, packFor } from '../manifest/index.js';
 import type { Pack } from '../manifest/model.js';
-import { type Files, hashOfSet, type Output, OutputError, type RevisionSummary, sha256 } from '../publish/index.js';
+import {
+  type Files,
+  hashOfSet,
+  type Output,
+  OutputError,
+  type Publication,
+  type RevisionSummary,
+  sha256,
+} from '../publish/index.js';
 import { renderPack } from '../render/html/index.js';
 import { renderPdf } from '../render/pdf/index.js';
 import { assembleStudy, type BoardStudy, planBoard, type TaskResult } from '../study/index.js';
 import { type BoardVerdict, judgePack } from '../verdict/index.js';
 import { Fault } from './errors.js';
+import { findPrevious } from './previous.js';
 import type { Progress } from './progress.js';
 import { renderTop } from './render-top.js';
-import type { StudyJob } from './study-job.js';
+import { boardsToRetune, retunePack, type StudyJob } from './study-job.js';
+import { studyProcurement } from './study-procurement.js';
+import { supplierFiles } from './supplier-files.js';
 import type { Workers } from './workers.js';
 
 export interface BuildOptions {
   /** Relative to the root folder of the files, with forward slashes. */
   readonly packPath: string;
   readonly programVersion: string;
+  /** Builds the copy for this audience of the pack instead, as a pack of its own. */
+  readonly audience?: string;
 }
 
 /** All that a build touches of the world. */
@@ -32,7 +45,12 @@ export interface BuildEffects {
 
 export type BuildOutcome =
   | { readonly kind: 'bad input'; readonly problems: readonly Problem[] }
-  | { readonly kind: 'built'; readonly summary: RevisionSummary; readonly verdicts: readonly BoardVerdict[] };
+  | {
+      readonly kind: 'built';
+      readonly summary: RevisionSummary;
+      readonly verdicts: readonly BoardVerdict[];
+      readonly publication: Publication;
+    };
 
 /**
  * A whole build: from manifests to a published revision.
@@ -51,20 +69,28 @@ export async function buildPack(options: BuildOptions, effects: BuildEffects): P
     enter(stage);
     const loaded = loadPack(recording(effects.files, reads), options.packPath);
     if ('problems' in loaded) return { kind: 'bad input', problems: loaded.problems };
-    const { pack } = loaded;
+    const shown = shownPack(loaded.pack, options);
+    if ('problem' in shown) return { kind: 'bad input', problems: [shown.problem] };
     output = effects.openOutput();
+    const found = findPrevious(shown.pack, effects.files, output);
+    if ('problem' in found) return { kind: 'bad input', problems: [found.problem] };
+    const pack = await readyPack(shown.pack, effects, enter);
     const studies = await studyPack(pack, effects, enter);
     enter('judging the boards');
     const verdicts = judgePack(studies, pack.requirements);
+    const procurement = await studyProcurement(pack, studies, verdicts, effects, enter);
     enter('checking the engine against published values');
     const evidence = runChecks(allChecks);
     enter('composing the pages');
-    const parts = { pack, studies, verdicts, evidence, methods, programVersion: options.programVersion };
+    const { programVersion } = options;
+    const parts = { pack, studies, verdicts, evidence, methods, programVersion, ...found, procurement };
     const files = await drawPack(parts, effects, enter);
     enter('publishing');
-    const summary = summaryOf(pack, verdicts, hashOfSet(reads), options.programVersion);
-    output.publishRevision(summary, files, renderTop);
-    return { kind: 'built', summary, verdicts };
+    // A hash over files with hidden entries would confirm a guess at them.
+    const packHash = pack.audience === undefined ? hashOfSet(reads) : sha256(JSON.stringify(shown.pack));
+    const summary = summaryOf(pack, verdicts, packHash, options.programVersion);
+    const publication = output.publishRevision(summary, files, renderTop);
+    return { kind: 'built', summary, verdicts, publication };
   } catch (error) {
     if (error instanceof OutputError) throw error;
     throw new Fault(stage, hashOfSet(reads), error);
@@ -75,6 +101,23 @@ export async function buildPack(options: BuildOptions, effects: BuildEffects): P
 }
 
 type Enter = (stage: string, total?: number) => void;
+
+/** The pack, or its copy for an audience: what the copy hides is gone before anything is calculated. */
+function shownPack(
+  pack: Pack,
+  { audience, packPath }: BuildOptions,
+): { readonly pack: Pack } | { readonly problem: Problem } {
+  if (audience === undefined) return { pack };
+  const found = audienceOf(pack, packPath, audience);
+  return 'hide' in found ? { pack: packFor(pack, found) } : { problem: found };
+}
+
+/** Boards that ask for it get their retuned layout here, once: all that follows speaks of the same copper. */
+async function readyPack(pack: Pack, { workers, progress }: BuildEffects, enter: Enter): Promise<Pack> {
+  const total = boardsToRetune(pack).length;
+  if (total > 0) enter('retuning layouts', total);
+  return retunePack(pack, workers, () => progress.step());
+}
 
 async function studyPack(pack: Pack, { workers, progress }: BuildEffects, enter: Enter): Promise<BoardStudy[]> {
   const { analysis } = pack;
@@ -96,14 +139,16 @@ async function studyPack(pack: Pack, { workers, progress }: BuildEffects, enter:
 
 async function drawPack(parts: PackInput, effects: BuildEffects, enter: Enter): Promise<Files> {
   const document = composePack(parts);
+  const data = Object.entries({ ...packData(parts), ...dataSchemas() }).map(
+    ([path, content]) => [path, `${JSON.stringify(content, null, 1)}\n`] as const,
+  );
+  const wholePack = packPage(parts, new Map(data.map(([path, text]) => [path, sha256(text)])));
   const dossiers = document.pages.filter((page) => page.kind === 'dossier');
   enter('writing the pages');
-  const files = new Map<string, Uint8Array | string>(await renderPack(document));
-  for (const [path, content] of Object.entries({ ...packData(parts), ...dataSchemas() })) {
-    files.set(path, `${JSON.stringify(content, null, 1)}\n`);
-  }
+  const files = new Map<string, Uint8Array | string>([...(await renderPack(document)), ...data]);
   const created = new Date(effects.epoch === undefined ? `${parts.pack.date}T00:00:00Z` : effects.epoch * 1000);
-  enter('drawing the PDF dossiers', dossiers.length);
+  for (const [path, content] of await supplierFiles(parts.pack, parts.procurement, created)) files.set(path, content);
+  enter('drawing the PDFs', dossiers.length + 1);
   const titles = new Map(document.pages.map((page) => [page.id, page.title]));
   const context = {
     packTitle: document.title,
@@ -111,8 +156,9 @@ async function drawPack(parts: PackInput, effects: BuildEffects, enter: Enter): 
     date: created,
     pageTitle: (id: string) => titles.get(id),
   };
-  for (const page of dossiers) {
-    files.set(`pdf/${page.id.replace(/^board\//, '')}.pdf`, await renderPdf(page, context));
+  for (const page of [wholePack, ...dossiers]) {
+    const path = page === wholePack ? PACK_PDF : `pdf/${page.id.replace(/^board\//, '')}.pdf`;
+    files.set(path, await renderPdf(page, context));
     effects.progress.step();
   }
   return files;
@@ -136,6 +182,19 @@ function summaryOf(
   programVersion: string,
 ): RevisionSummary {
   const { id: packId, title, documentNumber, revision, date, status } = pack;
+  const marking = markingOf(pack);
   const boards = pack.boards.map((board, i) => ({ id: board.id, title: board.title, status: verdicts[i].overall }));
-  return { format: 1, packId, title, documentNumber, revision, date, status, packHash, programVersion, boards };
+  return {
+    format: 1,
+    packId,
+    title,
+    documentNumber,
+    revision,
+    date,
+    status,
+    marking,
+    packHash,
+    programVersion,
+    boards,
+  };
 }

@@ -16,12 +16,13 @@ export interface BuildCommand {
   readonly root?: string;
   readonly out: string;
   readonly gate?: boolean;
+  readonly audience?: string;
 }
 
 export async function build(packFile: string, command: BuildCommand, io: CommandIo): Promise<ExitCode> {
   const { root, packPath } = placeOf(packFile, command.root);
   const outcome = await buildPack(
-    { packPath, programVersion },
+    { packPath, programVersion, audience: command.audience },
     {
       files: packFilesUnder(root),
       openOutput: () => openOutput(command.out, realDisk),
@@ -36,16 +37,17 @@ export async function build(packFile: string, command: BuildCommand, io: Command
 
 /** Says what was built and where; under `--gate`, what keeps it from passing. */
 export function tellBuilt(
-  { summary, verdicts }: Extract<BuildOutcome, { kind: 'built' }>,
+  { summary, verdicts, publication }: Extract<BuildOutcome, { kind: 'built' }>,
   { out, gate }: BuildCommand,
   io: CommandIo,
 ): ExitCode {
   const { packId, revision, boards } = summary;
   const open = verdicts.filter((verdict) => verdict.overall !== 'meets');
   if (gate) for (const { boardId, overall, reason } of open) io.err(`${boardId} ${overall}: ${visible(reason)}`);
+  const done = publication === 'written' ? 'written to' : 'released and unchanged, left as it is in';
   io.out(
     `${packId} revision ${revision}, ${count(boards.length, 'board')}: ${boardList(boards)}; ` +
-      `written to ${join(out, packId, revision)}`,
+      `${done} ${join(out, packId, revision)}`,
   );
   return gate && open.length > 0 ? exitCodes.requirementsNotMet : exitCodes.done;
 }

@@ -1,5 +1,6 @@
 import { Command } from 'commander';
 import { schema } from './command-schema.js';
+import { start } from './command-start.js';
 import { validate } from './command-validate.js';
 import { type ExitCode, exitCodeHelp, exitCodes } from './exit-codes.js';
 import { tellFailure } from './failures.js';
@@ -21,11 +22,33 @@ export async function runCommandLine(args: readonly string[], io: CommandIo): Pr
   ] as const;
 
   program
+    .command('start')
+    .description('write a small commented pack of invented data, to begin with')
+    .argument('<dir>', 'a new or empty folder')
+    .action((dir) => {
+      code = start(dir, io);
+    });
+  program
+    .command('preview')
+    .description('build a pack, show it on this computer only, and build again whenever a file of it changes')
+    .argument('<pack.yaml>', 'the pack file')
+    .option('--port <number>', 'port on 127.0.0.1; 0 for any free one', '8076')
+    .option('--out <dir>', 'output folder (default: a temporary one, removed at the end)')
+    .option('--audience <name>', 'show the copy for an audience of the pack')
+    .option(...root)
+    .action(async (pack, options) => {
+      const { preview } = await import('./command-preview.js');
+      const stop = new AbortController();
+      for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => stop.abort());
+      code = await preview(pack, options, io, stop.signal);
+    });
+  program
     .command('build')
     .description('calculate, judge and write the dossiers of a pack')
     .argument('<pack.yaml>', 'the pack file')
     .option('--out <dir>', 'output folder: new, empty or written by boardcase', 'out')
     .option(...root)
+    .option('--audience <name>', 'build the copy for an audience of the pack, without the entries hidden from it')
     .option('--gate', 'exit code 1 unless every binding requirement meets on every board')
     .action(async (pack, options) => {
       // Charts and PDFs take a second to load; the other commands do without.

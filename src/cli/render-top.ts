@@ -3,12 +3,14 @@ import { renderIndex, styleSheet } from '../render/html/index.js';
 
 /** The files at the top of an output folder: the page that lists packs and revisions, and its style sheet. */
 export function renderTop(summaries: readonly RevisionSummary[]): Files {
-  const entries = summaries.map(({ packId, title, revision, date, status, boards }) => ({
+  const entries = summaries.map(({ packId, title, revision, date, status, documentNumber, marking, boards }) => ({
     packId,
     title,
     revision,
     date,
     status,
+    documentNumber,
+    marking,
     href: `${packId}/${revision}/index.html`,
     summary: boardList(boards),
   }));

@@ -5,6 +5,7 @@ import type { BoardContext } from './context.js';
 import type { Block, Chapter } from './document.js';
 import { arrayDrawing, stackUpDrawing } from './drawings.js';
 import { micrometres } from './figures.js';
+import { retuningBlocks } from './retuning.js';
 import { bandText, celsius, costText, count, statedNumber, temperatureText } from './values.js';
 
 const millimetres = (metres: number): string => formatQuantity(metres, 'length', { unit: 'mm', decimals: 3 });
@@ -35,7 +36,7 @@ function layouts(board: Board): readonly Block[] {
     const same = board.columns.flatMap((c, i) => (sameLayout(c, column) ? [i + 1] : []));
     return table(
       `layout-${n + 1}`,
-      `Dimensions in mm as drawn, column${same.length === 1 ? '' : 's'} ${same.join(', ')}; each row is a patch and the line on its feed side`,
+      `Dimensions in mm as ${board.retuned === undefined || 'reason' in board.retuned ? 'drawn' : 'retuned'}, column${same.length === 1 ? '' : 's'} ${same.join(', ')}; each row is a patch and the line on its feed side`,
       ['Patch', '#Line width', '#Line length', '#Patch width (y)', '#Patch length (x)'],
       column.patches.map((patch, i) => {
         const line = i === 0 ? column.feedLine : column.links[i - 1];
@@ -96,6 +97,7 @@ export function boardChapter({ board }: BoardContext): Chapter {
       alt: 'Top view of the columns of patches and their lines, with the x and y axes, the planes of both cuts, the sign of tilt and the polarisation.',
       content: drawn,
     }),
+    ...retuningBlocks(board),
     ...layouts(board),
   );
 }

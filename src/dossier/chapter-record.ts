@@ -3,6 +3,7 @@ import { caution, cell, chapter, facts, list, prose, table } from './blocks.js';
 import { referenceText } from './chapter-board.js';
 import type { BoardContext, PackInput } from './context.js';
 import type { Block, Chapter } from './document.js';
+import { lineageBlocks } from './lineage.js';
 import { DEFINITIONS, link } from './links.js';
 import { CAUTIONS } from './statements.js';
 import { powerAbove } from './values.js';
@@ -96,18 +97,13 @@ export function inputsChapter(context: BoardContext): Chapter {
       'input-facts',
       ['Board file', { code: board.file }],
       ['Based on', board.basedOn.length === 0 ? 'no other board' : board.basedOn.join(', which is based on ')],
-      [
-        'Overridden',
-        ...(board.overrides.length === 0
-          ? ['nothing']
-          : board.overrides.flatMap((path, i) => (i === 0 ? [{ code: path }] : [', ', { code: path }]))),
-      ],
       ['Requirement set', `${requirements.title}: `, { code: requirements.file }],
       ['Nominal roughness model', analysis.roughnessModel],
       ['Largest frequency step', `${formatNumber(analysis.frequencyStep / 1e6, 0)} MHz`],
       ['Program', `boardcase ${input.programVersion}`],
       ['Hash of the inputs of these results', { code: study.hash }],
     ),
+    ...lineageBlocks(board),
     inputTable(inputs),
   );
 }

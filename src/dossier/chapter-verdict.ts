@@ -1,5 +1,6 @@
 import { quantityOf, quantityTitle } from '../verdict/index.js';
 import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
+import { concessionsFor, expiryText, WITHOUT_PURPOSE } from './concessions.js';
 import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter, Inline } from './document.js';
 import { concernsOf, figureText } from './figures.js';
@@ -81,6 +82,23 @@ function gaps({ study }: BoardContext): readonly Block[] {
   ];
 }
 
+function concessions(context: BoardContext): readonly Block[] {
+  const standings = concessionsFor(context);
+  if (standings.length === 0) return [];
+  return [
+    caution(
+      'Concessions: they change no status',
+      ...standings.map((standing) => [
+        { strong: `${standing.concession.number} for ${standing.concession.requirement}: ` },
+        `${standing.concession.text} Granted ${standing.concession.granted} by ${standing.concession.approver}, holds until ${expiryText(standing)}.`,
+        ...(standing.missed ? [] : [` ${sentence(WITHOUT_PURPOSE)}`]),
+      ]),
+    ),
+  ];
+}
+
+const sentence = (words: string): string => `${words[0].toUpperCase()}${words.slice(1)}.`;
+
 function outsideRange({ board, study }: BoardContext): readonly Block[] {
   const outside = study.flags.filter((flag) => flag.severity === 'outside');
   if (outside.length === 0) return [];
@@ -146,6 +164,7 @@ export function verdictChapter(context: BoardContext): Chapter {
       ],
       ['Rule', 'how statuses follow from these: ', link('Definitions', DEFINITIONS, 'statuses')],
     ),
+    ...concessions(context),
     ...gaps(context),
     ...outsideRange(context),
     caution('What is not modelled', ...NOT_MODELLED.map((line) => [line])),

@@ -1,8 +1,11 @@
+import { comparisonPage } from './compare-page.js';
+import { comparisonsOf } from './comparisons.js';
 import { boardContexts, type PackInput } from './context.js';
 import { definitionsPage } from './definitions-page.js';
 import type { PackDocument } from './document.js';
 import { dossierPage } from './dossier-page.js';
 import { evidencePage } from './evidence-page.js';
+import { offersPage } from './offers-page.js';
 import { overviewPage } from './overview-page.js';
 import { requirementPageOf } from './requirement-page.js';
 
@@ -14,6 +17,7 @@ import { requirementPageOf } from './requirement-page.js';
 export function composePack(input: PackInput): PackDocument {
   const { pack } = input;
   const boards = boardContexts(input);
+  const offers = offersPage(input);
   return {
     packId: pack.id,
     revision: pack.revision,
@@ -21,7 +25,9 @@ export function composePack(input: PackInput): PackDocument {
     pages: [
       overviewPage(input, boards),
       ...boards.map(dossierPage),
+      ...comparisonsOf(boards).pairs.map((pair) => comparisonPage(input, pair)),
       ...pack.requirements.requirements.map((requirement) => requirementPageOf(input, requirement, boards)),
+      ...(offers === undefined ? [] : [offers]),
       evidencePage(input),
       definitionsPage(input),
     ],

@@ -1,9 +1,10 @@
 import type { EvidenceResult, Method } from '../evidence/index.js';
 import type { Board, Pack, Requirement } from '../manifest/model.js';
 import type { BoardStudy, PointResult } from '../study/results.js';
-import type { BoardVerdict, RequirementVerdict } from '../verdict/index.js';
+import type { BoardVerdict, ProcurementResults, RequirementVerdict } from '../verdict/index.js';
 import type { DocumentPage, PageKind, TitleBlock } from './document.js';
-import { CAUTION_NOTICE, COMPARED_WITH, DOCUMENT_TYPE } from './statements.js';
+import type { PreviousData } from './previous.js';
+import { CAUTION_NOTICE, COMPARED_WITH, copyNotice, DOCUMENT_TYPE, INTERNAL_MARKING } from './statements.js';
 
 /** Everything the pages of a pack are made from. Studies and verdicts are in the order of the pack's boards. */
 export interface PackInput {
@@ -13,6 +14,10 @@ export interface PackInput {
   readonly evidence: readonly EvidenceResult[];
   readonly methods: readonly Method[];
   readonly programVersion: string;
+  /** Data of the revision before this one, where the pack names one. */
+  readonly previous?: PreviousData;
+  /** Present where the pack asks something of suppliers. */
+  readonly procurement?: ProcurementResults;
 }
 
 /** One board with all that is known of it. */
@@ -96,6 +101,21 @@ function titleBlock({ pack }: PackInput, number: string, title: string, suppleme
   };
 }
 
+/** Who may see the pack. */
+export const markingOf = ({ marking }: Pack): string => marking ?? INTERNAL_MARKING;
+
+/** Number of a document of the pack: that of the pack itself, or with a suffix. */
+export const documentNumber = (pack: Pack, suffix?: string): string =>
+  suffix === undefined ? pack.documentNumber : `${pack.documentNumber}-${suffix}`;
+
+/** Stand on every page and in the data. */
+export function noticesOf({ notice, audience }: Pack): readonly string[] {
+  const copy = audience === undefined ? [] : [copyNotice(audience)];
+  // The first one stands at the head of a page as well: there the reader learns that the data are invented or cut.
+  const first = [...copy, ...(notice === undefined ? [] : [notice])].join(' ');
+  return [...(first === '' ? [] : [first]), CAUTION_NOTICE, COMPARED_WITH];
+}
+
 /** Frame of a page: title block and the notices that stand on every page. */
 export function page(
   input: PackInput,
@@ -111,10 +131,11 @@ export function page(
 ): DocumentPage {
   const { pack } = input;
   const { suffix, ...rest } = parts;
-  const number = suffix === undefined ? pack.documentNumber : `${pack.documentNumber}-${suffix}`;
+  const number = documentNumber(pack, suffix);
   return {
     ...rest,
     titleBlock: titleBlock(input, number, parts.title, pack.title === parts.title ? undefined : pack.title),
-    notices: [...(pack.notice === undefined ? [] : [pack.notice]), CAUTION_NOTICE, COMPARED_WITH],
+    marking: markingOf(pack),
+    notices: noticesOf(pack),
   };
 }

@@ -37,6 +37,9 @@ const verdict = z.strictObject({
   reason: text.optional(),
 });
 
+const span = z.strictObject({ low: z.number(), high: z.number() });
+const condition = z.strictObject({ bandHz: span.optional(), temperatureC: span.optional() });
+
 const requirement = z.strictObject({
   id: text,
   text,
@@ -47,6 +50,7 @@ const requirement = z.strictObject({
   mask: z.array(z.strictObject({ fromRad: z.number(), toRad: z.number(), levelDb: z.number() })).optional(),
   property: text.optional(),
   allowed: z.array(text).optional(),
+  condition: condition.optional().describe("absent parts are the board's own"),
   weight: z.enum(['binding', 'target']),
   verification: z.enum(['calculation', 'test']),
   source: text,
@@ -55,8 +59,54 @@ const requirement = z.strictObject({
 const header = {
   program: z.literal('boardcase'),
   programVersion: text,
+  marking: text.describe('who may see the data'),
   notices: z.array(text).describe('cautions that go with the data'),
 };
+
+const day = text.describe('YYYY-MM-DD');
+const maybeText = text.nullable();
+
+const review = z
+  .strictObject({
+    decision: z
+      .strictObject({
+        board: maybeText.describe('null: no board is chosen'),
+        statement: text,
+        reason: text,
+        date: day,
+        by: text,
+      })
+      .nullable(),
+    openPoints: z.array(
+      z.strictObject({ id: text, text, owner: text, due: day, status: z.enum(['open', 'in work', 'closed']) }),
+    ),
+    concessions: z.array(
+      z.strictObject({
+        number: text,
+        board: text,
+        requirement: text,
+        text,
+        approver: text,
+        granted: day,
+        expiry: day,
+      }),
+    ),
+    approvals: z.array(
+      z.strictObject({
+        role: text,
+        name: maybeText,
+        organisation: text,
+        date: day.nullable(),
+        attests: text,
+      }),
+    ),
+    revisions: z.array(z.strictObject({ revision: text, date: day, author: text, change: text })),
+  })
+  .describe('what people decided; it changes no verdict');
+
+const previous = z
+  .strictObject({ revision: text, date: day, status: text, programVersion: text, sha256: text })
+  .describe('revision whose data this one was compared with, and the SHA-256 of those data');
 
 const evidence = z.strictObject({
   id: text,
@@ -97,6 +147,8 @@ export const packDataSchema = z
         data: text.describe('name of the file with the results of the board, beside this one'),
       }),
     ),
+    previous: previous.nullable(),
+    review: review.nullable(),
     requirements: z.array(requirement),
     verdicts: z.array(verdict),
     evidence: z.array(evidence),
@@ -147,6 +199,14 @@ export const boardDataSchema = z
     boardId: text,
     title: text,
     inputsHash: text,
+    retuning: z
+      .strictObject({
+        factor: z.number().describe('of every patch and link length of the drawing'),
+        drawnReflectionDb: z.number(),
+        reflectionDb: z.number(),
+      })
+      .optional()
+      .describe('where the results are of a retuned layout: passive reflection of the worst column at the band centre'),
     nominal: z.array(point),
     models: z.array(z.strictObject({ model: text, points: z.array(point) })),
     cuts: z
@@ -172,6 +232,7 @@ export const boardDataSchema = z
 export type PackData = z.infer<typeof packDataSchema>;
 export type BoardData = z.infer<typeof boardDataSchema>;
 export type VerdictData = z.infer<typeof verdict>;
+export type ConditionData = z.infer<typeof condition>;
 export type PointData = z.infer<typeof point>;
 
 const file = (schema: z.ZodType, title: string): object => ({

@@ -1,18 +1,18 @@
-import type { Requirement } from '../manifest/model.js';
+import type { Board, Requirement } from '../manifest/model.js';
 import type { Complex } from '../numerics/complex.js';
 import type { Cut, CutFigures, ModelCurves, PointResult } from '../study/results.js';
 import { type BoardVerdict, quantityOf, type RequirementVerdict } from '../verdict/index.js';
-import { type BoardContext, bandPoints, boardContexts, type PackInput } from './context.js';
+import { type BoardContext, bandPoints, boardContexts, markingOf, noticesOf, type PackInput } from './context.js';
 import {
   type BoardData,
   boardDataSchema,
+  type ConditionData,
   type PackData,
   type PointData,
   packDataSchema,
   type VerdictData,
 } from './data-schema.js';
-import { slug } from './links.js';
-import { CAUTION_NOTICE, COMPARED_WITH } from './statements.js';
+import { boardData as boardPath } from './links.js';
 import { exponentAbove } from './values.js';
 
 const DIGITS = 12;
@@ -82,6 +82,18 @@ const verdictData = (boardId: string, v: RequirementVerdict): VerdictData => ({
 const verdictsData = (verdict: BoardVerdict): VerdictData[] =>
   verdict.requirements.map((v) => verdictData(verdict.boardId, v));
 
+function conditionData({ band, temperature }: Requirement['condition']): { condition?: ConditionData } {
+  if (band === undefined && temperature === undefined) return {};
+  return {
+    condition: {
+      ...(band === undefined ? {} : { bandHz: { low: num(band.low), high: num(band.high) } }),
+      ...(temperature === undefined
+        ? {}
+        : { temperatureC: { low: num(temperature.lowC), high: num(temperature.highC) } }),
+    },
+  };
+}
+
 const requirementData = (r: Requirement): PackData['requirements'][number] => ({
   id: r.id,
   text: r.text,
@@ -94,18 +106,26 @@ const requirementData = (r: Requirement): PackData['requirements'][number] => ({
     : { mask: r.mask.map(({ from, to, levelDb }) => ({ fromRad: num(from), toRad: num(to), levelDb: num(levelDb) })) }),
   ...(r.property === undefined ? {} : { property: r.property }),
   ...(r.allowed === undefined ? {} : { allowed: [...r.allowed] }),
+  ...conditionData(r.condition),
   weight: r.weight,
   verification: r.verification,
   source: r.source,
 });
 
-const boardFile = (boardId: string): string => `board-${slug(boardId)}.json`;
+const boardFile = (boardId: string): string => boardPath(boardId).replace(/^data\//, '');
 
 const header = ({ pack, programVersion }: PackInput) => ({
   program: 'boardcase' as const,
   programVersion,
-  notices: [...(pack.notice === undefined ? [] : [pack.notice]), CAUTION_NOTICE, COMPARED_WITH],
+  marking: markingOf(pack),
+  notices: [...noticesOf(pack)],
 });
+
+function retuningData({ retuned }: Board): Pick<BoardData, 'retuning'> {
+  if (retuned === undefined || 'reason' in retuned) return {};
+  const { factor, drawnDb, retunedDb } = retuned;
+  return { retuning: { factor, drawnReflectionDb: drawnDb, reflectionDb: retunedDb } };
+}
 
 function boardData(context: BoardContext): BoardData {
   const { input, board, study, verdict } = context;
@@ -119,6 +139,7 @@ function boardData(context: BoardContext): BoardData {
     boardId: board.id,
     title: board.title,
     inputsHash: study.hash,
+    ...retuningData(board),
     nominal: study.nominal.points.map(pointData),
     models: study.models.map(({ model, sweep }) => ({ model, points: sweep.points.map(pointData) })),
     cuts: [...new Set(chosen)].map((p) => ({
@@ -147,7 +168,26 @@ function boardData(context: BoardContext): BoardData {
   };
 }
 
-function packFile(input: PackInput, boards: readonly BoardContext[]): PackData {
+function previousData({ previous }: PackInput): PackData['previous'] {
+  if (previous === undefined) return null;
+  const { revision, date, status } = previous.data.pack;
+  return { revision, date, status, programVersion: previous.data.programVersion, sha256: previous.sha256 };
+}
+
+function reviewData({ review }: PackInput['pack']): PackData['review'] {
+  if (review === undefined) return null;
+  const { decision } = review;
+  return {
+    decision: decision === undefined ? null : { ...decision, board: decision.board ?? null },
+    openPoints: review.openPoints.map((point) => ({ ...point })),
+    concessions: review.concessions.map((concession) => ({ ...concession })),
+    approvals: review.approvals.map(({ name, date, ...rest }) => ({ ...rest, name: name ?? null, date: date ?? null })),
+    revisions: review.revisions.map((entry) => ({ ...entry })),
+  };
+}
+
+/** What `data/pack.json` holds. */
+export function packFile(input: PackInput, boards: readonly BoardContext[]): PackData {
   const { id, title, documentNumber, revision, date, status, authors, owner, requirements, inputs } = input.pack;
   return {
     ...header(input),
@@ -162,6 +202,8 @@ function packFile(input: PackInput, boards: readonly BoardContext[]): PackData {
       cost: board.cost === undefined ? null : { amount: num(board.cost.amount), currency: board.cost.currency },
       data: boardFile(board.id),
     })),
+    previous: previousData(input),
+    review: reviewData(input.pack),
     requirements: requirements.requirements.map(requirementData),
     verdicts: boards.flatMap(({ verdict }) => verdictsData(verdict)),
     evidence: input.evidence.map((e) => ({

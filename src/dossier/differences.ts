@@ -1,6 +1,8 @@
 import type { Board, Figure, FinishLayer } from '../manifest/model.js';
 import { type Dimension, formatSpread } from '../quantity/index.js';
+import { declarationsByPart } from '../verdict/index.js';
 import { micrometres } from './figures.js';
+import { factorText } from './retuning.js';
 import { bandText, celsius, costText, statedNumber, temperatureText } from './values.js';
 
 interface Field {
@@ -23,6 +25,14 @@ const optional = (figure: Figure | undefined, dimension: Dimension | 'number'): 
 const layers = (finish: readonly FinishLayer[], text: (layer: FinishLayer) => string): string =>
   finish.length === 0 ? 'bare' : finish.map((layer) => `${layer.material}: ${text(layer)}`).join('; ');
 const spread = (figure: Figure, dimension: Dimension | 'number'): string => optional(figure, dimension);
+
+/** As stated, wherever they are declared for the board; the same property of two parts once each. */
+function declaredText(board: Board): string {
+  const texts = declarationsByPart(board).map(
+    ({ property: { id, value, unit } }) => `${id} ${value}${unit === undefined ? '' : ` ${unit}`}`,
+  );
+  return texts.length === 0 ? 'none' : [...new Set(texts)].join('; ');
+}
 
 /** What a board is, field by field, in the order of the board file. Every field that changes a result is here. */
 const FIELDS: readonly Field[] = [
@@ -106,6 +116,15 @@ const FIELDS: readonly Field[] = [
   { label: 'Patch lengths (mm)', text: (b) => perColumn(b, (c) => list(c.patches.map((p) => mm(p.length)))) },
   { label: 'Link widths (mm)', text: (b) => perColumn(b, (c) => list(c.links.map((l) => mm(l.width)))) },
   { label: 'Link lengths (mm)', text: (b) => perColumn(b, (c) => list(c.links.map((l) => mm(l.length)))) },
+  {
+    label: 'Retuned by',
+    text: ({ retuned }) =>
+      retuned === undefined
+        ? 'as drawn'
+        : 'reason' in retuned
+          ? 'not possible'
+          : `length × ${factorText(retuned.factor)}`,
+  },
   { label: 'Feed amplitudes', text: (b) => list(b.feed.map((p) => statedNumber(p.amplitude, 6))) },
   { label: 'Feed phases', text: (b) => list(b.feed.map((p) => `${statedNumber((p.phase * 180) / Math.PI, 4)}°`)) },
   {
@@ -127,6 +146,7 @@ const FIELDS: readonly Field[] = [
     text: (b) => `${temperatureText(b.temperature)}, nominal ${celsius(b.temperature.nominalC)}`,
   },
   { label: 'Etching tolerance', text: (b) => optional(b.tolerances.etch, 'length') },
+  { label: 'Declared properties', text: declaredText },
   {
     label: 'Cost',
     text: (b) => (b.cost === undefined ? 'not given' : costText(b.cost)),

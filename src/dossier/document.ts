@@ -11,12 +11,16 @@ export type Inline =
   | { readonly code: string }
   | { readonly status: Status }
   /** Link to a page of the same pack by page id, optionally to a block or chapter on it. */
-  | { readonly text: string; readonly page: string; readonly anchor?: string };
+  | { readonly text: string; readonly page: string; readonly anchor?: string }
+  /** Link to a file of the same revision by its path below the folder of the revision: `pdf/pack.pdf`. */
+  | { readonly text: string; readonly file: string };
 
 export interface Cell {
   readonly content: readonly Inline[];
   /** Numbers align right. Default left. */
   readonly numeric?: boolean;
+  /** Room and a line to sign on, on paper. */
+  readonly signature?: boolean;
 }
 
 export interface TableBlock {
@@ -83,16 +87,26 @@ export interface TitleBlock {
   readonly segment?: string;
 }
 
-export type PageKind = 'overview' | 'dossier' | 'requirement' | 'evidence' | 'definitions';
+export type PageKind =
+  | 'overview'
+  | 'pack'
+  | 'dossier'
+  | 'compare'
+  | 'requirement'
+  | 'offers'
+  | 'evidence'
+  | 'definitions';
 
 export interface DocumentPage {
-  /** Unique in the pack: `overview`, `board/qb-1`, `requirement/r-gain`, `evidence`, `definitions`. */
+  /** Unique in the pack: `overview`, `board/qb-1`, `compare/qb-1--qb-2`, `requirement/r-gain`, `evidence`, `definitions`; `pack` for the document of the whole pack. */
   readonly id: string;
   readonly kind: PageKind;
   readonly title: string;
   readonly subtitle: string;
   readonly titleBlock: TitleBlock;
-  /** Printed on every page: notice that data are invented, marking. */
+  /** Who may see it; stands at the head of every page. */
+  readonly marking?: string;
+  /** Printed on every page: notice that data are invented, cautions. */
   readonly notices: readonly string[];
   readonly chapters: readonly Chapter[];
 }
@@ -101,7 +115,7 @@ export interface PackDocument {
   readonly packId: string;
   readonly revision: string;
   readonly title: string;
-  /** overview first, then dossiers, requirements, evidence, definitions. */
+  /** overview first, then dossiers, comparisons, requirements, evidence, definitions. */
   readonly pages: readonly DocumentPage[];
 }
 

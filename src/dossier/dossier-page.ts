@@ -10,7 +10,7 @@ import { uncertaintyChapter } from './chapter-uncertainty.js';
 import { verdictChapter } from './chapter-verdict.js';
 import { type BoardContext, page } from './context.js';
 import type { DocumentPage } from './document.js';
-import { boardPage, boardTitle, slug } from './links.js';
+import { boardPage, boardSuffix, boardTitle } from './links.js';
 
 /** Dossier of one board; chapters in the order in which a reviewer decides. */
 export function dossierPage(context: BoardContext): DocumentPage {
@@ -20,7 +20,7 @@ export function dossierPage(context: BoardContext): DocumentPage {
     kind: 'dossier',
     title: boardTitle(board),
     subtitle: `Verdict: ${verdict.overall}`,
-    suffix: slug(board.id).toUpperCase(),
+    suffix: boardSuffix(board.id),
     chapters: [
       verdictChapter(context),
       boardChapter(context),

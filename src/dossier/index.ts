@@ -1,5 +1,11 @@
+export { type Changes, changesBetween, type Flip } from './changes.js';
 export { composePack } from './compose.js';
-export type { PackInput } from './context.js';
+export { markingOf, type PackInput } from './context.js';
 export { packData } from './data.js';
 export { type BoardData, dataSchemas, type PackData } from './data-schema.js';
 export type * from './document.js';
+export { PACK_PDF } from './links.js';
+export { packPage } from './pack-page.js';
+export { type PreviousData, type RevisionData, readRevisionData } from './previous.js';
+export { type SheetContent, sheetContent } from './supplier-allowed-fields.js';
+export { type SupplierSheet, supplierSheet } from './supplier-sheet.js';

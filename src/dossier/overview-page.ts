@@ -1,30 +1,37 @@
 import { formatNumber } from '../quantity/index.js';
 import { quantityOf, quantityTitle } from '../verdict/index.js';
 import { caution, cell, chapter, facts, list, number, plainTable, prose, table } from './blocks.js';
+import { changesChapter } from './changes-chapter.js';
 import { cautionsChapter, inputTable } from './chapter-record.js';
-import { type BoardContext, type Judged, judgedOn, type PackInput, page } from './context.js';
+import { comparisonLinks } from './comparisons.js';
+import { type BoardContext, judgedOn, type PackInput, page } from './context.js';
 import { differencesBetween } from './differences.js';
-import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
+import type { Block, Chapter, DocumentPage, Inline } from './document.js';
 import { concernsOf } from './figures.js';
-import { boardPage, boardTitle, DEFINITIONS, EVIDENCE, link, OVERVIEW, requirementPage } from './links.js';
+import {
+  boardPage,
+  boardPdf,
+  boardTitle,
+  DEFINITIONS,
+  EVIDENCE,
+  fileLink,
+  link,
+  OFFERS,
+  OVERVIEW,
+  PACK_PDF,
+  requirementPage,
+} from './links.js';
+import { boardsByStatus, gapsOf, matrixCell, notEvaluatedText } from './matrix.js';
+import {
+  approvalsChapter,
+  concessionsChapter,
+  decisionChapter,
+  openPointsChapter,
+  revisionsChapter,
+} from './review-chapters.js';
 import { rankedRequirements, standing, tightest } from './standing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
-import { costText, count, limitText, marginText, valueText } from './values.js';
-
-/** Status with the worst margin, or the declared value. */
-function matrixCell(entry: Judged): Cell {
-  const { verdict } = entry;
-  const detail =
-    verdict.margin !== undefined
-      ? marginText(verdict.margin, verdict.unit)
-      : typeof verdict.value === 'string'
-        ? valueText(verdict.value, verdict.unit)
-        : '';
-  return cell({ status: verdict.status }, ...(detail === '' ? [] : [` ${detail}`]));
-}
-
-const notEvaluatedOn = (board: BoardContext): number =>
-  board.judged.filter(({ verdict }) => verdict.status === 'not evaluated').length;
+import { costText, count, limitText, marginText } from './values.js';
 
 function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof rankedRequirements>): Block {
   return plainTable(
@@ -40,7 +47,7 @@ function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof ranke
     boards.map((board) => [
       cell(link(boardTitle(board.board), boardPage(board.board.id))),
       cell({ status: board.verdict.overall }),
-      ...ranked.map(({ requirement }) => matrixCell(judgedOn(board, requirement.id))),
+      ...ranked.map(({ requirement }) => matrixCell(board, requirement.id)),
     ]),
   );
 }
@@ -126,81 +133,44 @@ function differences(boards: readonly BoardContext[]): Block {
   );
 }
 
-function pagesChapter({ pack }: PackInput, boards: readonly BoardContext[]): Chapter {
+function pagesChapter({ pack, procurement }: PackInput, boards: readonly BoardContext[]): Chapter {
   const dossier = ({ board, verdict }: BoardContext): readonly Inline[] => [
     link(`Dossier of ${boardTitle(board)}`, boardPage(board.id)),
     ' ',
     { status: verdict.overall },
+    ', ',
+    fileLink('PDF', boardPdf(board.id)),
   ];
   return chapter(
     'pages',
     'Pages of this pack',
     list([
+      [fileLink('The pack as one PDF', PACK_PDF), ': verdicts, decision, concessions and signatures'],
       ...boards.map(dossier),
       ...pack.requirements.requirements.map((r): readonly Inline[] => [
         link(`Requirement ${r.id}`, requirementPage(r.id)),
         `: ${r.text}`,
       ]),
+      ...(procurement === undefined
+        ? []
+        : [[link('Suppliers', OFFERS), ': what is asked of whom, how far each item may go, and what came back']]),
       [link('Evidence', EVIDENCE), ': methods, their sources and ranges, and the checks run for this build'],
       [link('Definitions', DEFINITIONS), ': what every figure and status means'],
     ]),
   );
 }
 
-/** Status of the pack in one sentence; the overview has no status of its own beyond those of its boards. */
-function summary(boards: readonly BoardContext[]): readonly Block[] {
-  const of = (overall: string) => boards.filter((b) => b.verdict.overall === overall);
-  const order = ['meets', 'open until measured', 'undecided', 'misses', 'incomplete'] as const;
-  const groups = order.flatMap((status) => {
-    const found = of(status);
-    return found.length === 0 ? [] : [{ status, found }];
-  });
-  const open = boards.reduce((sum, b) => sum + notEvaluatedOn(b), 0);
-  return [
-    list(
-      groups.map(({ status, found }) => [
-        { status },
-        ` ${count(found.length, 'board')}: `,
-        ...found.flatMap(({ board }, i): Inline[] => [
-          ...(i === 0 ? [] : [', ']),
-          link(boardTitle(board), boardPage(board.id)),
-        ]),
-      ]),
-    ),
-    facts('counts', [
-      'Not evaluated',
-      open === 0 ? 'nothing' : `${count(open, 'requirement')} over all boards; reasons on the requirement pages`,
-    ]),
-  ];
-}
-
-/** What was not evaluated on a board, one line per reason. */
-function gapsOf({ board, judged }: BoardContext): readonly (readonly Inline[])[] {
-  const reasonOf = ({ verdict }: Judged): string => verdict.reason ?? 'no reason recorded';
-  const open = judged.filter(({ verdict }) => (verdict.calculated ?? verdict.status) === 'not evaluated');
-  return [...new Set(open.map(reasonOf))].map((reason) => [
-    link(boardTitle(board), boardPage(board.id)),
-    ': ',
-    ...open
-      .filter((entry) => reasonOf(entry) === reason)
-      .flatMap(({ requirement }, i): Inline[] => [
-        ...(i === 0 ? [] : [', ']),
-        link(requirement.id, requirementPage(requirement.id)),
-      ]),
-    `. Reason: ${reason}`,
-  ]);
-}
-
 export function overviewPage(input: PackInput, boards: readonly BoardContext[]): DocumentPage {
   const { pack } = input;
   const ranked = rankedRequirements(pack.requirements.requirements, boards);
-  const gaps = boards.flatMap(gapsOf);
+  const gaps = boards.flatMap((board) => gapsOf(board, true));
   return page(input, {
     id: OVERVIEW,
     kind: 'overview',
     title: pack.title,
     subtitle: `${pack.documentNumber}, revision ${pack.revision}, ${pack.date}: ${count(boards.length, 'board')} against ${count(pack.requirements.requirements.length, 'requirement')}`,
     chapters: [
+      changesChapter(input, boards),
       chapter(
         'overview',
         'Overview',
@@ -208,12 +178,20 @@ export function overviewPage(input: PackInput, boards: readonly BoardContext[]):
           `Candidate antenna boards compared against one requirement set, ${pack.requirements.title}, by calculation. `,
           'Each cell of the table gives a status and the worst margin over the band and temperature range of the requirement; the dossiers behind it give the figures, their uncertainty and what they rest on.',
         ),
-        ...summary(boards),
+        boardsByStatus(boards),
+        facts(
+          'counts',
+          ['Not evaluated', notEvaluatedText(boards, 'on the requirement pages')],
+          ['To sign', fileLink('the pack as one PDF', PACK_PDF)],
+        ),
         matrix(boards, ranked),
         ...(gaps.length === 0 ? [] : [caution('Not evaluated', ...gaps)]),
         caution('What is not modelled', ...NOT_MODELLED.map((line) => [line])),
         caution('What the figures are compared with', [COMPARED_WITH]),
       ),
+      decisionChapter(input, boards),
+      openPointsChapter(input),
+      concessionsChapter(boards, input),
       chapter(
         'standing',
         'How the boards stand',
@@ -223,8 +201,10 @@ export function overviewPage(input: PackInput, boards: readonly BoardContext[]):
         ),
         requirementList(boards, ranked),
       ),
-      chapter('differences', 'What differs between the boards', differences(boards)),
+      chapter('differences', 'What differs between the boards', differences(boards), ...comparisonLinks(boards)),
       chapter('assumptions', 'What the verdicts rest on', assumptionTable(boards)),
+      revisionsChapter(input),
+      approvalsChapter(input),
       pagesChapter(input, boards),
       chapter(
         'inputs',

@@ -3,6 +3,9 @@ import type { Inline } from './document.js';
 /** Sentences that every document carries. Kept in one place so that no page can say less than another. */
 export const DOCUMENT_TYPE = 'Compliance dossier for design review (calculated)';
 
+/** Who may see a page where the pack does not say. */
+export const INTERNAL_MARKING = 'internal: not for suppliers';
+
 export const NOT_MODELLED: readonly string[] = [
   'Fascia, bumper or radome in front of the antenna.',
   'Housing and neighbouring parts.',
@@ -13,6 +16,10 @@ export const NOT_MODELLED: readonly string[] = [
 
 export const COMPARED_WITH =
   'The figures are compared with calculations by other methods and with published values. No board of this build has been measured.';
+
+/** Stands on every page of a copy: a status over fewer requirements must not pass for the whole. */
+export const copyNotice = (audience: string): string =>
+  `Copy for the audience “${audience}”: entries are left out, and every status stands for the requirements shown here only.`;
 
 /** One line for the notices of every page. */
 export const CAUTION_NOTICE =

@@ -1,9 +1,10 @@
 import { quoted } from '../quantity/index.js';
 import { boardDocument } from './documents/board-document.js';
+import type { Board } from './model.js';
 import { nearest } from './nearest.js';
 import type { OpenFile } from './open-files.js';
 import type { Problem } from './problem.js';
-import { child, type MapNode, markAt, type Node, problemAt } from './tree.js';
+import { child, type MapNode, markAt, type Node, nodeAt, problemAt } from './tree.js';
 import { mergeBoards } from './variant.js';
 
 /** A board file with its own id and the id of its parent, as far as they can be read. */
@@ -14,11 +15,14 @@ export interface BoardFile extends OpenFile {
   readonly sound: boolean;
 }
 
+type Link = NonNullable<Board['lineage']>[number];
+
 export interface ChainedBoard {
   readonly file: BoardFile;
   readonly root: MapNode;
   readonly basedOn: readonly string[];
   readonly overrides: readonly string[];
+  readonly lineage: NonNullable<Board['lineage']>;
 }
 
 export function idOf(node: Node, key: string): string | undefined {
@@ -41,13 +45,31 @@ export function chainBoards(
     const oldest = chain.at(-1)!.root as MapNode;
     let overrides: string[] = [];
     let root = oldest;
+    const lineage: Link[] = [{ board: chain.at(-1)!.id!, file: chain.at(-1)!.path, overrides: [] }];
     for (const younger of chain.slice(0, -1).reverse()) {
       overrides = [];
       root = mergeBoards(boardDocument, root, younger.root as MapNode, overrides);
+      lineage.unshift({
+        board: younger.id!,
+        file: younger.path,
+        overrides: overrides.map((path) => ({ path, text: shortText(nodeAt(younger.root, path.split('.'))) })),
+      });
     }
-    chained.push({ file: board, root, basedOn: chain.slice(1).map((b) => b.id!), overrides });
+    chained.push({ file: board, root, basedOn: chain.slice(1).map((b) => b.id!), overrides, lineage });
   }
   return { chained, problems };
+}
+
+/** What an override says, in a few words: a plain value or the value of a figure; a larger statement is only counted. */
+function shortText(node: Node | undefined): string {
+  if (node === undefined) return '';
+  if (node.kind === 'scalar') return node.value === null ? 'dropped' : node.text;
+  if (node.kind === 'list') {
+    const plain = node.items.every((item) => item.kind === 'scalar');
+    return plain ? node.items.map(shortText).join(', ') : `a list of ${node.items.length}`;
+  }
+  const value = child(node, 'value') ?? child(node, 'kind');
+  return value === undefined ? 'stated anew' : shortText(value);
 }
 
 /** The board, its parent, … to the one that stands alone. */

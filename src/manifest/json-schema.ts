@@ -2,7 +2,9 @@ import { z } from 'zod';
 import { boardDocument } from './documents/board-document.js';
 import { finishesDocument, foilsDocument, laminatesDocument } from './documents/library-documents.js';
 import { packDocument } from './documents/pack-document.js';
+import { procurementDocument } from './documents/procurement-document.js';
 import { requirementsDocument } from './documents/requirement-document.js';
+import { reviewDocument } from './documents/review-document.js';
 import { variantDocument } from './documents/variant-document.js';
 
 type JsonSchema = Record<string, unknown>;
@@ -35,7 +37,9 @@ export function manifestSchemas(): Record<string, object> {
     'foils.schema.json': document('Foils', exported(foilsDocument)),
     'laminates.schema.json': document('Laminates', exported(laminatesDocument)),
     'pack.schema.json': document('Pack', exported(packDocument)),
+    'procurement.schema.json': document('Procurement', exported(procurementDocument)),
     'requirements.schema.json': document('Requirement set', exported(requirementsDocument)),
+    'review.schema.json': document('Review', exported(reviewDocument)),
   };
 }
 

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import { audienceRules } from './audience-rules.js';
 import { type BoardFile, chainBoards, idOf } from './board-chain.js';
 import { boardRules } from './board-rules.js';
 import { checkDocument } from './check.js';
@@ -13,19 +14,25 @@ import {
 } from './documents/library-documents.js';
 import { type PackDocument, packDocument } from './documents/pack-document.js';
 import { type RequirementsDocument, requirementsDocument } from './documents/requirement-document.js';
+import { type ReviewDocument, reviewDocument } from './documents/review-document.js';
 import { variantDocument } from './documents/variant-document.js';
 import { si } from './figures.js';
 import type { PackFiles } from './files.js';
 import { finishRules, foilRules, laminateRules } from './library-rules.js';
-import type { Board, Pack } from './model.js';
+import type { Board, Pack, PreviousRevision, Review } from './model.js';
 import { type OpenFile, Reader } from './open-files.js';
+import { openProcurement, procurementFor } from './open-procurement.js';
+import { boardNameRules, packRules } from './pack-rules.js';
 import { type Path, type Problem, sortProblems } from './problem.js';
 import { requirementRules } from './requirement-rules.js';
 import { boardOf, type Libraries } from './resolve-board.js';
 import { finishOf, foilOf, laminateOf } from './resolve-library.js';
 import { requirementsOf } from './resolve-requirements.js';
+import { reviewOf } from './resolve-review.js';
+import { type ReviewContext, reviewRules } from './review-rules.js';
 import type { KnownIds } from './rules.js';
 import { child, type Node, nodeAt, problemAt, toData } from './tree.js';
+import { inTable, readVariantTable } from './variant-table.js';
 
 export type LoadResult = { readonly pack: Pack } | { readonly problems: readonly Problem[] };
 
@@ -48,6 +55,7 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   if (packFile === undefined) return { problems: sortProblems(reader.problems) };
   const { problems } = reader;
   const pack = checked<PackDocument>(packDocument, packFile, problems);
+  if (pack) problems.push(...packRules(packFile.root, pack.doc));
 
   const laminates = openLibrary<{ laminates: LaminateDocument[] }>(
     reader,
@@ -88,20 +96,30 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   });
 
   const set = sets[0];
+  const boardIds = boards.files.flatMap((file) => file.id ?? []);
+  const requirementIds = set?.doc.requirements.map((requirement) => requirement.id) ?? [];
+  const review = openReview(reader, packFile, {
+    boards: { ids: new Set(boardIds), complete: boards.complete && boardIds.length === boards.files.length },
+    requirements: { ids: new Set(requirementIds), complete: set !== undefined },
+    ...(pack ? { revision: pack.doc.revision, date: pack.doc.date } : {}),
+  });
+  const previous = previousOf(reader, packFile, pack?.doc.previous);
+  const procurement = openProcurement(reader, packFile, checked);
   if (problems.length > 0 || !pack || !set) return { problems: sortProblems(problems) };
   const libraries: Libraries = {
     laminates: byId(laminates.checked, (d) => d.laminates, laminateOf),
     foils: byId(foils.checked, (d) => d.foils, foilOf),
     finishes: byId(finishes.checked, (d) => d.finishes, finishOf),
   };
-  const resolved = complete.map(({ doc, board }) =>
-    boardOf(
-      doc,
-      { root: board.root, file: board.file.path, basedOn: board.basedOn, overrides: board.overrides },
-      libraries,
-    ),
-  );
-  return { pack: packOf(pack.doc, resolved, requirementsOf(set.doc, set.file.path), reader) };
+  const resolved = complete.map(({ doc, board }) => boardOf(doc, { ...board, file: board.file.path }, libraries));
+  const parts = { boards: resolved, requirements: requirementsOf(set.doc, set.file.path), review, previous };
+  const made = packOf(pack.doc, parts, reader);
+  const hiding = audienceRules(packFile.root, pack.doc.audiences ?? [], made);
+  if (hiding.length > 0) return { problems: sortProblems(hiding) };
+  if (!procurement) return { pack: made };
+  const asked = procurementFor(procurement, made);
+  if ('problems' in asked) return { problems: sortProblems(asked.problems) };
+  return { pack: { ...made, procurement: asked.procurement } };
 }
 
 function checked<D>(schema: z.ZodType, file: OpenFile, problems: Problem[]): Checked<D> | undefined {
@@ -142,16 +160,42 @@ function openLibrary<D>(
   return { checked: documents, known: { ids: new Set(ids.keys()), complete } };
 }
 
+function openReview(reader: Reader, packFile: OpenFile, context: ReviewContext): Review | undefined {
+  const [file] = reader.openReferences(packFile, ['review']).files;
+  const one = file && checked<ReviewDocument>(reviewDocument, file, reader.problems);
+  if (!one) return undefined;
+  reader.problems.push(...reviewRules(one.file.root, one.doc, context));
+  return reviewOf(one.doc, one.file.path);
+}
+
+function previousOf(
+  reader: Reader,
+  packFile: OpenFile,
+  previous: PackDocument['previous'],
+): PreviousRevision | undefined {
+  if (previous?.revision !== undefined) return { revision: previous.revision };
+  const file = reader.openData(packFile, ['previous', 'data']);
+  return file === undefined ? undefined : { file };
+}
+
 function openBoards(
   reader: Reader,
   packFile: OpenFile,
 ): { readonly files: readonly BoardFile[]; readonly complete: boolean } {
-  const { files, complete } = reader.openReferences(packFile, ['boards']);
+  const listed = reader.openReferences(packFile, ['boards']);
+  const tables = reader.openReferences(packFile, ['variants'], readVariantTable);
+  const rows = tables.files.flatMap(({ path, root }) =>
+    root.kind === 'list' ? root.items.map((item): OpenFile => ({ path, root: item })) : [],
+  );
+  const complete = listed.complete && (tables.complete || nodeAt(packFile.root, ['variants']) === undefined);
   const ids = new Map<string, string>();
-  const boards = files.map((file): BoardFile => {
-    const isVariant = file.root.kind === 'map' && file.root.entries.has('based_on');
-    const found = checkDocument(isVariant ? variantDocument : boardDocument, file.root);
-    reader.problems.push(...found);
+  const boards = [...listed.files, ...rows].map((file): BoardFile => {
+    const isRow = rows.includes(file);
+    const isVariant = isRow || (file.root.kind === 'map' && file.root.entries.has('based_on'));
+    const found = checkDocument(isVariant ? variantDocument : boardDocument, file.root).map((p) =>
+      isRow ? inTable(p) : p,
+    );
+    reader.problems.push(...found, ...boardNameRules(file.root));
     uniqueId(file.root, 'id', file.path, ids, 'the boards of a pack have one id each', reader.problems);
     const id = idOf(file.root, 'id');
     const basedOn = idOf(file.root, 'based_on');
@@ -195,7 +239,20 @@ function byId<D, I, M>(
 
 const STATUS = { draft: 'draft', for_review: 'for review', released: 'released' } as const;
 
-function packOf(doc: PackDocument, boards: readonly Board[], requirements: Pack['requirements'], reader: Reader): Pack {
+interface Parts {
+  readonly boards: readonly Board[];
+  readonly requirements: Pack['requirements'];
+  readonly review: Review | undefined;
+  readonly previous: PreviousRevision | undefined;
+}
+
+const audienceFrom = ({ id, marking, hide }: NonNullable<PackDocument['audiences']>[number]) => ({
+  id,
+  ...(marking === undefined ? {} : { marking }),
+  hide,
+});
+
+function packOf(doc: PackDocument, { boards, requirements, review, previous }: Parts, reader: Reader): Pack {
   return {
     id: doc.id,
     title: doc.title,
@@ -206,6 +263,10 @@ function packOf(doc: PackDocument, boards: readonly Board[], requirements: Pack[
     authors: doc.authors,
     owner: doc.owner,
     ...(doc.notice === undefined ? {} : { notice: doc.notice }),
+    ...(doc.marking === undefined ? {} : { marking: doc.marking }),
+    ...(review === undefined ? {} : { review }),
+    ...(previous === undefined ? {} : { previous }),
+    ...(doc.audiences === undefined ? {} : { audiences: doc.audiences.map(audienceFrom) }),
     boards,
     requirements,
     analysis: {

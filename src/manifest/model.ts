@@ -3,6 +3,8 @@
  * All numbers are SI (Hz, m, K differences in K, temperatures in degC where named so, S/m, Np-free ratios),
  * except levels, which are dB and say so in their name.
  */
+import type { Procurement } from './procurement-model.js';
+
 export type Basis = 'guaranteed' | 'typical' | 'measured' | 'estimated';
 export type Direction = 'through-thickness' | 'in-plane';
 
@@ -170,6 +172,19 @@ export interface Cost {
   readonly basis?: string;
 }
 
+/** Outcome of scaling patch and link lengths to the band centre, or why there is none. */
+export type Retuned =
+  | {
+      /** Applied to every patch and link length; four decimals, so that the printed factor is the one used. */
+      readonly factor: number;
+      /** Passive reflection of the worst column at band centre, nominal conditions, dB: as drawn and as retuned. */
+      readonly drawnDb: number;
+      readonly retunedDb: number;
+      /** Columns before scaling. */
+      readonly drawn: readonly ColumnLayout[];
+    }
+  | { readonly reason: string };
+
 export interface Board {
   readonly id: string;
   readonly title: string;
@@ -180,8 +195,17 @@ export interface Board {
   readonly file: string;
   /** Dotted paths overridden relative to the parent, in file order. */
   readonly overrides: readonly string[];
+  /** This board, its parent, … to the one that stands alone, each with what it overrides of the next. */
+  readonly lineage?: readonly {
+    readonly board: string;
+    readonly file: string;
+    readonly overrides: readonly { readonly path: string; readonly text: string }[];
+  }[];
   readonly stackUp: StackUp;
   readonly columns: readonly ColumnLayout[];
+  /** Asked for by the manifest; done by the study before anything else, which then says so in `retuned`. */
+  readonly retune?: 'length';
+  readonly retuned?: Retuned;
   readonly pitch: number;
   readonly feed: readonly FeedPath[];
   /** `line`: reflections are referred to the feed line's own impedance; a number: ohm. */
@@ -262,6 +286,66 @@ export interface InputFile {
   readonly sha256: string;
 }
 
+/** What people decided about a pack. Nothing of it changes a verdict. Days are ISO dates, YYYY-MM-DD. */
+export interface Review {
+  /** File path relative to the root folder, with forward slashes. */
+  readonly file: string;
+  /** Absent as long as nothing is decided; without `board` the decision is for no board. */
+  readonly decision?: {
+    readonly board?: string;
+    readonly statement: string;
+    readonly reason: string;
+    readonly date: string;
+    readonly by: string;
+  };
+  readonly openPoints: readonly {
+    readonly id: string;
+    readonly text: string;
+    readonly owner: string;
+    readonly due: string;
+    readonly status: 'open' | 'in work' | 'closed';
+  }[];
+  readonly concessions: readonly Concession[];
+  readonly approvals: readonly {
+    readonly role: string;
+    readonly name?: string;
+    readonly organisation: string;
+    /** Of a signature already given. */
+    readonly date?: string;
+    readonly attests: string;
+  }[];
+  /** Oldest first; the last is the revision of the pack. Empty when the review has no such table. */
+  readonly revisions: readonly {
+    readonly revision: string;
+    readonly date: string;
+    readonly author: string;
+    readonly change: string;
+  }[];
+}
+
+export interface Concession {
+  readonly number: string;
+  readonly board: string;
+  readonly requirement: string;
+  readonly text: string;
+  readonly approver: string;
+  readonly granted: string;
+  /** Last day on which it holds. */
+  readonly expiry: string;
+}
+
+/** Where the data of the previous revision lie: in the output folder under its name, or in a file under the root. */
+export type PreviousRevision = { readonly revision: string } | { readonly file: string };
+
+/** A kind of reader who gets a copy of the pack with entries left out. */
+export interface Audience {
+  readonly id: string;
+  /** Of the copy; that of the pack where absent. */
+  readonly marking?: string;
+  /** `cost`, `authors`, `descriptions`, `sources`, `review`, `declared`, `declared/<id>`, `boards/<id>`, `requirements/<id>`. */
+  readonly hide: readonly string[];
+}
+
 export interface Pack {
   readonly id: string;
   readonly title: string;
@@ -274,6 +358,14 @@ export interface Pack {
   readonly owner: string;
   /** Printed on every page when the data are invented. */
   readonly notice?: string;
+  /** Who may see it, printed on every page; `internal: not for suppliers` where absent. */
+  readonly marking?: string;
+  readonly review?: Review;
+  readonly procurement?: Procurement;
+  readonly previous?: PreviousRevision;
+  readonly audiences?: readonly Audience[];
+  /** Set in a copy for an audience: its id. */
+  readonly audience?: string;
   readonly boards: readonly Board[];
   readonly requirements: RequirementSet;
   readonly analysis: Analysis;

@@ -4,7 +4,7 @@ import type { PackFiles } from './files.js';
 import type { InputFile } from './model.js';
 import { resolveReference } from './paths.js';
 import { dotted, type Path, type Problem } from './problem.js';
-import { readYaml } from './read-yaml.js';
+import { type ReadResult, readYaml } from './read-yaml.js';
 import { makeSource, type Node, nodeAt, problemAt } from './tree.js';
 
 /** A manifest that could be read as YAML. */
@@ -35,7 +35,11 @@ export class Reader {
   }
 
   /** Files named by a list (or one value) of a manifest, in order; those that fail are reported at the name. */
-  openReferences(from: OpenFile, path: Path): { readonly files: readonly OpenFile[]; readonly complete: boolean } {
+  openReferences(
+    from: OpenFile,
+    path: Path,
+    read: (path: string, bytes: Uint8Array) => ReadResult = readYaml,
+  ): { readonly files: readonly OpenFile[]; readonly complete: boolean } {
     const node = nodeAt(from.root, path);
     const items = node?.kind === 'list' ? node.items : node ? [node] : [];
     const files: OpenFile[] = [];
@@ -57,7 +61,7 @@ export class Reader {
       else if (seen.has(resolved.path)) problem(`${quoted(name)} a second time`, 'a file is listed once');
       else {
         seen.add(resolved.path);
-        file = this.open(resolved.path, problem, name);
+        file = this.open(resolved.path, problem, name, read);
       }
       if (file) files.push(file);
       if (faulty || !file) complete = false;
@@ -65,7 +69,43 @@ export class Reader {
     return { files, complete };
   }
 
-  private open(path: string, problem: (found: string, allowed: string) => void, name = path): OpenFile | undefined {
+  /** A file named by one value of a manifest that is no manifest itself: only read and hashed. Its path, or undefined. */
+  openData(from: OpenFile, path: Path): string | undefined {
+    const node = nodeAt(from.root, path);
+    if (node?.kind !== 'scalar' || typeof node.value !== 'string') return undefined;
+    const name = node.value;
+    const problem = (found: string, allowed: string, fix?: string) => {
+      this.problems.push(problemAt(node.mark, dotted(path), found, allowed, fix));
+    };
+    const resolved = resolveReference(from.path, name);
+    if ('refused' in resolved) {
+      problem(quoted(name), resolved.refused, resolved.fix);
+      return undefined;
+    }
+    return this.bytesOf(resolved.path, problem, name) === undefined ? undefined : resolved.path;
+  }
+
+  private open(
+    path: string,
+    problem: (found: string, allowed: string) => void,
+    name = path,
+    readAs: (path: string, bytes: Uint8Array) => ReadResult = readYaml,
+  ): OpenFile | undefined {
+    const bytes = this.bytesOf(path, problem, name);
+    if (bytes === undefined) return undefined;
+    const read = readAs(path, bytes);
+    if ('problems' in read) {
+      this.problems.push(...read.problems);
+      return undefined;
+    }
+    return { path, root: read.root };
+  }
+
+  private bytesOf(
+    path: string,
+    problem: (found: string, allowed: string) => void,
+    name: string,
+  ): Uint8Array | undefined {
     const bytes = this.files.read(path);
     if (bytes === undefined) {
       problem(quoted(name), `a file that exists; there is no ${path} under the root folder`);
@@ -76,12 +116,7 @@ export class Reader {
       return undefined;
     }
     this.hashes.set(path, createHash('sha256').update(bytes).digest('hex'));
-    const read = readYaml(path, bytes);
-    if ('problems' in read) {
-      this.problems.push(...read.problems);
-      return undefined;
-    }
-    return { path, root: read.root };
+    return bytes;
   }
 
   /** Every file that was read, sorted by path. */

@@ -11,9 +11,9 @@ import {
   type SequenceEvent,
 } from 'js-yaml';
 import { quoted } from '../quantity/index.js';
-import { LARGEST_FILE } from './files.js';
 import { dotted, type Path, type Problem } from './problem.js';
-import { type Mark, makeSource, type Node, problemAt, type Source } from './tree.js';
+import { readText } from './read-text.js';
+import { type Mark, type Node, problemAt, type Source } from './tree.js';
 
 export type ReadResult = { readonly root: Node } | { readonly problems: readonly Problem[] };
 
@@ -31,29 +31,16 @@ type Draft =
 
 /** Bytes of one manifest to a tree that knows its places, or everything that keeps it from being read. */
 export function readYaml(path: string, bytes: Uint8Array): ReadResult {
-  const top = (found: string, allowed: string, fix?: string): ReadResult => ({
-    problems: [problemAt({ source: makeSource(path, ''), offset: 0 }, '', found, allowed, fix)],
-  });
-  if (bytes.length > LARGEST_FILE) return top(`${bytes.length} bytes`, `a manifest has at most ${LARGEST_FILE} bytes`);
-  let text: string;
-  try {
-    text = new TextDecoder('utf-8', { fatal: true }).decode(bytes);
-  } catch {
-    return top('bytes that are not UTF-8 text', 'a manifest is a YAML text file in UTF-8');
-  }
-  const source = makeSource(path, text);
-  const nul = text.indexOf('\0');
-  if (nul >= 0) {
-    const problem = problemAt({ source, offset: nul }, '', 'a NUL byte', 'a manifest is a YAML text file in UTF-8');
-    return { problems: [problem] };
-  }
+  const read = readText(path, bytes, 'YAML');
+  if ('problems' in read) return read;
+  const { source } = read;
   try {
     return walk(source);
   } catch (error) {
     // The parser may throw more than its own exception on hostile input; whatever it is, the file is at fault.
     const { reason, mark } = error as { reason?: string; mark?: { position?: number } };
     const why = reason ?? (error instanceof Error ? error.message : String(error));
-    const offset = Math.min(mark?.position ?? 0, text.length);
+    const offset = Math.min(mark?.position ?? 0, source.text.length);
     return { problems: [problemAt({ source, offset }, '', `YAML that cannot be read (${why})`, adviceFor(why))] };
   }
 }

@@ -20,6 +20,7 @@ export interface BoardInput {
   readonly file: string;
   readonly basedOn: readonly string[];
   readonly overrides: readonly string[];
+  readonly lineage: NonNullable<Board['lineage']>;
 }
 
 function found<T>(map: ReadonlyMap<string, T>, id: string): T {
@@ -41,8 +42,10 @@ export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Librar
     basedOn: input.basedOn,
     file: input.file,
     overrides: input.overrides,
+    lineage: input.lineage,
     stackUp: stackUpOf(doc.stack_up, libraries, figure, where),
     columns: columnsOf(doc.array),
+    ...(doc.array.retune === undefined ? {} : { retune: doc.array.retune }),
     pitch: si(doc.array.pitch, 'length'),
     feed: feedOf(doc.feed, doc.array.columns, figure),
     referenceImpedance: doc.reference_impedance === 'line' ? 'line' : si(doc.reference_impedance, 'resistance'),

@@ -1,6 +1,6 @@
 export { type Disk, filesUnder, realDisk } from './disk.js';
 export { hashOfSet, sha256 } from './hash.js';
-export { type Files, type Output, openOutput } from './output.js';
+export { type Files, type Output, openOutput, type Publication } from './output.js';
 export { OutputError, onDisk } from './output-error.js';
 export { packFilesUnder } from './pack-files.js';
 export { type RevisionSummary, sortSummaries } from './revision.js';

@@ -1,19 +1,25 @@
 import { dirname, join } from 'node:path';
+import { visible } from '../quantity/index.js';
 import type { Disk } from './disk.js';
 import { takeLock } from './lock.js';
 import { OutputError, onDisk } from './output-error.js';
 import { isFolderName, isPlainPath } from './paths.js';
+import { isReleased, type ReadRevision, releasedChanges } from './released.js';
 import { type RevisionSummary, readSummary, revisionFile, sortSummaries, summaryText } from './revision.js';
 import { attempt, recoverFrom, swapAll, unfinished } from './swap.js';
 
 /** Path, with forward slashes → content. */
 export type Files = ReadonlyMap<string, Uint8Array | string>;
 
+/** Whether a revision was written, or lies there as it was released. */
+export type Publication = 'written' | 'left as released';
+
 /** Where a build puts its result; held by one build at a time. */
 export interface Output {
   /**
    * Puts a revision in place of its predecessor and brings the index up to date: all of it or, on any failure,
-   * nothing. Other revisions are left as they are.
+   * nothing. Other revisions are left as they are. A revision that was released stays as it is: where nothing of it
+   * would change only the index is brought up to date, and where something would, an OutputError names it.
    *
    * @param files        path in the revision's folder → content
    * @param renderIndex  makes the files at the top, the index page among them, from the summaries of all revisions
@@ -23,7 +29,9 @@ export interface Output {
     summary: RevisionSummary,
     files: Files,
     renderIndex: (summaries: readonly RevisionSummary[]) => Files,
-  ): void;
+  ): Publication;
+  /** A file of a revision that lies there; undefined where there is none. */
+  readFile(packId: string, revision: string, path: string): Uint8Array | undefined;
   /** Lets the next build in. */
   close(): void;
 }
@@ -74,20 +82,28 @@ function outputIn(out: string, disk: Disk, unlock: () => void): Output {
       if (disk.exists(packFolder) && !disk.isFolder(packFolder)) {
         throw new OutputError(`${packFolder} is not a folder; remove it, or give the pack another id`);
       }
-      onDisk(`cannot write ${join(packFolder, revision)}; the last good output is unchanged`, () => {
+      return onDisk(`cannot write ${join(packFolder, revision)}; the last good output is unchanged`, () => {
+        const kept = keepsReleased(summary, files, (path) => fileIn(disk, join(packFolder, revision), path));
         const others = summariesIn(disk, out).filter((s) => s.packId !== packId || s.revision !== revision);
         const index = renderIndex(sortSummaries([...others, summary]));
         const target = join(packFolder, revision);
         const tops = [...index.keys()].filter((name) => !holds(disk, join(out, name), index.get(name) ?? ''));
         try {
-          writeFolder(disk, target + unfinished, new Map([...files, [revisionFile, summaryText(summary)]]));
+          if (!kept) writeFolder(disk, target + unfinished, new Map([...files, [revisionFile, summaryText(summary)]]));
           for (const name of tops) disk.write(join(out, name) + unfinished, index.get(name) ?? '');
-          swapAll(disk, [target, ...tops.map((name) => join(out, name))]);
+          swapAll(disk, [...(kept ? [] : [target]), ...tops.map((name) => join(out, name))]);
         } catch (error) {
           attempt(() => recoverAll(disk, out));
           throw error;
         }
+        return kept ? 'left as released' : 'written';
       });
+    },
+    readFile(packId, revision, path) {
+      if (!isFolderName(packId) || !isFolderName(revision)) return undefined;
+      return onDisk(`cannot read ${join(out, packId, revision)}`, () =>
+        fileIn(disk, join(out, packId, revision), path),
+      );
     },
     close() {
       onDisk(`cannot tidy up ${out}`, () => {
@@ -100,6 +116,24 @@ function outputIn(out: string, disk: Disk, unlock: () => void): Output {
       });
     },
   };
+}
+
+/** True where a released revision is to be left as it is. */
+function keepsReleased({ packId, revision, ...rest }: RevisionSummary, files: Files, read: ReadRevision): boolean {
+  if (!isReleased(read)) return false;
+  const changes = releasedChanges(read, { packId, revision, ...rest }, files);
+  if (changes.length === 0) return true;
+  throw new OutputError(
+    [
+      `${packId} revision ${revision} is released and would change: raise the revision. Nothing was written.`,
+      ...changes.map((line) => `  ${visible(line)}`),
+    ].join('\n'),
+  );
+}
+
+function fileIn(disk: Disk, folder: string, path: string): Uint8Array | undefined {
+  const file = join(folder, path);
+  return isPlainPath(path) && disk.exists(file) && !disk.isFolder(file) ? disk.read(file) : undefined;
 }
 
 function holds(disk: Disk, file: string, content: Uint8Array | string): boolean {

@@ -8,7 +8,7 @@ export function isPlainPath(path: string): boolean {
   return path.split('/').every((part) => part !== '' && part !== '.' && part !== '..');
 }
 
-/** True for a name that can be a folder of the output: a pack's id, a revision. */
+/** True for a name that can be a folder of the output: a pack's id, that of a copy (`id--audience`), a revision. */
 export function isFolderName(name: string): boolean {
-  return /^[A-Za-z0-9]+(?:[-_.][A-Za-z0-9]+)*$/.test(name);
+  return /^[A-Za-z0-9]+(?:(?:--|[-_.])[A-Za-z0-9]+)*$/.test(name);
 }

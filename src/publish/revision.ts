@@ -9,6 +9,7 @@ export const revisionSummary = z.object({
   revision: z.string(),
   date: z.string(),
   status: z.string(),
+  marking: z.string().optional(),
   /** Hash over the pack's input files. */
   packHash: z.string(),
   programVersion: z.string(),

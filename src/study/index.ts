@@ -1,15 +1,19 @@
 export { assembleStudy, planBoard, ROUGHNESS_MODELS } from './plan.js';
 export type * from './results.js';
+export { RETUNE_LIMITS, retuneBoard } from './retune.js';
+export { runSweep } from './sweep.js';
 export { type RunTask, runTask, type TaskResult } from './task.js';
-export { nominalValues, type Tolerance, tolerances } from './values.js';
+export { movables, nominalValues, type Tolerance, tolerances } from './values.js';
 
 import type { Analysis, Board } from '../manifest/model.js';
 import { assembleStudy, planBoard } from './plan.js';
 import type { BoardStudy } from './results.js';
+import { retuneBoard } from './retune.js';
 import { runTask } from './task.js';
 
-/** A whole study in this thread. */
-export function studyBoard(board: Board, analysis: Analysis): BoardStudy {
+/** A whole study in this thread; a board that asks for it is retuned first. */
+export function studyBoard(asWritten: Board, analysis: Analysis): BoardStudy {
+  const board = retuneBoard(asWritten, analysis);
   return assembleStudy(
     board,
     analysis,

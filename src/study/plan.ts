@@ -4,9 +4,9 @@
  */
 import { createHash } from 'node:crypto';
 import type { Analysis, Board, QuantityName, RoughnessModelName } from '../manifest/model.js';
-import { slabGuidesOneWave } from '../physics/column/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import { faceStates, lineLossCurves, lossFactorCurves, losslessClosure } from './curves.js';
+import { obstacle } from './obstacle.js';
 import type { BoardStudy, Sweep } from './results.js';
 import type { RunTask, TaskResult } from './task.js';
 import { tolerances } from './values.js';
@@ -27,18 +27,7 @@ const COMPUTED: readonly QuantityName[] = [
   'line_loss',
 ];
 
-/** Why nothing can be computed for this board, or undefined. */
-function obstacle(board: Board): string | undefined {
-  const { cover, laminate } = board.stackUp;
-  if (cover)
-    return `the board has a cover layer (${cover.material}); the line and column models have none, and 25 µm of solder mask raises effective permittivity by about 8 %`;
-  const permittivity = laminate.material.permittivity.value + laminate.material.permittivity.plus;
-  const height = laminate.thickness.value + laminate.thickness.plus;
-  if (!slabGuidesOneWave(board.band.high * 1.02, permittivity * 1.02, height))
-    return 'at the upper band edge the laminate guides a second surface wave, which the column model does not carry';
-  return undefined;
-}
-
+/** @param board  as it is to be studied: retuned, where its manifest asks for that (`retuneBoard`) */
 export function planBoard(board: Board, analysis: Analysis): RunTask[] {
   if (obstacle(board) !== undefined) return [];
   const sweeps: RunTask[] = [

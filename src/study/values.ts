@@ -150,7 +150,29 @@ export function nominalValues(board: Board): BoardValues {
   return places(board).reduce((values, place) => place.set(values, place.figure.value), empty);
 }
 
-/** One declared spread: the same figure of a library moves everywhere it is used. */
+/** One figure of a board that can be moved alone: the same figure of a library moves everywhere it is used. */
+export interface Movable {
+  readonly label: string;
+  readonly figure: Figure;
+  readonly dimension: Dimension | 'number';
+  /** The nominal values with this figure at another value. */
+  readonly move: (value: number) => BoardValues;
+}
+
+export function movables(board: Board): Movable[] {
+  const nominal = nominalValues(board);
+  const byPath = new Map<string, Place[]>();
+  for (const place of places(board)) {
+    byPath.set(place.figure.path, [...(byPath.get(place.figure.path) ?? []), place]);
+  }
+  return [...byPath.values()].map((group) => {
+    const { figure, label, dimension } = group[0];
+    const move = (value: number): BoardValues => group.reduce((values, place) => place.set(values, value), nominal);
+    return { label, figure, dimension, move };
+  });
+}
+
+/** One declared spread. */
 export interface Tolerance {
   readonly id: string;
   readonly label: string;
@@ -161,17 +183,9 @@ export interface Tolerance {
 }
 
 export function tolerances(board: Board): Tolerance[] {
-  const nominal = nominalValues(board);
-  const byPath = new Map<string, Place[]>();
-  for (const place of places(board)) {
-    const { figure } = place;
-    if (figure.minus === 0 && figure.plus === 0) continue;
-    byPath.set(figure.path, [...(byPath.get(figure.path) ?? []), place]);
-  }
   const taken = new Map<string, number>();
-  return [...byPath.values()].map((group) => {
-    const { figure, label, dimension } = group[0];
-    const move = (value: number): BoardValues => group.reduce((values, place) => place.set(values, value), nominal);
+  const moving = movables(board).filter(({ figure }) => figure.minus !== 0 || figure.plus !== 0);
+  return moving.map(({ label, figure, dimension, move }) => {
     const slug = label.replace(/[^a-z0-9]+/gi, '-').toLowerCase();
     const count = (taken.get(slug) ?? 0) + 1;
     taken.set(slug, count);

@@ -40,6 +40,9 @@ function stopwatch(): Progress & { readonly stages: Stage[] } {
   };
 }
 
+/** Revisions built so far, which later ones are compared with. */
+const published = new Map<string, Files>();
+
 async function measure(manifests: string, packPath: string) {
   const progress = stopwatch();
   let made: Files = new Map();
@@ -48,8 +51,14 @@ async function measure(manifests: string, packPath: string) {
     {
       files: packFilesUnder(manifests),
       openOutput: () => ({
-        publishRevision(_summary, files) {
+        publishRevision({ packId, revision }, files) {
           made = files;
+          published.set(`${packId}/${revision}`, files);
+          return 'written';
+        },
+        readFile(packId, revision, path) {
+          const content = published.get(`${packId}/${revision}`)?.get(path);
+          return content === undefined ? undefined : Buffer.from(content);
         },
         close() {},
       }),

@@ -13,7 +13,11 @@ interface Published {
 }
 
 /** Effects that keep everything in memory. */
-function effectsFor(files: Record<string, string>, changed: Partial<BuildEffects> = {}) {
+function effectsFor(
+  files: Record<string, string>,
+  changed: Partial<BuildEffects> = {},
+  earlier: Record<string, Uint8Array> = {},
+) {
   const published: Published[] = [];
   const log: string[] = [];
   const effects: BuildEffects = {
@@ -27,7 +31,9 @@ function effectsFor(files: Record<string, string>, changed: Partial<BuildEffects
             ([path, content]) => [path, Buffer.from(content).toString('latin1')] as const,
           );
           published.push({ files: new Map(texts), top: renderTop([summary]) });
+          return 'written';
         },
+        readFile: (packId, revision, path) => earlier[`${packId}/${revision}/${path}`],
         close: () => void log.push('close'),
       };
     },
@@ -97,7 +103,7 @@ describe('a build without a disk', () => {
     const differing = [...plain.published[0].files].filter(
       ([path, text]) => dated.published[0].files.get(path) !== text,
     );
-    expect(differing.map(([path]) => path)).toEqual(['pdf/qs-1.pdf', 'pdf/qs-2.pdf']);
+    expect(differing.map(([path]) => path)).toEqual(['pdf/pack.pdf', 'pdf/qs-1.pdf', 'pdf/qs-2.pdf']);
     expect(plain.published[0].files.get('pdf/qs-1.pdf')).toContain('D:20261102000000Z');
     expect(dated.published[0].files.get('pdf/qs-1.pdf')).toContain('D:20300506000000Z');
   });

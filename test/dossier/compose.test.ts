@@ -6,12 +6,15 @@ import { allBlocks, blocksOf, inlinesOf, inputOf, pageOf, studies, textOf } from
 const document = composePack(inputOf(studies()));
 
 describe('pages of a pack', () => {
-  it('are the overview, a dossier per board, a page per requirement, evidence and definitions', () => {
+  it('are the overview, a dossier per board, a page per pair, a page per requirement, evidence and definitions', () => {
     expect(document.pages.map((page) => page.id)).toEqual([
       'overview',
       'board/qb-1',
       'board/qb-2',
       'board/qb-3',
+      'compare/qb-1--qb-2',
+      'compare/qb-1--qb-3',
+      'compare/qb-2--qb-3',
       ...requirements.map((r) => `requirement/${r.id}`),
       'evidence',
       'definitions',

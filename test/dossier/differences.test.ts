@@ -69,6 +69,19 @@ describe('differences between boards', () => {
     expect(differencesBetween([full, { ...full, id: 'other', title: 'Other' }])).toEqual([]);
   });
 
+  it('show a declared property, of the board or of one of its materials', () => {
+    const declared = [{ id: 'lead-time', value: 9, unit: 'weeks' }];
+    const other = { ...full, declared };
+    const [found] = differencesBetween([full, other]);
+    expect(found?.label).toBe('Declared properties');
+    expect(found?.values[1]).toContain('lead-time 9 weeks');
+    const { laminate } = full.stackUp;
+    const material = { ...laminate.material, declared: [] };
+    expect(
+      differencesBetween([full, { ...full, stackUp: { ...full.stackUp, laminate: { ...laminate, material } } }]),
+    ).toHaveLength(1);
+  });
+
   const paths = leaves(full);
   it('has something to walk', () => {
     expect(paths.length).toBeGreaterThan(80);

@@ -82,7 +82,22 @@ let made: readonly BoardStudy[] | undefined;
 export function studies(): readonly BoardStudy[] {
   made ??= [
     studyOf(board('qb-1')),
-    studyOf(board('qb-2', { rq: 1.6e-6, permittivity: 3.3, basedOn: ['qb-1'], overrides: ['stack_up.laminate'] })),
+    studyOf(
+      board('qb-2', {
+        rq: 1.6e-6,
+        permittivity: 3.3,
+        basedOn: ['qb-1'],
+        overrides: ['stack_up.laminate'],
+        lineage: [
+          {
+            board: 'qb-2',
+            file: 'boards/qb-2.yaml',
+            overrides: [{ path: 'stack_up.laminate.material', text: 'nf-33' }],
+          },
+          { board: 'qb-1', file: 'boards/qb-1.yaml', overrides: [] },
+        ],
+      }),
+    ),
     notEvaluated(studyOf(board('qb-3'))),
   ];
   return made;

@@ -152,6 +152,12 @@ const array = z
       .max(MOST_COLUMNS)
       .describe('Offset of each column along its own direction, for staggered columns. All 0 when left out.')
       .optional(),
+    retune: z
+      .enum(['length'])
+      .describe(
+        'length: patch and link lengths are scaled by one factor, found and printed by the program, so that the match is best at the band centre. For comparing laminates before the layout is redone.',
+      )
+      .optional(),
   })
   .describe('Series-fed columns of patches; a column runs along +x and is fed at the small-x end.');
 

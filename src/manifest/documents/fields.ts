@@ -62,6 +62,9 @@ export const text = (description: string) =>
     allowed: 'text without control characters, at most 2000 characters',
   });
 
+/** Text of a form of its own, with the words that say what is allowed. */
+export const words = <S extends z.ZodType>(schema: S, allowed: string): S => leaf(schema, { kind: 'words', allowed });
+
 /** Name that becomes part of file names and addresses. */
 export const id = (description: string) =>
   leaf(

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { date, id, quantity, range, reference, revision, text } from './fields.js';
+import { date, exactlyOne, id, quantity, range, reference, revision, text, words } from './fields.js';
 
 const library = (what: string) =>
   z
@@ -7,6 +7,19 @@ const library = (what: string) =>
     .min(1)
     .max(50)
     .describe(`Files of ${what}.`);
+
+const hideable = () =>
+  words(
+    z
+      .string()
+      .regex(
+        /^(?:cost|authors|descriptions|sources|review|declared|(?:boards|requirements|declared)\/[a-z0-9]+(?:-[a-z0-9]+)*)$/u,
+      )
+      .describe(
+        'cost, authors, descriptions (of boards), sources (of requirements), review, declared (properties and the requirements on them), declared/<id>, boards/<id> or requirements/<id>.',
+      ),
+    'one of cost, authors, descriptions, sources, review, declared, declared/<id>, boards/<id>, requirements/<id>',
+  );
 
 /** Boards judged together against one requirement set. */
 export const packDocument = z
@@ -20,7 +33,45 @@ export const packDocument = z
     authors: z.array(text('A name.')).min(1).max(20).describe('Who wrote it.'),
     owner: text('Legal owner of the document.'),
     notice: text('Printed on every page, for instance that the data are invented.').optional(),
+    marking: text('Who may see it, printed on every page. Left out: "internal: not for suppliers".').optional(),
+    review: reference('The review of the pack: decision, open points, concessions, approvals.').optional(),
+    procurement: reference('What is asked of suppliers: one sheet a recipient.').optional(),
+    previous: z
+      .strictObject({
+        revision: revision('Previous revision, found in the output folder of this pack.').optional(),
+        data: reference('Data of the previous revision: its data/pack.json, kept under the root.').optional(),
+      })
+      .meta({
+        description:
+          'The revision that this one follows; the pages begin with what changed since. Exactly one of revision and data.',
+        ...exactlyOne('revision', 'data'),
+      })
+      .optional(),
     boards: z.array(reference('A board file.')).min(1).max(40).describe('Board files, in the order of the comparison.'),
+    variants: z
+      .array(reference('A table of variants.'))
+      .min(1)
+      .max(10)
+      .describe(
+        'CSV tables of candidates, one row a board: columns id, title, based_on, then paths of plain values in a board file; an empty cell inherits, ~ drops the inherited key, a list is parted by semicolons.',
+      )
+      .optional(),
+    audiences: z
+      .array(
+        z
+          .strictObject({
+            id: id('Name of the audience, as given to --audience.'),
+            marking: text(
+              'Who may see the copy, printed on every page of it; that of the pack when left out.',
+            ).optional(),
+            hide: z.array(hideable()).min(1).max(200).describe('What its copy leaves out.'),
+          })
+          .describe('One audience.'),
+      )
+      .min(1)
+      .max(20)
+      .describe('Readers who get a copy of the pack with entries left out, built with --audience.')
+      .optional(),
     requirements: reference('The requirement set that all boards are judged against.'),
     libraries: z
       .strictObject({

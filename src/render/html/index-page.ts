@@ -8,6 +8,8 @@ export interface IndexEntry {
   readonly revision: string;
   readonly date: string;
   readonly status: string;
+  readonly documentNumber?: string;
+  readonly marking?: string;
   /** Relative to the folder of the index. */
   readonly href: string;
   readonly summary: string;
@@ -16,18 +18,20 @@ export interface IndexEntry {
 /** The page that lists packs and their revisions, in the order given; `styleSheet()` lies beside it as `style.css`. */
 export function renderIndex(packs: readonly IndexEntry[]): string {
   const groups = new Map<string, IndexEntry[]>();
-  for (const entry of printable(packs)) {
+  const entries = printable(packs);
+  for (const entry of entries) {
     const group = groups.get(entry.packId) ?? [];
-    group.push({ ...entry, href: checkRelativeHref(entry.href) });
+    group.push({ documentNumber: '', ...entry, href: checkRelativeHref(entry.href) });
     groups.set(entry.packId, group);
   }
   return fillTemplate('index', {
     style: 'style.css',
-    packs: [...groups.values()].map((entries, index) => ({
+    packs: [...groups.values()].map((group, index) => ({
       id: `pack-${index + 1}`,
-      title: entries[0].title,
-      entries,
+      title: group[0].title,
+      entries: group,
     })),
+    markings: [...new Set(entries.flatMap((entry) => entry.marking ?? []))],
     empty: groups.size === 0,
   });
 }

@@ -1,14 +1,17 @@
 import { printable } from '../../chart/svg.js';
 import type { DocumentPage, PackDocument, PageKind, TitleBlock } from '../../dossier/document.js';
-import { checkElementId, pagePath, relativeLink } from './paths.js';
+import { checkElementId, checkRelativeHref, pagePath, relativeLink } from './paths.js';
 import { styleSheet } from './style.js';
 import { fillTemplate } from './templates.js';
 import { blockView, type LinkTo } from './view.js';
 
 const kindNames: Readonly<Record<PageKind, string>> = {
   overview: 'Overview of the pack',
+  pack: 'The whole pack',
   dossier: 'Dossier of one board',
+  compare: 'Two boards side by side',
   requirement: 'One requirement across all boards',
+  offers: 'Suppliers: allowances and offers',
   evidence: 'Evidence: methods and checks',
   definitions: 'Definitions',
 };
@@ -34,7 +37,7 @@ export async function renderPack(document: PackDocument): Promise<Map<string, st
   const anchors = new Map(pages.map(({ page, path, ids }) => [page.id, { path, ids: new Set(ids) }]));
 
   for (const { page, path, ids } of pages) {
-    const linkTo: LinkTo = (id, anchor) => {
+    const toPage: LinkTo['page'] = (id, anchor) => {
       const target = anchors.get(id);
       if (target === undefined || (anchor !== undefined && !target.ids.has(anchor))) {
         throw new Error(`${page.id}: link to ${id}${anchor === undefined ? '' : `#${anchor}`} leads nowhere`);
@@ -42,6 +45,7 @@ export async function renderPack(document: PackDocument): Promise<Map<string, st
       if (id === page.id && anchor !== undefined) return `#${anchor}`;
       return relativeLink(path, target.path) + (anchor === undefined ? '' : `#${anchor}`);
     };
+    const linkTo: LinkTo = { page: toPage, file: (target) => relativeLink(path, checkRelativeHref(target)) };
     files.set(path, fillTemplate('page', await pageView(pack, page, path, ids, linkTo)));
   }
   files.set('style.css', styleSheet());
@@ -96,6 +100,7 @@ async function pageView(
     kindName: kindNames[page.kind],
     style: relativeLink(path, 'style.css'),
     home: relativeLink(path, pagePath('overview')),
+    marking: page.marking ?? '',
     notices: page.notices,
     // The first notice says what the data are: it stands at the head; all of them stand at the foot.
     headNotices: page.notices.slice(0, 1),
@@ -120,7 +125,7 @@ function navigationView(pack: PackDocument, current: DocumentPage, path: string)
     requirements,
     hasRequirements: requirements.length > 0,
     inRequirements: current.kind === 'requirement',
-    last: links(['evidence', 'definitions']),
+    last: links(['offers', 'evidence', 'definitions']),
   };
 }
 

@@ -9,7 +9,7 @@ export function readTemplate(name: string): string {
   return readFileSync(new URL(name, folder), 'utf8').replace(/\r\n/g, '\n').replace(/\n$/, '');
 }
 
-export type TemplateName = 'page' | 'index';
+export type TemplateName = 'page' | 'index' | 'supplier';
 
 let compiled: Readonly<Record<TemplateName, Handlebars.TemplateDelegate>> | undefined;
 
@@ -30,5 +30,6 @@ function load(): Readonly<Record<TemplateName, Handlebars.TemplateDelegate>> {
   return {
     page: environment.compile(readTemplate('page.hbs'), options),
     index: environment.compile(readTemplate('index.hbs'), options),
+    supplier: environment.compile(readTemplate('supplier.hbs'), options),
   };
 }

@@ -21,8 +21,11 @@ export interface StatusView {
   readonly box: number;
 }
 
-/** Resolves a link of the document, or throws where it leads nowhere. */
-export type LinkTo = (page: string, anchor: string | undefined) => string;
+/** Resolves links of the document, or throws where one leads nowhere. */
+export interface LinkTo {
+  readonly page: (page: string, anchor: string | undefined) => string;
+  readonly file: (path: string) => string;
+}
 
 /** Gives an element of the page its id. */
 export type TakeId = (id: string) => string;
@@ -50,7 +53,8 @@ export function inlineView(part: Inline, linkTo: LinkTo): InlineView {
   if ('strong' in part) return view('inline-strong', part.strong);
   if ('code' in part) return view('inline-code', part.code);
   if ('status' in part) return view('inline-status', '', { status: statusView(part.status) });
-  return view('inline-link', part.text, { href: linkTo(part.page, part.anchor) });
+  if ('file' in part) return view('inline-link', part.text, { href: linkTo.file(part.file) });
+  return view('inline-link', part.text, { href: linkTo.page(part.page, part.anchor) });
 }
 
 export const inlineViews = (content: readonly Inline[], linkTo: LinkTo) =>

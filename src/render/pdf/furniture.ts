@@ -10,8 +10,10 @@ const marking =
   'Calculated design evidence. Not a declaration of conformity, radio approval or RF-exposure assessment.';
 const mostNoticeLines = 4;
 const footBottom = page.height - 26;
+/** The running head stands lower where a marking stands over it. */
+const headShift = 4.5;
 
-/** Running heads and feet of all pages: document number, title, revision, status, notices, marking, page x of y. */
+/** Running heads and feet of all pages: document number, title, revision, status, who may see it, notices, cautions, page x of y. */
 export interface Furniture {
   /** Foot of the body. */
   readonly bodyBottom: number;
@@ -37,9 +39,15 @@ export function furniture(press: Press, document: DocumentPage, packTitle: strin
     half,
   );
   const headRight = oneLine(
-    textRuns(`${packTitle} · revision ${block.revision} · ${block.documentStatus}`, muted),
+    textRuns(
+      `${document.title === packTitle ? '' : `${packTitle} · `}revision ${block.revision} · ${block.documentStatus}`,
+      muted,
+    ),
     half,
   );
+  const { marking: audience } = document;
+  const above = audience === undefined ? undefined : oneLine([{ ...plain, face: 'bold', text: audience }], bodyWidth);
+  const headTop = page.headerTop + (above === undefined ? 0 : headShift);
   const mark = oneLine([{ ...plain, face: 'bold', text: marking }], bodyWidth - 70);
   const rule = (y: number) => {
     press.doc.moveTo(page.left, y).lineTo(page.right, y).lineWidth(0.5).undash().stroke(colours.rule);
@@ -49,9 +57,10 @@ export function furniture(press: Press, document: DocumentPage, packTitle: strin
     bodyBottom: footTop - 10,
     paint: (pageNumber, pageCount) => {
       press.artifact('Pagination', () => {
-        paintBareLine(press, headLeft, set, page.left, page.headerTop);
-        paintBareLine(press, headRight, set, page.right - headRight.width, page.headerTop);
-        rule(page.headerTop + set.leading + 3);
+        if (above) paintBareLine(press, above, set, page.left, headTop - set.leading);
+        paintBareLine(press, headLeft, set, page.left, headTop);
+        paintBareLine(press, headRight, set, page.right - headRight.width, headTop);
+        rule(headTop + set.leading + 3);
       });
       press.artifact('Pagination', () => {
         rule(footTop);

@@ -147,7 +147,7 @@ function boxesOf(
 }
 
 /** Heading of a chapter, with its place and its entry in the outline. */
-function headingBoxes({ press, parent }: BlockContext, chapter: Chapter, placed: () => void): Box[] {
+export function headingBoxes({ press, parent }: BlockContext, chapter: Chapter, placed: () => void): Box[] {
   const element = press.element('H2', parent);
   const set = type.chapter;
   const lines = new LineSetter(press, set.size).lines(textRuns(chapter.title, bold), bodyWidth);
@@ -166,7 +166,8 @@ function headingBoxes({ press, parent }: BlockContext, chapter: Chapter, placed:
   }));
 }
 
-function collect(doc: PDFKit.PDFDocument): Promise<Uint8Array> {
+/** The bytes of a document once it is ended. */
+export function collect(doc: PDFKit.PDFDocument): Promise<Uint8Array> {
   const chunks: Buffer[] = [];
   return new Promise((resolve, reject) => {
     doc.on('data', (chunk: Buffer) => chunks.push(chunk));

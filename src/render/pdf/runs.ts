@@ -61,6 +61,8 @@ export function inlineRuns(content: readonly Inline[], style: RunStyle, links: L
     if ('status' in item) {
       return { face: 'bold', colour: colours.status[item.status], text: item.status, shape: item.status };
     }
+    // A file beside this one: its path is all that paper can say.
+    if ('file' in item) return { ...style, text: running ? `${item.text} (${item.file})` : item.text };
     return linkRun(item, style, links, running);
   });
 }

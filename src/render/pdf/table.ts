@@ -37,11 +37,17 @@ interface Column {
 interface CellText {
   readonly runs: readonly Run[];
   readonly numeric: boolean;
+  readonly signature?: boolean;
 }
 interface SetCell {
   readonly lines: readonly Line[];
   readonly numeric: boolean;
+  readonly signature?: boolean;
 }
+/** Height of a cell to sign in, in lines of text. */
+const signatureLines = 3;
+/** Least width of a column to write or sign in by hand, times the hint of its width; points. */
+const signatureWidth = 56;
 
 /**
  * A table with its caption. The head stands again on every page; a row is never cut, unless it is taller than a page:
@@ -58,18 +64,25 @@ export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight:
   const cellOf = (cell: Cell | undefined, i: number): CellText => ({
     runs: inlineRuns(cell?.content ?? [], plain, context),
     numeric: cell?.numeric ?? numericColumn(i),
+    signature: cell?.signature,
   });
   const empty: Cell[] = [{ content: ['none'] }];
   const rows = (table.rows.length === 0 ? [empty] : table.rows).map((row) =>
     Array.from({ length: count }, (_, i) => cellOf(row[i], i)),
   );
 
+  const signed = rows.some((row) => row.some((cell) => cell.signature));
   const { columns, set } = layColumns(press, table, heads, rows);
   const element = press.element('Table', context.parent);
   const caption = captionBoxes(context, table, element);
   const setter = new LineSetter(press, set.size);
   const setRow = (cells: readonly CellText[]): SetCell[] =>
-    cells.map((cell, i) => ({ lines: setter.lines(cell.runs, columns[i].width - 2 * padX), numeric: cell.numeric }));
+    cells.map(({ runs, numeric, signature }, i) => {
+      const lines = setter.lines(runs, columns[i].width - 2 * padX);
+      const room = signature ? Math.max(0, signatureLines - lines.length) : 0;
+      const empty: Line = { pieces: [], width: 0 };
+      return { lines: [...lines, ...Array.from({ length: room }, () => empty)], numeric, signature };
+    });
 
   const painter = new RowPainter(press, columns, set);
   const head = setRow(heads);
@@ -90,9 +103,11 @@ export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight:
   return [
     ...caption,
     ...headBoxes.map((box) => ({ ...box, keep: true })),
-    // The last row is not left alone on a page.
+    // The last row is not left alone on a page, and those who sign are seen together where a page can hold them.
     ...bodyRows.flatMap((boxes, i) =>
-      i === bodyRows.length - 2 ? [...boxes.slice(0, -1), { ...boxes[boxes.length - 1], keep: true }] : boxes,
+      i === bodyRows.length - 2 || (signed && i < bodyRows.length - 2)
+        ? [...boxes.slice(0, -1), { ...boxes[boxes.length - 1], keep: true }]
+        : boxes,
     ),
   ];
 }
@@ -129,6 +144,11 @@ function layColumns(
       words = Math.max(words, unbroken ? whole : word);
       pieces = Math.max(pieces, unbroken ? whole : piece);
       wholes.push(whole);
+    }
+    if (rows.some((row) => row[i].signature)) {
+      words = Math.max(words, (signatureWidth * (table.columns[i]?.width ?? 1)) / type.table.size);
+      pieces = words;
+      wholes.push(words);
     }
     return { words, pieces, wholes };
   });
@@ -174,6 +194,20 @@ class RowPainter {
     doc.moveTo(page.left, top).lineTo(page.right, top).lineWidth(width).undash().stroke(colour);
   }
 
+  private signingLines(cells: readonly SetCell[], y: number): void {
+    const { doc } = this.press;
+    for (const [i, cell] of cells.entries()) {
+      if (!cell.signature) continue;
+      const { x, width } = this.columns[i];
+      doc
+        .moveTo(x + padX, y)
+        .lineTo(x + width - padX, y)
+        .lineWidth(0.5)
+        .undash()
+        .stroke(colours.muted);
+    }
+  }
+
   private headGround(top: number, height: number): void {
     this.press.doc.rect(page.left, top, bodyWidth, height).fill(colours.wash);
     this.rule(top + height, colours.muted, 0.5);
@@ -216,6 +250,7 @@ class RowPainter {
           press.artifact('Layout', () => {
             if (kind(0)[1] === 'Column') this.press.doc.rect(page.left, top, bodyWidth, height).fill(colours.wash);
             if (end === lines) this.rule(top + height, kind(0)[1] === 'Column' ? colours.muted : colours.rule, 0.5);
+            if (end === lines) this.signingLines(cells, top + height - below - 2);
           });
           for (const [i, cell] of cells.entries()) {
             for (const [n, line] of cell.lines.slice(start, end).entries()) {

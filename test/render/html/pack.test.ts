@@ -54,6 +54,32 @@ describe('pages of a pack', () => {
     for (const [path, html] of pages()) await expectValid(html, path);
   });
 
+  it('carry the marking at head and foot, escaped', async () => {
+    const marked = packDocument.pages.map((page) => ({ ...page, marking: 'internal: A & B' }));
+    for (const [path, html] of await renderPack({ ...packDocument, pages: marked })) {
+      if (path.endsWith('.html')) expect(html.match(/internal: A &amp; B/g), path).toHaveLength(2);
+    }
+    for (const [, html] of pages()) expect(html).not.toContain('class="marking"');
+  });
+
+  it('link to files of the revision by their relative path, and to nothing above it', async () => {
+    const withLink = (file: string) => ({
+      ...packDocument,
+      pages: packDocument.pages.map((page) => ({
+        ...page,
+        chapters: [
+          ...page.chapters,
+          { id: 'added', title: 'Added', blocks: [{ kind: 'prose' as const, content: [{ text: 'PDF', file }] }] },
+        ],
+      })),
+    });
+    const made = await renderPack(withLink('pdf/pack.pdf'));
+    expect(made.get('index.html')).toContain('<a href="pdf/pack.pdf">PDF</a>');
+    expect(made.get('board/qb-1.html')).toContain('<a href="../pdf/pack.pdf">PDF</a>');
+    for (const file of ['../secret.pdf', '/etc/passwd', 'javascript:alert(1)', 'pdf//x.pdf'])
+      await expect(renderPack(withLink(file))).rejects.toThrow(/not a safe link/);
+  });
+
   it('are the same bytes twice', async () => {
     expect([...(await renderPack(packDocument))]).toEqual([...files]);
   });
@@ -197,11 +223,13 @@ describe('index of packs', () => {
     const html = renderIndex([
       entry,
       { ...entry, revision: 'A', href: 'quillback-srr/A/index.html' },
-      { ...entry, packId: 'other', title: 'Other' },
+      { ...entry, packId: 'other', title: 'Other', documentNumber: 'O-1', marking: 'internal: not for suppliers' },
     ]);
     await expectValid(html, 'index');
     expect(html.match(/<h2 /g)).toHaveLength(2);
     expect(html).toContain('<a href="quillback-srr/A/index.html">Revision A</a>');
+    expect(html).toContain('2026-11-16, released for review, O-1');
+    expect(html.match(/internal: not for suppliers/g)).toHaveLength(1);
     await expectValid(renderIndex([]), 'empty index');
   });
 

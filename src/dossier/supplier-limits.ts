@@ -1,0 +1,100 @@
+import { decimalsFor, formatNumber, fromBase, unitNamed } from '../quantity/index.js';
+import type { HeldSide, SideAllowance } from '../verdict/index.js';
+import type { SheetItem } from './supplier-allowed-fields.js';
+import { statedNumber } from './values.js';
+
+type Measured = Pick<SheetItem, 'dimension' | 'unit'>;
+
+/** In the unit of the item, free of the last bits of conversion. */
+export function inUnit({ dimension, unit }: Measured, value: number): number {
+  const plain = dimension === 'number' || unit === undefined ? value : fromBase(value, unitNamed(dimension, unit)!);
+  return Number(plain.toPrecision(9));
+}
+
+export function unitText({ dimension, unit }: Measured): string {
+  return dimension === 'number' || unit === undefined ? '–' : unitNamed(dimension, unit)!.symbol;
+}
+
+/** Most significant digits that a stated number is printed with: nobody writes more, only conversions (Rq from Ra) have them. */
+const MOST_DIGITS = 6;
+
+/** A manifest's number as it was written. */
+const stated = (value: number): string => statedNumber(value, decimalsFor(value, MOST_DIGITS));
+
+const decimalsOf = (text: string): number => (text.split('.')[1] ?? '').length;
+
+/** The nominal value with as many decimals as its limits. */
+export function nominalIn(item: SheetItem): string {
+  const value = inUnit(item, item.nominal);
+  const sides = item.upperOnly ? (['upper'] as const) : (['lower', 'upper'] as const);
+  const decimals = [stated(value), ...sides.map((side) => rawLimit(item, side))].map(decimalsOf);
+  return formatNumber(value, Math.max(...decimals));
+}
+
+/** Digits that tell a calculated limit from nominal to about two percent of its distance, rounded towards nominal. */
+export function towardsNominal(item: Measured & { readonly nominal: number }, value: number): string {
+  const [at, nominal] = [inUnit(item, value), inUnit(item, item.nominal)];
+  const decimals = at === nominal ? 0 : decimalsFor(at - nominal, 2);
+  const scale = 10 ** decimals;
+  const cut = at > nominal ? Math.floor(at * scale + 1e-6) : Math.ceil(at * scale - 1e-6);
+  return formatNumber(cut / scale, decimals);
+}
+
+/** The limit asked on one side. */
+export function limitIn(item: SheetItem, side: 'lower' | 'upper'): string {
+  const raw = rawLimit(item, side);
+  if (item.limits[side].origin === 'calculated') return raw;
+  return formatNumber(inUnit(item, item.limits[side].limit), Math.max(decimalsOf(raw), decimalsOf(nominalIn(item))));
+}
+
+function rawLimit(item: SheetItem, side: 'lower' | 'upper'): string {
+  const { limit, origin } = item.limits[side];
+  return origin === 'stated' ? stated(inUnit(item, limit)) : towardsNominal(item, limit);
+}
+
+export function basisText({ limits: { lower, upper }, upperOnly }: SheetItem): string {
+  const word = ({ origin }: HeldSide) => (origin === 'stated' ? 'stated' : 'calculated');
+  if (upperOnly || lower.origin === upper.origin) return word(upper);
+  return `from: ${word(lower)}; to: ${word(upper)}`;
+}
+
+const MODEL_NAMES = { hammerstad: 'Hammerstad', groiss: 'Groiss', gradient: 'gradient' } as const;
+const named = (models: readonly (keyof typeof MODEL_NAMES)[]): string => models.map((m) => MODEL_NAMES[m]).join(', ');
+
+/** What the calculation says of one side. Where allowances are kept inside, only what limits is told. */
+export function allowanceText(item: SheetItem, side: 'lower' | 'upper', printed: boolean): string {
+  const { allowance, origin } = item.limits[side];
+  if (!printed && origin === 'stated' && allowance.kind !== 'saturated') return 'not tighter than stated';
+  // That some board does not meet is for nobody outside to read.
+  if (allowance.kind === 'not met at nominal') return 'none calculated';
+  return wording(item, allowance.kind === 'limited' ? { ...allowance, partly: false } : allowance);
+}
+
+/** The whole of it, for pages that stay inside. */
+export function wording(item: Measured & { readonly nominal: number }, allowance: SideAllowance): string {
+  const symbol = unitText(item);
+  const gap = symbol === '–' ? '' : symbol === '°' ? '°' : `\u00a0${symbol}`;
+  switch (allowance.kind) {
+    case 'limited': {
+      const { tightest, loosest, byModel, saturated, partly } = allowance;
+      const [near, far] = [towardsNominal(item, tightest), towardsNominal(item, loosest)];
+      const models =
+        byModel.length === 1
+          ? ` (${named(byModel.map(({ model }) => model))})`
+          : near === far
+            ? ' (all models alike)'
+            : ` (over the models ${near} to ${far}${gap})`;
+      const stuck =
+        saturated.length === 0 ? '' : `; saturated under ${named(saturated)}: no limit can be set on this parameter`;
+      return `${near}${gap}${models}${stuck}${partly ? '; some board or model already does not meet at nominal and sets none' : ''}`;
+    }
+    case 'saturated':
+      return `saturated (${named(allowance.saturated)}): no limit can be set on this parameter`;
+    case 'not limited':
+      return `not limited within ${stated(inUnit(item, allowance.searchedTo))}${gap}`;
+    case 'not met at nominal':
+      return 'none set: already not met at nominal';
+    case 'not computed':
+      return 'not computed';
+  }
+}
