@@ -1,4 +1,15 @@
-import { composePack, dataSchemas, markingOf, PACK_PDF, type PackInput, packData, packPage } from '../dossier/index.js';
+import {
+  boardData,
+  boardPdf,
+  composePack,
+  dataSchemas,
+  markingOf,
+  PACK_DATA,
+  PACK_PDF,
+  type PackInput,
+  packData,
+  packPage,
+} from '../dossier/index.js';
 import { allChecks, methods, runChecks } from '../evidence/index.js';
 import { audienceOf, loadPack, type PackFiles, type Problem, packFor } from '../manifest/index.js';
 import type { Pack } from '../manifest/model.js';
@@ -19,6 +30,7 @@ import { Fault } from './errors.js';
 import { findPrevious } from './previous.js';
 import type { Progress } from './progress.js';
 import { renderTop } from './render-top.js';
+import { resultsAttachment } from './results-attachment.js';
 import { boardsToRetune, retunePack, type StudyJob } from './study-job.js';
 import { studyProcurement } from './study-procurement.js';
 import { supplierFiles } from './supplier-files.js';
@@ -157,8 +169,10 @@ async function drawPack(parts: PackInput, effects: BuildEffects, enter: Enter): 
     pageTitle: (id: string) => titles.get(id),
   };
   for (const page of [wholePack, ...dossiers]) {
-    const path = page === wholePack ? PACK_PDF : `pdf/${page.id.replace(/^board\//, '')}.pdf`;
-    files.set(path, await renderPdf(page, context));
+    const board = page === wholePack ? undefined : page.id.replace(/^board\//, '');
+    const path = board === undefined ? PACK_PDF : boardPdf(board);
+    const attachments = [resultsAttachment(board === undefined ? PACK_DATA : boardData(board), files)];
+    files.set(path, await renderPdf(page, { ...context, attachments }));
     effects.progress.step();
   }
   return files;

@@ -111,7 +111,7 @@ function lossFactorFigure({ input, study }: BoardContext): Block {
     content: {
       chart: 'lines',
       xTitle: 'Rq (µm)',
-      yTitle: 'Loss factor K',
+      yTitle: 'Loss factor K (1)',
       series: seriesOf(study.lossFactor, input.pack.analysis.roughnessModel, xy),
       band: bandOf(study.lossFactor, xy),
       marks: faceMarks(study.faces),

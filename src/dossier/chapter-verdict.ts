@@ -5,6 +5,7 @@ import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter, Inline } from './document.js';
 import { concernsOf, figureText } from './figures.js';
 import { boardPage, DEFINITIONS, link, requirementPage } from './links.js';
+import { retunedNotice } from './retuning.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
 import { limitText, marginText, placeText, uncertaintyText, valueText } from './values.js';
 
@@ -147,6 +148,7 @@ export function verdictChapter(context: BoardContext): Chapter {
     'verdict',
     'Verdict',
     { kind: 'verdict', status: verdict.overall, content: [verdict.reason] },
+    ...retunedNotice(board),
     results(context),
     facts(
       'reading',

@@ -140,7 +140,7 @@ function budgetChapter(pair: Pair): Chapter {
     prose(
       `At the band centre ${second} has ${formatNumber(Math.abs(gained), 2)}${GAP}dB ${gained < 0 ? 'less' : 'more'} realized gain than ${first}; `,
       `${formatNumber(Math.abs(to.directivity - from.directivity), 2)}${GAP}dB ${to.directivity < from.directivity ? 'less' : 'more'} directivity. `,
-      `Of the losses ${largest.label.toLowerCase()} differs most, by ${change(largest.to - largest.from)}.`,
+      `The largest difference between the losses is ${largest.label.toLowerCase()} with ${change(largest.to - largest.from)}.`,
     ),
     table(
       'budget-table',
@@ -220,7 +220,7 @@ export function comparisonPage(input: PackInput, pair: Pair): DocumentPage {
   return page(input, {
     id: comparePage(first, second),
     kind: 'compare',
-    title: `${first} and ${second} side by side`,
+    title: `${first} and ${second} compared`,
     subtitle: `Verdicts: ${first} ${pair[0].verdict.overall}, ${second} ${pair[1].verdict.overall}`,
     chapters: [
       summaryChapter(pair),

@@ -12,7 +12,7 @@ import {
   packDataSchema,
   type VerdictData,
 } from './data-schema.js';
-import { boardData as boardPath } from './links.js';
+import { boardData as boardPath, PACK_DATA } from './links.js';
 import { exponentAbove } from './values.js';
 
 const DIGITS = 12;
@@ -231,7 +231,7 @@ export function packFile(input: PackInput, boards: readonly BoardContext[]): Pac
 export function packData(input: PackInput): Readonly<Record<string, PackData | BoardData>> {
   const boards = boardContexts(input);
   return {
-    'data/pack.json': packDataSchema.parse(packFile(input, boards)),
+    [PACK_DATA]: packDataSchema.parse(packFile(input, boards)),
     ...Object.fromEntries(
       boards.map((context) => [`data/${boardFile(context.board.id)}`, boardDataSchema.parse(boardData(context))]),
     ),

@@ -4,7 +4,7 @@ export { markingOf, type PackInput } from './context.js';
 export { packData } from './data.js';
 export { type BoardData, dataSchemas, type PackData } from './data-schema.js';
 export type * from './document.js';
-export { PACK_PDF } from './links.js';
+export { boardData, boardPdf, PACK_DATA, PACK_PDF } from './links.js';
 export { packPage } from './pack-page.js';
 export { type PreviousData, type RevisionData, readRevisionData } from './previous.js';
 export { type SheetContent, sheetContent } from './supplier-allowed-fields.js';

@@ -22,6 +22,7 @@ export const requirementPage = (requirementId: string): string => `requirement/$
 export const comparePage = (first: string, second: string): string => `compare/${slug(first)}--${slug(second)}`;
 
 /** Files of a revision, below its folder. */
+export const PACK_DATA = 'data/pack.json';
 export const PACK_PDF = 'pdf/pack.pdf';
 export const boardPdf = (boardId: string): string => `pdf/${slug(boardId)}.pdf`;
 export const boardData = (boardId: string): string => `data/board-${slug(boardId)}.json`;

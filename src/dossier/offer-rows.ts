@@ -2,7 +2,7 @@ import type { Answer, AskedItem, AskedWords } from '../manifest/procurement-mode
 import { type Allowances, heldLimits } from '../verdict/index.js';
 import { cell, number } from './blocks.js';
 import type { Cell } from './document.js';
-import { inUnit, unitText } from './supplier-limits.js';
+import { inUnit, unitBehind } from './supplier-limits.js';
 import { PARAMETER_WORDS } from './supplier-words.js';
 import { GAP, statedNumber } from './values.js';
 
@@ -19,7 +19,7 @@ export function answeredRows(
     const answer = answers.find((row) => row.item === item.id);
     const { lower, upper } = heldLimits(item, allowances);
     const say = (value: number) => statedNumber(inUnit(item, value), 6);
-    const unit = unitText(item) === '–' ? '' : `${GAP}${unitText(item)}`;
+    const unit = unitBehind(item);
     const range = (from: number | undefined, to: number) =>
       from === undefined ? `≤${GAP}${say(to)}${unit}` : `${say(from)} to ${say(to)}${unit}`;
     const what = `${PARAMETER_WORDS[item.parameter].what}${item.layer === undefined ? '' : `, ${item.layer}`}`;

@@ -16,9 +16,9 @@ import { type PackInput, page } from './context.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
 import { boardPage, boardTitle, fileLink, link, OFFERS, requirementPage } from './links.js';
 import { answeredRows, answeredWords } from './offer-rows.js';
-import { inUnit, towardsNominal, unitText } from './supplier-limits.js';
+import { freeText, inUnit, towardsNominal, unitBehind } from './supplier-limits.js';
 import { KIND_WORDS, PARAMETER_WORDS } from './supplier-words.js';
-import { count, GAP, marginText, statedNumber, valueText } from './values.js';
+import { count, marginText, statedNumber, valueText } from './values.js';
 
 /** The page of the suppliers: what was asked of whom, how far each item may go, and what came back. Stays inside. */
 export function offersPage(input: PackInput): DocumentPage | undefined {
@@ -131,10 +131,7 @@ function allowanceTable(board: Board, results: readonly AllowanceResult[], items
   );
 }
 
-function withUnit(text: string, item: AskedItem): string {
-  const unit = unitText(item);
-  return unit === '–' ? text : unit === '°' ? `${text}°` : `${text}${GAP}${unit}`;
-}
+const withUnit = (text: string, item: AskedItem): string => text + unitBehind(item);
 
 function outcomeCell(outcome: AllowanceOutcome, item: AskedItem): Cell {
   switch (outcome.kind) {
@@ -148,7 +145,7 @@ function outcomeCell(outcome: AllowanceOutcome, item: AskedItem): Cell {
     case 'saturated':
       return cell('saturated: no limit can be set on this parameter');
     case 'not limited':
-      return cell(`not limited within ${withUnit(statedNumber(inUnit(item, outcome.searchedTo), 3), item)}`);
+      return cell(freeText(item, outcome.searchedTo));
     case 'not met at nominal':
       return cell('already not met at nominal (', ...requirementLinks(outcome.requirementIds), ')');
   }

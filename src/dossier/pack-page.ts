@@ -5,7 +5,7 @@ import { cautionsChapter } from './chapter-record.js';
 import { type BoardContext, boardContexts, documentNumber, type PackInput, page } from './context.js';
 import { differencesBetween } from './differences.js';
 import type { Block, Cell, Chapter, DocumentPage } from './document.js';
-import { boardData, boardPdf, boardSuffix, boardTitle, PACK } from './links.js';
+import { boardData, boardPdf, boardSuffix, boardTitle, PACK, PACK_DATA } from './links.js';
 import { boardsByStatus, gapsOf, matrixCell, notEvaluatedOn, notEvaluatedText } from './matrix.js';
 import {
   concessionsChapter,
@@ -149,7 +149,7 @@ function dossiersChapter(
       'record',
       ['Requirement set', `${pack.requirements.title}, `, { code: pack.requirements.file }],
       ['Program', `boardcase ${programVersion}`],
-      ['Verdicts of all boards', { code: 'data/pack.json' }, ', SHA-256 ', { code: hashOf('data/pack.json') }],
+      ['Verdicts of all boards', { code: PACK_DATA }, ', SHA-256 ', { code: hashOf(PACK_DATA) }],
     ),
   );
 }

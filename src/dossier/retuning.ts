@@ -2,6 +2,7 @@ import type { Board, ColumnLayout } from '../manifest/model.js';
 import { RETUNE_LIMITS } from '../study/index.js';
 import { cell, facts, number, prose, table } from './blocks.js';
 import type { Block } from './document.js';
+import { boardPage, link } from './links.js';
 import { statedNumber, valueText } from './values.js';
 
 /** Factor as used: always four decimals. */
@@ -22,6 +23,19 @@ function lengthRows(drawn: readonly ColumnLayout[], columns: readonly ColumnLayo
   });
   const all = [...rows.values()];
   return [...all.filter(([what]) => what === 'Patch'), ...all.filter(([what]) => what === 'Link')];
+}
+
+/** For page one: verdicts of a retuned layout must not pass for those of the drawing. */
+export function retunedNotice({ id, retuned }: Board): readonly Block[] {
+  if (retuned === undefined || 'reason' in retuned) return [];
+  return [
+    prose(
+      { strong: 'Retuned layout. ' },
+      `Every figure is of the drawn layout with its patch and link lengths multiplied by ${factorText(retuned.factor)}: see `,
+      link('Board', boardPage(id), 'retuning'),
+      '.',
+    ),
+  ];
 }
 
 /** What became of a layout that was to be retuned; nothing for a board that is studied as drawn. */

@@ -1,7 +1,7 @@
 import { decimalsFor, formatNumber, fromBase, unitNamed } from '../quantity/index.js';
 import type { HeldSide, SideAllowance } from '../verdict/index.js';
 import type { SheetItem } from './supplier-allowed-fields.js';
-import { statedNumber } from './values.js';
+import { GAP, statedNumber } from './values.js';
 
 type Measured = Pick<SheetItem, 'dimension' | 'unit'>;
 
@@ -17,6 +17,12 @@ export function unitText({ dimension, unit }: Measured): string {
 
 /** Most significant digits that a stated number is printed with: nobody writes more, only conversions (Rq from Ra) have them. */
 const MOST_DIGITS = 6;
+
+/** The unit as it stands behind a number, with its space. */
+export function unitBehind(item: Measured): string {
+  const unit = unitText(item);
+  return unit === '–' ? '' : unit === '°' ? unit : `${GAP}${unit}`;
+}
 
 /** A manifest's number as it was written. */
 const stated = (value: number): string => statedNumber(value, decimalsFor(value, MOST_DIGITS));
@@ -72,8 +78,7 @@ export function allowanceText(item: SheetItem, side: 'lower' | 'upper', printed:
 
 /** The whole of it, for pages that stay inside. */
 export function wording(item: Measured & { readonly nominal: number }, allowance: SideAllowance): string {
-  const symbol = unitText(item);
-  const gap = symbol === '–' ? '' : symbol === '°' ? '°' : `\u00a0${symbol}`;
+  const gap = unitBehind(item);
   switch (allowance.kind) {
     case 'limited': {
       const { tightest, loosest, byModel, saturated, partly } = allowance;
@@ -91,10 +96,15 @@ export function wording(item: Measured & { readonly nominal: number }, allowance
     case 'saturated':
       return `saturated (${named(allowance.saturated)}): no limit can be set on this parameter`;
     case 'not limited':
-      return `not limited within ${stated(inUnit(item, allowance.searchedTo))}${gap}`;
+      return freeText(item, allowance.searchedTo);
     case 'not met at nominal':
       return 'none set: already not met at nominal';
     case 'not computed':
       return 'not computed';
   }
+}
+
+/** Nothing binds from nominal to the end of the search. */
+export function freeText(item: Measured & { readonly nominal: number }, searchedTo: number): string {
+  return `not limited ${searchedTo < item.nominal ? 'down' : 'up'} to ${stated(inUnit(item, searchedTo))}${unitBehind(item)}`;
 }

@@ -40,10 +40,10 @@ export function supplierSheet(content: SheetContent): SupplierSheet {
       itemsChapter(content),
       limitsChapter(content),
       verificationChapter(content),
-      answerChapter(content),
-      wordsChapter(content),
       chapter('certificate', 'Certificate of conformance', prose(content.certificate)),
       chapter('terms', 'Terms and cautions', list([...TERMS, ...confidence(content)].map((line) => [line]))),
+      answerChapter(content),
+      wordsChapter(content),
     ],
     answerTable: answerTable(content),
   };

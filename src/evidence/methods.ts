@@ -78,7 +78,8 @@ const lines: readonly Method[] = [
   {
     id: 'impedance-hammerstad-jensen',
     name: 'Impedance dispersion, cross-check',
-    whatItIs: 'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1): a second opinion on the line impedance, not used in figures.',
+    whatItIs:
+      'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1): a second opinion on the line impedance, not used in figures.',
     source: 'E. Hammerstad and Ø. Jensen, IEEE MTT-S Digest 1980',
     range: '1.5 to 3 % above the power-current impedance at 77 GHz on 0.1 to 0.2 mm',
   },
@@ -160,5 +161,25 @@ const columns: readonly Method[] = [
   },
 ];
 
-/** Every method in the program, grouped copper, lines, columns. */
-export const methods: readonly Method[] = [...copper, ...lines, ...columns];
+const suppliers: readonly Method[] = [
+  {
+    id: 'allowance',
+    name: 'Allowance of one item by root finding',
+    whatItIs:
+      'The value of one item, moved alone, at which the first binding requirement stops meeting under each roughness model: growing steps from nominal, then a bracketed root.',
+    source:
+      'R. P. Brent, Algorithms for Minimization without Derivatives, 1973, chapter 4; rule of combination as in the verdict',
+    range:
+      'Band edges and centre at the lowest, nominal and highest temperature; to 2 % of the distance from nominal. A failure that recovers within a step is not seen; items that move together are not searched',
+  },
+  {
+    id: 'success-run',
+    name: 'Sample size without failures',
+    whatItIs: 'n = ln(1 − C)/ln R, rounded up: pieces of which none may fail, for confidence C and reliability R.',
+    source: 'Binomial distribution; success-run formula of reliability handbooks',
+    range: 'Pieces drawn at random from one population; says nothing of how far a value lies from its limit',
+  },
+];
+
+/** Every method in the program, grouped copper, lines, columns, what is asked of suppliers. */
+export const methods: readonly Method[] = [...copper, ...lines, ...columns, ...suppliers];

@@ -5,6 +5,7 @@ import { guideChecks } from './guide.js';
 import { lineChecks } from './line.js';
 import { lineLossChecks } from './line-loss.js';
 import { roughnessChecks } from './roughness.js';
+import { samplingChecks } from './sampling.js';
 
 /** Every check of the engine against a value from outside it, in the order of the evidence page. */
 export const allChecks: readonly EvidenceCheck[] = [
@@ -14,4 +15,5 @@ export const allChecks: readonly EvidenceCheck[] = [
   ...lineLossChecks,
   ...guideChecks,
   ...columnEngineChecks,
+  ...samplingChecks,
 ];

@@ -100,6 +100,7 @@ function materialRules(report: RuleReport, path: Path, recipient: RecipientDocum
       );
     }
   });
+  if (!materials.every((id) => used.has(id))) return;
   boards.forEach((board) => {
     if (usedOn(kind, board).some(({ id }) => materials.includes(id))) return;
     const here = [...path, 'boards', recipient.boards.indexOf(board.id)];

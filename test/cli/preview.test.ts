@@ -24,7 +24,7 @@ function ask(address: string, path: string, options: { method?: string; host?: s
   return new Promise((resolve, reject) => {
     const { method = 'GET' } = options;
     const headers = { host: options.host ?? host };
-    request({ hostname, port, path, method, headers }, (response) => {
+    request({ hostname, port, path, method, headers, agent: false }, (response) => {
       let text = '';
       response.setEncoding('utf8');
       response.on('data', (chunk) => {
@@ -132,23 +132,36 @@ describe('the server of a preview', () => {
   });
 });
 
-/** Reads the states that the page around the pages is told of. */
+/** Reads the states that the page around the pages is told of, each once. */
 async function listen(address: string) {
   const response = await fetch(`${address}-/events`);
   const reader = response.body!.pipeThrough(new TextDecoderStream()).getReader();
   let rest = '';
   const states: PreviewState[] = [];
+  const next = async (): Promise<PreviewState> => {
+    for (;;) {
+      const told = states.shift();
+      if (told) return told;
+      const { value, done } = await reader.read();
+      if (done) throw new Error('the preview ended');
+      const messages = (rest + value).split('\n\n');
+      rest = messages.pop() ?? '';
+      states.push(...messages.map((message) => JSON.parse(message.slice('data: '.length))));
+    }
+  };
   return {
-    async until(wanted: (state: PreviewState) => boolean): Promise<PreviewState> {
+    /** The state after a number of good builds; a build that fails on the way is an error. */
+    async good(count: number): Promise<PreviewState> {
       for (;;) {
-        const found = states.find(wanted);
-        if (found) return found;
-        const { value, done } = await reader.read();
-        if (done) throw new Error(`the preview ended after ${JSON.stringify(states)}`);
-        rest += value;
-        const messages = rest.split('\n\n');
-        rest = messages.pop() ?? '';
-        states.push(...messages.map((message) => JSON.parse(message.slice('data: '.length))));
+        const told = await next();
+        if (told.failed && told.standing.startsWith('Not built')) throw new Error(told.problems);
+        if (told.good === count) return told;
+      }
+    },
+    async failed(): Promise<PreviewState> {
+      for (;;) {
+        const told = await next();
+        if (told.failed) return told;
       }
     },
   };
@@ -196,34 +209,34 @@ async function previewing(changes: Record<string, string | undefined> = {}) {
 describe('boardcase preview', () => {
   it('builds, serves, and builds again when a file changes', async () => {
     const { address, events, files, write } = await previewing();
-    const first = await events.until(({ good }) => good === 1);
+    const first = await events.good(1);
     expect(first.page).toBe('/site/quillback-small/A/index.html');
     expect((await ask(address, first.page!)).text).toContain('Quillback side radar, two candidate boards');
     write('pack.yaml', files['pack.yaml']!.replace('two candidate boards', 'a changed title'));
-    await events.until(({ good }) => good === 2);
+    await events.good(2);
     expect((await ask(address, first.page!)).text).toContain('a changed title');
   });
 
   it('shows the problems of a failed build and keeps the last good one, until they are mended', async () => {
     const { address, events, files, said, write } = await previewing();
-    const first = await events.until(({ good }) => good === 1);
+    const first = await events.good(1);
     const before = await ask(address, first.page!);
     write('boards/qs-2.yaml', files['boards/qs-2.yaml']!.replace('kf-10', 'kf-99'));
-    const failed = await events.until((s) => s.failed);
+    const failed = await events.failed();
     expect(failed.problems).toMatch(/^boards\/qs-2\.yaml:\d+:\d+[^\n]*\n[^\n]*kf-99/);
     expect(failed).toMatchObject({ good: 1, page: first.page });
     expect(said.join('\n')).toContain('kf-99');
     expect(await ask(address, first.page!)).toMatchObject({ text: before.text });
     write('boards/qs-2.yaml', files['boards/qs-2.yaml']!);
-    expect(await events.until(({ good }) => good === 2)).toMatchObject({ failed: false, problems: '' });
+    expect(await events.good(2)).toMatchObject({ failed: false, problems: '' });
   });
 
   it('begins also with a pack that cannot be built, and waits for a file that is not there', async () => {
     const { events, files, write } = await previewing({ 'foils.yaml': undefined });
-    const failed = await events.until((s) => s.failed);
+    const failed = await events.failed();
     expect(failed).toMatchObject({ good: 0, page: null, problems: expect.stringContaining('foils.yaml') });
     write('foils.yaml', files['foils.yaml']!);
-    expect((await events.until(({ good }) => good === 1)).failed).toBe(false);
+    expect((await events.good(1)).failed).toBe(false);
   });
 
   it('stops serving and removes its own folder at the end', async () => {
@@ -231,7 +244,7 @@ describe('boardcase preview', () => {
     vi.stubEnv('TMPDIR', temporary);
     onTestFinished(() => void vi.unstubAllEnvs());
     const { address, events, stop, ended } = await previewing();
-    await events.until(({ good }) => good === 1);
+    await events.good(1);
     expect(readdirSync(temporary).filter((name) => name.startsWith('boardcase-preview-'))).toHaveLength(1);
     stop.abort();
     expect(await ended).toBe(0);

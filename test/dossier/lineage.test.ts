@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { lineageBlocks } from '../../src/dossier/lineage.js';
-import { retuningBlocks } from '../../src/dossier/retuning.js';
+import { retunedNotice, retuningBlocks } from '../../src/dossier/retuning.js';
 import { board } from './board-fixture.js';
 import { inlinesOf, plain } from './pack-fixture.js';
 
@@ -54,6 +54,9 @@ describe('retuning in a dossier', () => {
     expect(words).toContain('Patch|1.07|1.05');
     expect(words).toContain('Link|1.22|1.22');
     expect(words).toContain('0.85 and 1.176');
+    const notice = retunedNotice(board('a', { columns, retune: 'length', retuned }));
+    expect(wordsOf(notice)).toContain('multiplied by 0.9800');
+    expect(retunedNotice(board('a'))).toEqual([]);
   });
 
   it('prints why a layout was not retuned, and nothing for one that was not to be', () => {

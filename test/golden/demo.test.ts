@@ -1,9 +1,10 @@
 import { spawnSync } from 'node:child_process';
-import { readFileSync } from 'node:fs';
+import { readFileSync, statSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { expect, it } from 'vitest';
+import { filesUnder, realDisk } from '../../src/publish/index.js';
 import { temporaryFolder } from '../publish/temporary-folder.js';
 import { compareTrees } from './compare-trees.js';
 
@@ -22,6 +23,11 @@ it('the committed demo and schemas are what the program makes of the manifests: 
   const folder = temporaryFolder();
   const [site, schemas] = [join(folder, 'site'), join(folder, 'schema')];
   run(join('dist', 'cli', 'demo.js'), '--site', site, '--schemas', schemas);
+
+  // A page with its charts opens at once, also over a slow line.
+  const dossiers = filesUnder(realDisk, site).filter((path) => /\/board\/[^/]+\.html$/.test(path));
+  expect(dossiers.length).toBeGreaterThan(3);
+  for (const path of dossiers) expect(statSync(join(site, path)).size, path).toBeLessThan(600_000);
 
   const committedOn = readFileSync(join(top, '.nvmrc'), 'utf8').trim().replace(/^v/, '');
   const pdfs = process.versions.node === committedOn ? 'bytes' : 'text';

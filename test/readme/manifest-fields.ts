@@ -15,7 +15,7 @@ interface Node {
 }
 
 export const MARKERS = ['<!-- fields: begin -->', '<!-- fields: end -->'] as const;
-const ORDER = ['pack', 'review', 'board', 'requirements', 'laminates', 'foils', 'finishes'];
+const ORDER = ['pack', 'review', 'procurement', 'board', 'requirements', 'laminates', 'foils', 'finishes'];
 /** Parts that recur are told once. */
 const FIGURE_KEYS = ['value', 'spread', 'basis'];
 const isFigure = (node: Node): boolean => FIGURE_KEYS.every((key) => node.properties?.[key] !== undefined);

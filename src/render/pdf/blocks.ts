@@ -59,7 +59,7 @@ function listBoxes(context: BlockContext, items: readonly (readonly Inline[])[],
   const { press, parent } = context;
   const set = type.body;
   const setter = new LineSetter(press, set.size);
-  const list = press.element('L', parent);
+  const list = press.list(parent, ordered ? 'Decimal' : 'Disc');
   const labels = items.map((_, i) => setter.lines(textRuns(ordered ? `${i + 1}.` : '•', muted), bodyWidth)[0]);
   const indent = Math.max(12, ...labels.map((label) => label.width + 6));
   return items.flatMap((item, n): Box[] => {

@@ -175,7 +175,7 @@ export function contentsBoxes(
   };
   const numberRoom = 34;
   const entries = chapters.flatMap((chapter): Box[] => {
-    const item = press.element('TOCI', contents);
+    const item = press.element('Reference', press.element('TOCI', contents));
     const target = press.placeName(chapter.id);
     const lines = setter.lines([{ ...plain, text: chapter.title, target }], bodyWidth - numberRoom);
     return lines.map((line, i) => ({
@@ -183,7 +183,7 @@ export function contentsBoxes(
       keep: i < lines.length - 1 && lines.length < 20,
       paint: (top) =>
         press.defer(() => {
-          paintLine(press, line, set, page.left, top, item, 'TOCI');
+          paintLine(press, line, set, page.left, top, item, 'Reference');
           if (i === lines.length - 1) paintPageNumber(press, setter, set, line, pageOf(chapter), target, item, top);
         }),
     }));
@@ -209,5 +209,5 @@ function paintPageNumber(
     press.doc.lineWidth(0.5).dash(0.5, { space: 3 }).stroke(colours.muted);
     press.doc.undash();
   });
-  paintLine(press, number, set, right, top, item, 'TOCI');
+  paintLine(press, number, set, right, top, item, 'Reference');
 }

@@ -12,9 +12,6 @@ declare namespace PDFKit.Mixins {
   interface PDFVector {
     dash(lengths: number[], options?: { phase?: number }): this;
   }
-  interface PDFAttachmentOptions {
-    relationship?: 'Source' | 'Data' | 'Alternative' | 'Supplement' | 'Unspecified';
-  }
 }
 
 declare namespace PDFKit {
@@ -30,7 +27,16 @@ declare namespace PDFKit {
     options: OutlineOptions;
     addItem(title: string, options?: OutlineOptions): PDFOutline;
   }
+  interface PDFKitReference {
+    end(): void;
+  }
+  interface PDFStructureElement {
+    readonly dictionary: { readonly data: Record<string, unknown> };
+  }
   interface PDFDocument {
+    readonly _root: { readonly data: { AF?: PDFKitReference[] } };
+    /** Writes the claims of conformance. */
+    endSubset(): void;
     /** The font in use; `font` is the parsed file. */
     _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean } };
     /** Writes the descriptive part of the XMP packet. */

@@ -1,6 +1,7 @@
 import { createRequire } from 'node:module';
 import PDFDocument from 'pdfkit';
 import { boldFontPath, regularFontPath } from '../../chart/font.js';
+import { claimAccessibility } from './claims.js';
 import { page } from './layout.js';
 import { replacementSign, safeText } from './safe-text.js';
 
@@ -44,12 +45,14 @@ export class Press {
       autoFirstPage: false,
       bufferPages: true,
       pdfVersion: '1.7',
+      subset: 'PDF/A-3a',
       tagged: true,
       lang: 'en',
       displayTitle: true,
       font: facePaths.sans,
       info,
     });
+    claimAccessibility(this.doc);
     this.doc.outline.options = { ...this.doc.outline.options, expanded: true };
   }
 
@@ -123,6 +126,13 @@ export class Press {
     if (parent === undefined) this.doc.addStructure(element);
     else parent.add(element);
     return element;
+  }
+
+  /** A list whose labels are bullets or numbers; `Disc` and `Decimal` are the names of PDF for these. */
+  list(parent: Element, numbering: 'Disc' | 'Decimal'): Element {
+    const list = this.element('L', parent);
+    list.dictionary.data.A = { O: 'List', ListNumbering: numbering };
+    return list;
   }
 
   tagged(element: Element, tag: string, paint: () => void): void {

@@ -1,5 +1,7 @@
 import type { Block, Chapter, DocumentPage, FigureBlock } from '../../dossier/document.js';
-import { type BlockContext, blockBoxes } from './blocks.js';
+import { type Attachment, attach } from './attach.js';
+import { type BlockContext, blockBoxes, paragraph } from './blocks.js';
+import { fileStatement } from './claims.js';
 import { figureBoxes } from './figure.js';
 import { type Box, Flow, stackHeight } from './flow.js';
 import { contentsBoxes, noticeBoxes, titleBlockBoxes, titleBoxes } from './front-page.js';
@@ -10,16 +12,8 @@ import { documentInfo, xmpDescription } from './metadata.js';
 import { paintLine } from './paint-line.js';
 import { type Picture, preparePicture } from './picture.js';
 import { type Element, Press } from './press.js';
-import { bold, textRuns, topPlace } from './runs.js';
-import { safeText } from './safe-text.js';
+import { bold, muted, textRuns, topPlace } from './runs.js';
 import { tableBoxes } from './table.js';
-
-export interface Attachment {
-  readonly name: string;
-  readonly type: string;
-  readonly description: string;
-  readonly data: Uint8Array;
-}
 
 export interface PdfContext {
   readonly packTitle: string;
@@ -32,8 +26,8 @@ export interface PdfContext {
 
 /**
  * A page of the pack as a PDF document of its own: A4, tagged, with outline, contents, running heads and feet, charts
- * and drawings as vectors. Every font is embedded. The same input gives the same bytes. It is built to what PDF/UA asks
- * for, and claims no conformance.
+ * and drawings as vectors. Every font is embedded. The same input gives the same bytes. It claims PDF/A-3a and PDF/UA-1
+ * and says at its end what is missing.
  */
 export async function renderPdf(document: DocumentPage, context: PdfContext): Promise<Uint8Array> {
   const pictures = new Map<FigureBlock, Picture>();
@@ -52,7 +46,7 @@ function write(
   context: PdfContext,
   pictures: ReadonlyMap<FigureBlock, Picture>,
 ): Promise<Uint8Array> {
-  const { packTitle, revision, date } = context;
+  const { packTitle, revision, date, attachments = [] } = context;
   const info = documentInfo(document, packTitle, revision, date);
   const press = new Press(info);
   const { doc } = press;
@@ -84,24 +78,17 @@ function write(
       ...chapter.blocks.flatMap((block) => boxesOf(block, section, flow.bodyHeight, pictures)),
     ];
   });
+  const lastSection = within(press.element('Sect', root));
   flow.place(frontBoxes(frontSection, document, flow, sections, (chapter) => chapterPages.get(chapter) ?? 1));
   for (const section of sections) flow.place(section);
+  flow.place(closingBoxes(lastSection, attachments));
   press.paintDeferred();
   const count = press.pageIndex + 1;
   for (let index = 0; index < count; index += 1) {
     doc.switchToPage(index);
     sheet.paint(index + 1, count);
   }
-  for (const { name, type: mediaType, description, data } of context.attachments ?? []) {
-    doc.file(Buffer.from(data), {
-      name: safeText(name),
-      type: mediaType,
-      description: safeText(description),
-      relationship: 'Data',
-      creationDate: date,
-      modifiedDate: date,
-    });
-  }
+  for (const attachment of attachments) attach(doc, attachment, date);
   doc.end();
   return bytes;
 }
@@ -164,6 +151,12 @@ export function headingBoxes({ press, parent }: BlockContext, chapter: Chapter, 
       paintLine(press, line, set, page.left, top, element, 'H2');
     },
   }));
+}
+
+/** What the file is built to and what is attached to it. */
+export function closingBoxes(context: BlockContext, attachments: readonly Attachment[] = []): Box[] {
+  const named = attachments.map(({ name, description }) => `${name} (${description})`);
+  return paragraph(context, textRuns(fileStatement(named), muted), { before: 16, type: type.small });
 }
 
 /** The bytes of a document once it is ended. */

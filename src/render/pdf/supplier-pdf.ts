@@ -7,7 +7,7 @@ import { LineSetter } from './lines.js';
 import { xmpDescription } from './metadata.js';
 import { paintBareLine, paintLine } from './paint-line.js';
 import { Press } from './press.js';
-import { collect, headingBoxes } from './render-pdf.js';
+import { closingBoxes, collect, headingBoxes } from './render-pdf.js';
 import { bold, muted, textRuns, topPlace } from './runs.js';
 import { safeText } from './safe-text.js';
 import { tableBoxes } from './table.js';
@@ -54,6 +54,7 @@ export function renderSupplierPdf(sheet: SupplierSheet, date: Date): Promise<Uin
       ...chapter.blocks.flatMap((block) => boxesOf(block, section, flow.bodyHeight)),
     ]);
   }
+  flow.place(closingBoxes(within()));
   press.paintDeferred();
   const count = press.pageIndex + 1;
   for (let index = 0; index < count; index += 1) {
