@@ -57,7 +57,7 @@ describe('overview', () => {
   it('sets the cost beside the tightest margin', () => {
     const [first] = texts('standings');
     expect(first[3]).toBe('r-match');
-    expect(first[6]).toBe('3.40\u00a0EUR');
+    expect(first[6]).toBe('3.40 EUR');
   });
 
   it('says what differs between the boards, and only that', () => {

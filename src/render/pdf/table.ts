@@ -69,7 +69,11 @@ export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight:
   const caption = captionBoxes(context, table, element);
   const setter = new LineSetter(press, set.size);
   const setRow = (cells: readonly CellText[]): SetCell[] =>
-    cells.map((cell, i) => ({ lines: setter.lines(cell.runs, columns[i].width - 2 * padX), numeric: cell.numeric }));
+    cells.map((cell, i) => {
+      const lines = setter.lines(cell.runs, columns[i].width - 2 * padX);
+      // A reason in place of a figure reads as a sentence: from the left.
+      return { lines, numeric: cell.numeric && (cells === heads || lines.length <= 2) };
+    });
 
   const painter = new RowPainter(press, columns, set);
   const head = setRow(heads);
