@@ -38,7 +38,7 @@ function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof ranke
       })),
     ],
     boards.map((board) => [
-      cell(link(boardTitle(board.board), boardPage(board.board.id))),
+      cell(link(board.board.id, boardPage(board.board.id))),
       cell({ status: board.verdict.overall }),
       ...ranked.map(({ requirement }) => matrixCell(judgedOn(board, requirement.id))),
     ]),

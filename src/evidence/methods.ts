@@ -78,7 +78,8 @@ const lines: readonly Method[] = [
   {
     id: 'impedance-hammerstad-jensen',
     name: 'Impedance dispersion, cross-check',
-    whatItIs: 'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1): a second opinion on the line impedance, not used in figures.',
+    whatItIs:
+      'Static impedance times sqrt(e0/ef) (ef − 1)/(e0 − 1): a second opinion on the line impedance, not used in figures.',
     source: 'E. Hammerstad and Ø. Jensen, IEEE MTT-S Digest 1980',
     range: '1.5 to 3 % above the power-current impedance at 77 GHz on 0.1 to 0.2 mm',
   },
