@@ -112,6 +112,16 @@ const lines: readonly Method[] = [
     source: 'M. Kirschning, R. H. Jansen and N. H. L. Koster, Electron. Lett. 17(3), 1981',
     range: 'w/h 0.01 to 100, permittivity to 50, 2.5 % quasi-static; full wave lies 0 to 8 % above it at 77 GHz',
   },
+
+  {
+    id: 'thick-end',
+    name: 'Open end of thick metal',
+    whatItIs:
+      'Thickness adds the same capacitance per length of edge to the end of a wide line as to its side; of the side it is known from the cross-section.',
+    source: 'Own argument on the line of Hammerstad and Jensen; the engine is otherwise compared at zero thickness',
+    range:
+      'Widths of several heights. Lowers patch resonance by 0.4 % for 18 µm and 0.6 % for 35 µm on 0.127 mm; not compared with a solution of thick patches',
+  },
 ];
 
 const columns: readonly Method[] = [

@@ -9,6 +9,6 @@ export {
   type MicrostripLineInput,
   microstripLine,
 } from './microstrip-line.js';
-export { openEndExtension } from './open-end.js';
+export { openEndExtension, thicknessEndExtension } from './open-end.js';
 export { type RectangularGuide, type RectangularGuideInput, rectangularGuide } from './rectangular-guide.js';
 export { type FaceWeights, sheetFaceWeights, wheelerFaceWeights } from './wheeler.js';
