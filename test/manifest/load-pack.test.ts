@@ -206,6 +206,14 @@ describe('loadPack', () => {
     expect(low.boards[0]!.band.low).toBe(2.4e9);
   });
 
+  it('names an unknown material also where another key of the board is at fault', () => {
+    const text = fixtureText('boards/qs-1.yaml').replace('foil: kf-04', 'foil: kf-4').replace('pitch:', 'pich:');
+    const result = load({ 'boards/qs-1.yaml': text });
+    const found = 'problems' in result ? result.problems.map((problem) => problem.found) : [];
+    expect(found).toContain('the unknown foil "kf-4"');
+    expect(found).toContain('the unknown key "pich"');
+  });
+
   it('hashes every file that it read, sorted by path', () => {
     expect(pack.inputs.map((i) => i.path)).toEqual([...FIXTURE_FILES].sort());
     for (const { path, sha256 } of pack.inputs) {
