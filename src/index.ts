@@ -18,6 +18,7 @@ export * as line from './physics/line/index.js';
 export * as material from './physics/material/index.js';
 export * as pattern from './physics/pattern/index.js';
 export * as roughness from './physics/roughness/index.js';
+export * as texture from './physics/texture/index.js';
 export type { ValidityFlag } from './physics/validity.js';
 export { assembleStudy, type BoardStudy, planBoard, runTask, studyBoard } from './study/index.js';
 export { type BoardVerdict, judgeBoard, judgePack, type RequirementVerdict } from './verdict/index.js';

@@ -45,7 +45,7 @@ function matrix(boards: readonly BoardContext[], ranked: ReturnType<typeof ranke
       })),
     ],
     boards.map((board) => [
-      cell(link(boardTitle(board.board), boardPage(board.board.id))),
+      cell(link(board.board.id, boardPage(board.board.id))),
       cell({ status: board.verdict.overall }),
       ...ranked.map(({ requirement }) => matrixCell(board, requirement.id)),
     ]),

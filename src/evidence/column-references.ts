@@ -48,6 +48,7 @@ export const COLUMN_REFERENCES: readonly ColumnReference[] = [
       {
         copper: 'smooth',
         fGHz: 77,
+        // biome-ignore lint/suspicious/noApproximativeNumericConstant: a computed reflection that happens to lie near ln 2
         s11: [-0.063845, 0.69315],
         directivityDbi: 15.89,
         gainDbi: 14.625,

@@ -1,21 +1,26 @@
-import { rectangularGuide } from '../physics/line/index.js';
-import { ANNEALED_COPPER_CONDUCTIVITY, surfaceResistance } from '../physics/material/index.js';
+import { type RectangularGuide, rectangularGuide } from '../physics/line/index.js';
+import { ANNEALED_COPPER_CONDUCTIVITY, halfSpaceImpedance } from '../physics/material/index.js';
 import type { EvidenceCheck } from './check.js';
 
 const TOPIC = 'Rectangular waveguide';
 const DB_PER_NEPER = 20 / Math.LN10;
 
 function copperGuide(width: number, height: number, permittivity: number, lossTangent: number, frequency: number) {
-  const rs = surfaceResistance(frequency, ANNEALED_COPPER_CONDUCTIVITY);
+  const wall = halfSpaceImpedance(frequency, ANNEALED_COPPER_CONDUCTIVITY);
   return rectangularGuide({
     width,
     height,
     permittivity,
     lossTangent,
     frequency,
-    surfaceResistance: { broad: rs, side: rs },
+    walls: { top: wall, bottom: wall, left: wall, right: wall },
   });
 }
+
+const conductorLoss = (guide: RectangularGuide): number => {
+  const { top, bottom, left, right } = guide.conductorLoss;
+  return top + bottom + left + right;
+};
 
 const filled = () => copperGuide(10.7e-3, 4.3e-3, 2.08, 0.0004, 15e9);
 const wr12 = () => copperGuide(3.0988e-3, 1.5494e-3, 1, 0, 77e9);
@@ -66,7 +71,7 @@ export const guideChecks: readonly EvidenceCheck[] = [
     unit: 'Np/m',
     tolerance: 5e-4,
     toleranceReason: 'three printed decimals',
-    compute: () => filled().conductorLoss.broad + filled().conductorLoss.side,
+    compute: () => conductorLoss(filled()),
   },
   {
     id: 'guide.wr12-cutoff',
@@ -90,6 +95,6 @@ export const guideChecks: readonly EvidenceCheck[] = [
     unit: 'dB/m',
     tolerance: 1e-4,
     toleranceReason: 'four decimals kept',
-    compute: () => (wr12().conductorLoss.broad + wr12().conductorLoss.side) * DB_PER_NEPER,
+    compute: () => conductorLoss(wr12()) * DB_PER_NEPER,
   },
 ];

@@ -3,16 +3,13 @@ import type { BoardDocument } from './documents/board-document.js';
 import { si } from './figures.js';
 import { expandPieces, patchCount, piecesRules } from './pieces.js';
 import type { Path, Problem } from './problem.js';
-import { ascending, exactlyOneOf, type KnownIds, knownId, RuleReport, textureRules } from './rules.js';
+import { ascending, exactlyOneOf, RuleReport, textureRules } from './rules.js';
 import type { Node } from './tree.js';
 
 /** A finer sweep than this is a slip of the unit, not an analysis. */
 const MOST_FREQUENCIES = 2000;
 
 export interface BoardContext {
-  readonly laminates: KnownIds;
-  readonly foils: KnownIds;
-  readonly finishes: KnownIds;
   /** Hz; absent when the pack's own is faulty. */
   readonly frequencyStep?: number;
 }
@@ -20,7 +17,7 @@ export interface BoardContext {
 /** What ties the parts of one complete board together. The frequency range of a model is no rule: models flag it. */
 export function boardRules(root: Node, board: BoardDocument, context: BoardContext): readonly Problem[] {
   const report = new RuleReport(root);
-  stackUpRules(report, board, context);
+  stackUpRules(report, board);
   const [low, high] = [si(board.band.low, 'frequency'), si(board.band.high, 'frequency')];
   ascending(report, ['band'], low, high, ['low', 'high']);
   const step = context.frequencyStep;
@@ -44,11 +41,7 @@ export function boardRules(root: Node, board: BoardDocument, context: BoardConte
   return report.problems;
 }
 
-function stackUpRules(report: RuleReport, { stack_up: stack }: BoardDocument, context: BoardContext): void {
-  knownId(report, ['stack_up', 'strip', 'foil'], stack.strip.foil, 'foil', context.foils);
-  knownId(report, ['stack_up', 'strip', 'finish'], stack.strip.finish, 'finish', context.finishes);
-  knownId(report, ['stack_up', 'laminate', 'material'], stack.laminate.material, 'laminate', context.laminates);
-  knownId(report, ['stack_up', 'ground', 'foil'], stack.ground.foil, 'foil', context.foils);
+function stackUpRules(report: RuleReport, { stack_up: stack }: BoardDocument): void {
   const outer: Path = ['stack_up', 'strip', 'outer_face'];
   const { kind, texture } = stack.strip.outer_face;
   if (kind === 'foil' && texture) {

@@ -11,3 +11,11 @@ export { type PathResult, resolveReference } from './paths.js';
 export { formatProblem, type Problem, sortProblems } from './problem.js';
 export type * from './procurement-model.js';
 export { QUANTITY_NAMES, type QuantityRule, REQUIREMENT_QUANTITIES } from './requirement-quantities.js';
+export {
+  type MeasuredHeights,
+  readTextureCsv,
+  readTextureFile,
+  readX3p,
+  type TextureFile,
+  type TextureFileResult,
+} from './texture-files/index.js';

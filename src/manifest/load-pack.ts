@@ -19,6 +19,7 @@ import { variantDocument } from './documents/variant-document.js';
 import { si } from './figures.js';
 import type { PackFiles } from './files.js';
 import { finishRules, foilRules, laminateRules } from './library-rules.js';
+import { materialReferences } from './material-references.js';
 import type { Board, Pack, PreviousRevision, Review } from './model.js';
 import { type OpenFile, Reader } from './open-files.js';
 import { openProcurement, procurementFor } from './open-procurement.js';
@@ -82,10 +83,9 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   const boards = openBoards(reader, packFile);
   const { chained, problems: chainProblems } = chainBoards(boards.files, boards.complete);
   problems.push(...chainProblems);
+  const materials = { laminates: laminates.known, foils: foils.known, finishes: finishes.known };
+  for (const board of boards.files) problems.push(...materialReferences(board.root, materials));
   const context = {
-    laminates: laminates.known,
-    foils: foils.known,
-    finishes: finishes.known,
     ...(pack ? { frequencyStep: si(pack.doc.analysis.frequency_step, 'frequency') } : {}),
   };
   const complete = chained.flatMap((board) => {

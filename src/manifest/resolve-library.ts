@@ -1,3 +1,4 @@
+import { RQ_CONVERSIONS } from '../physics/texture/index.js';
 import type { BoardDocument } from './documents/board-document.js';
 import {
   type FinishDocument,
@@ -7,74 +8,28 @@ import {
   type TextureDocument,
 } from './documents/library-documents.js';
 import { figureOf, si } from './figures.js';
-import type { DeclaredProperty, Finish, Foil, Laminate, Texture, TextureParameter } from './model.js';
+import type { DeclaredProperty, Finish, Foil, Laminate, Texture } from './model.js';
 
 type DeclaredDocument = NonNullable<BoardDocument['declared']>;
 
 export const declaredOf = (doc: DeclaredDocument | undefined): readonly DeclaredProperty[] => doc ?? [];
 
-/** sqrt(π/2): Rq over Ra of heights with a normal distribution. */
-const RQ_PER_RA = Math.sqrt(Math.PI / 2);
-/** Rz over Rq taken for treated copper foil; foils differ, hence the widened spread. */
-const RZ_PER_RQ = 5.5;
-/** Added to both distances as a share of Rq when it comes from Rz. */
-const RZ_WIDENING = 0.25;
-
-interface Conversion {
-  readonly factor: number;
-  /** Share of the converted value added to its spread. */
-  readonly widening: number;
-  readonly sentence?: string;
-}
-
-const CONVERSIONS: Readonly<Record<TextureParameter, Conversion>> = {
-  Rq: { factor: 1, widening: 0 },
-  Sq: {
-    factor: 1,
-    widening: 0,
-    sentence:
-      'Rq is taken equal to the stated Sq: the root-mean-square height of the surface stands for that of a profile.',
-  },
-  Ra: {
-    factor: RQ_PER_RA,
-    widening: 0,
-    sentence: 'Rq is 1.2533 times the stated Ra: heights are assumed to have a normal distribution.',
-  },
-  Sa: {
-    factor: RQ_PER_RA,
-    widening: 0,
-    sentence:
-      'Rq is 1.2533 times the stated Sa: heights are assumed to have a normal distribution, and Sq to equal Rq.',
-  },
-  Rz: {
-    factor: 1 / RZ_PER_RQ,
-    widening: RZ_WIDENING,
-    sentence: 'Rq is the stated Rz divided by 5.5, an assumption; 25 % of Rq is added to its spread on both sides.',
-  },
-  Sz: {
-    factor: 1 / RZ_PER_RQ,
-    widening: RZ_WIDENING,
-    sentence: 'Rq is the stated Sz divided by 5.5, an assumption; 25 % of Rq is added to its spread on both sides.',
-  },
-};
-
-/** Texture with its Rq, converted where another parameter is stated; the lower limit never falls below 0. */
+/** Texture with its Rq, converted where another parameter is stated, the doubt of the conversion added; never below 0. */
 export function textureOf(doc: TextureDocument, path: string): Texture {
   const parameter = TEXTURE_PARAMETERS.find((p) => doc[p] !== undefined);
   if (parameter === undefined) throw new Error(`unchecked texture ${path} reached the model`);
   const stated = figureOf(doc[parameter]!, 'length', `${path}.${parameter}`);
-  const { factor, widening, sentence } = CONVERSIONS[parameter];
+  const { factor, low, high, assumption } = RQ_CONVERSIONS[parameter];
   const value = stated.value * factor;
-  const extra = value * widening;
   return {
     rq: {
       ...stated,
       value,
-      minus: Math.min(value, stated.minus * factor + extra),
-      plus: stated.plus * factor + extra,
+      minus: Math.min(value, stated.minus * factor + stated.value * (factor - low)),
+      plus: stated.plus * factor + stated.value * (high - factor),
     },
     stated: { parameter, value: stated.value },
-    ...(sentence ? { conversion: sentence } : {}),
+    ...(assumption ? { conversion: assumption } : {}),
     ...(doc.instrument === undefined ? {} : { instrument: doc.instrument }),
     ...(doc.filter === undefined ? {} : { filter: doc.filter }),
   };

@@ -3,6 +3,7 @@ declare module 'cephes' {
   const cephes: {
     readonly compiled: Promise<void>;
     j0(x: number): number;
+    j1(x: number): number;
     y0(x: number): number;
     k0(x: number): number;
   };

@@ -59,3 +59,6 @@ export function tanh(a: Complex): Complex {
 }
 
 export const coth = (a: Complex): Complex => inverse(tanh(a));
+
+/** Principal natural logarithm: imaginary part in (−π, π]. */
+export const log = (a: Complex): Complex => complex(Math.log(abs(a)), arg(a));

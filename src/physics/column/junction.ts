@@ -42,10 +42,18 @@ export function stepReactance(
  * Open-end susceptance of a patch edge, S, less what an attached line covers.
  *
  * @param openEnd  open-end length of the patch-wide line, m (Kirschning, Jansen, Koster 1981)
+ * @param thick    what the metal's thickness adds to it, m
  * @param beta     phase constant of the patch-wide line, rad/m
  * @param coverage effective width of the attached line over that of the patch, 0 at an open edge
  */
-export function edgeSusceptance(openEnd: number, beta: number, impedance: number, coverage: number): number {
-  const length = NETWORK_CONSTANTS.openEnd * openEnd * (1 - NETWORK_CONSTANTS.coveredSusceptance * coverage);
+export function edgeSusceptance(
+  openEnd: number,
+  thick: number,
+  beta: number,
+  impedance: number,
+  coverage: number,
+): number {
+  const open = NETWORK_CONSTANTS.openEnd * openEnd + thick;
+  const length = open * (1 - NETWORK_CONSTANTS.coveredSusceptance * coverage);
   return Math.tan(beta * length) / impedance;
 }

@@ -10,7 +10,13 @@
 import { abs2, add, type Complex, complex, div, inverse, mul, neg, scale, sub, ZERO } from '../../numerics/complex.js';
 import { complexMatrix, factorise, solveInPlace } from '../../numerics/complex-lu.js';
 import { SPEED_OF_LIGHT } from '../constants.js';
-import { type FaceImpedances, type MicrostripLine, microstripLine, openEndExtension } from '../line/index.js';
+import {
+  type FaceImpedances,
+  type MicrostripLine,
+  microstripLine,
+  openEndExtension,
+  thicknessEndExtension,
+} from '../line/index.js';
 import type { ValidityFlag } from '../validity.js';
 import { addTo, type EdgeAdmittance, edgeAdmittance, edgePlan, planReach, quadraticForm } from './edge-admittance.js';
 import type {
@@ -113,12 +119,14 @@ export function edgeNetwork(problem: ColumnProblem, maximumFrequency: number): C
         const node = base + 2 * p;
         const line = lines(patch.width);
         sections.push(section(node, node + 1, line, patch.length, 0, 0));
-        const openEnd = openEndExtension(geometryOf(slab, stripThickness, patch.width), frequency);
+        const wide = geometryOf(slab, stripThickness, patch.width);
+        const openEnd = openEndExtension({ ...wide, thickness: 0 }, frequency);
+        const thick = thicknessEndExtension(wide);
         for (const side of [0, 1]) {
           const w = attached[c][2 * p + side];
           const coverage = w > 0 ? widthOf(w) / widthOf(patch.width) : 0;
           const beta = (2 * Math.PI * frequency * Math.sqrt(line.effectivePermittivity)) / SPEED_OF_LIGHT;
-          put(node + side, node + side, complex(0, edgeSusceptance(openEnd, beta, line.impedance, coverage)));
+          put(node + side, node + side, complex(0, edgeSusceptance(openEnd, thick, beta, line.impedance, coverage)));
         }
         const link = column.links[p];
         if (!link) return;

@@ -1,3 +1,5 @@
+import { SPEED_OF_LIGHT } from '../constants.js';
+import { microstripStatic } from './hammerstad-jensen.js';
 import { microstripDispersive } from './kirschning-jansen.js';
 import type { MicrostripGeometry } from './microstrip-geometry.js';
 
@@ -28,4 +30,24 @@ function openEndOverHeight(u: number, er: number, e: number): number {
   const xi4 = 1 + 0.0377 * Math.atan(0.067 * u ** 1.456) * (6 - 5 * Math.exp(0.036 * (1 - er)));
   const xi5 = 1 - 0.218 * Math.exp(-7.5 * u);
   return (xi1 * xi3 * xi5) / xi4;
+}
+
+/**
+ * What the thickness of the metal adds to the open-end length of a wide line, m.
+ *
+ * The field at the end of a wide line is that at its side, seen from another direction: thickness adds the same
+ * capacitance per length of edge to both. Of the side it is known from the cross-section: half of what thickness adds to
+ * the line's capacitance. Own argument, for widths of several heights; the capacitance is that of Hammerstad and Jensen,
+ * whose increase from 18 to 35 µm is within 10 % of that of independent sections (w/h 2.5).
+ * Without it thicker metal would raise the resonance of a patch (its effective permittivity falls), where in truth it
+ * lowers it by some 0.1 % per 3 µm on 0.127 mm.
+ */
+export function thicknessEndExtension(g: MicrostripGeometry): number {
+  if (g.thickness === 0) return 0;
+  const capacitance = (thickness: number): number => {
+    const { impedance, effectivePermittivity } = microstripStatic({ ...g, thickness });
+    return Math.sqrt(effectivePermittivity) / (SPEED_OF_LIGHT * impedance);
+  };
+  const thick = capacitance(g.thickness);
+  return ((thick - capacitance(0)) / 2 / thick) * g.width;
 }

@@ -7,4 +7,16 @@ export {
   skinDepth,
   surfaceResistance,
 } from './copper.js';
+export {
+  type DebyeCorners,
+  debyePermittivity,
+  type LaminateCoefficients,
+  type LaminateConditions,
+  type LaminateState,
+  laminateAt,
+  type StatedDielectric,
+  WIDEBAND_CORNERS,
+  type WidebandDebye,
+  widebandDebye,
+} from './laminate.js';
 export { type MetalLayer, platedImpedance } from './plating.js';

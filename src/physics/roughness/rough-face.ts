@@ -1,23 +1,11 @@
 import { type Complex, complex } from '../../numerics/complex.js';
 import { MU0 } from '../constants.js';
-import { skinDepth } from '../material/copper.js';
+import { skinDepth, surfaceResistance } from '../material/copper.js';
 import type { ValidityFlag } from '../validity.js';
-import { gradient, gradientPlaneShift } from './gradient.js';
-import { GROISS_LOWEST_RATIO, groiss } from './groiss.js';
-import { CEILING, hammerstad, type LossFactor } from './hammerstad.js';
-
-export type RoughnessModel = 'smooth' | 'hammerstad' | 'groiss' | 'gradient';
-
-export interface RoughFaceInput {
-  /** Root-mean-square height of the profile, m, ≥ 0. */
-  readonly rq: number;
-  /** Hz, > 0 */
-  readonly frequency: number;
-  /** Conductivity of the metal at the temperature in question, S/m. */
-  readonly conductivity: number;
-  /** Relative permittivity of the dielectric on this face (1 for air); it sets the electrostatic plane of the gradient model. */
-  readonly permittivity: number;
-}
+import type { FaceConditions, ModelFace, ReferencePlane, RoughFaceInput, RoughnessModel } from './face-model.js';
+import { heightFaces } from './height-faces.js';
+import { shapeFaces } from './shape-faces.js';
+import type { TextureKnowledge } from './texture.js';
 
 /** Surface impedance of a face together with the planes it belongs to. */
 export interface RoughFace {
@@ -25,6 +13,8 @@ export interface RoughFace {
   readonly frequency: number;
   /** Ohm, referred to the mean plane of the profile. */
   readonly impedance: Complex;
+  /** Whether the model itself refers its reactance to the mean plane, or states none. */
+  readonly plane: ReferencePlane;
   /** Electrostatic plane above the mean plane, towards the dielectric, m. */
   readonly planeShift: number;
   /** K: resistance over that of a smooth face. */
@@ -34,95 +24,62 @@ export interface RoughFace {
   readonly flags: readonly ValidityFlag[];
 }
 
-/** Rq above which a texture is known to slow the wave more than a loss factor can say, m. */
-const PHASE_MATTERS = 0.4e-6;
-/** Rq/δ above which the gradient model is known to exceed compact solved textures. */
-const GRADIENT_CLOSE_UP_TO = 0.6;
+const SMOOTH: ModelFace = { impedance: complex(1, 1), plane: 'mean', planeShift: 0, flags: [] };
+const faces = { smooth: (): ModelFace => SMOOTH, ...heightFaces, ...shapeFaces } as const;
 
-const TITLE = {
-  hammerstad: 'roughness, Hammerstad',
-  groiss: 'roughness, Groiss',
-  gradient: 'roughness, gradient',
-} as const;
-
-const micrometres = (x: number): string => `${(x * 1e6).toPrecision(3)} µm`;
-
-function lossFactorFlags(model: 'hammerstad' | 'groiss', rq: number, r: number, k: LossFactor): ValidityFlag[] {
-  const flags: ValidityFlag[] = [];
-  const flag = (code: string, severity: ValidityFlag['severity'], text: string): void => {
-    flags.push({ code: `roughness.${model}.${code}`, severity, model: TITLE[model], text });
-  };
-  if (k.saturated)
-    flag(
-      'saturated',
-      'saturated',
-      `At Rq ${micrometres(rq)} (${r.toFixed(1)} skin depths) the loss factor ${k.factor.toFixed(2)} is within 5 % of the formula's ceiling of ${CEILING}: it cannot tell this foil from a rougher one. The ceiling belongs to the formula, not to copper.`,
-    );
-  if (model === 'groiss' && r > 0 && r < GROISS_LOWEST_RATIO)
-    flag(
-      'range',
-      'outside',
-      `Rq over skin depth is ${r.toFixed(2)}; the Groiss formula is supported from ${GROISS_LOWEST_RATIO} upward and falls to 1 too fast below.`,
-    );
-  if (rq > PHASE_MATTERS)
-    flag(
-      'phase',
-      'note',
-      `The formula gives loss only. Reactance is completed with X = K and no plane shift, which is too small for a textured foil of Rq ${micrometres(rq)}: roughness slows the wave by 0.2 to 3 % in permittivity on 0.127 mm in solved textures.`,
-    );
-  return flags;
-}
-
-function gradientFlags(rq: number, r: number): ValidityFlag[] {
-  if (r <= GRADIENT_CLOSE_UP_TO) return [];
+/** The models that a texture's knowledge suffices for, in the order of their age. */
+export function applicableModels(texture: TextureKnowledge): RoughnessModel[] {
+  const lateral = texture.correlationLength !== undefined || texture.developedAreaRatio !== undefined;
   return [
-    {
-      code: 'roughness.gradient.upper-side',
-      severity: 'note',
-      model: TITLE.gradient,
-      text: `At Rq ${micrometres(rq)} (${r.toFixed(1)} skin depths) the gradient model is the upper side of the band: it describes texture much finer than the skin depth, and above ${GRADIENT_CLOSE_UP_TO} skin depths solved compact textures lose less and slow the wave less.`,
-    },
+    'smooth',
+    'hammerstad',
+    'groiss',
+    ...(texture.nodule ? (['hall', 'huray'] as const) : []),
+    'cannonball',
+    'gradient',
+    ...(lateral ? (['perturbation', 'area-limited'] as const) : []),
+    'ball-pile',
+    ...(texture.nodule ? (['nodules'] as const) : []),
   ];
 }
 
 /**
- * Surface impedance of a rough conductor face by one published model, with the plane it is referred to.
+ * Surface impedance of a rough conductor face by one model, with the plane it is referred to.
  *
- * Rq alone fixes neither loss nor phase: results of all models belong side by side. Hammerstad and Groiss give loss only;
- * their reactance is completed as X = K with no plane shift, as if the metal were one of lower conductivity.
+ * Rq alone fixes neither loss nor phase: results of all models belong side by side, see `roughnessBand`. Models that give
+ * loss only (Hammerstad, Groiss) are completed with the reactance that causality demands and no plane shift.
  *
- * @throws RangeError on arguments that are not physical
+ * @throws RangeError on arguments that are not physical, and where the texture lacks what the model needs
+ * @example
+ * const face = roughFace('perturbation', {
+ *   rq: 0.3e-6, correlationLength: 1e-6, frequency: 77e9, conductivity: 5.8e7, permittivity: 3,
+ * });
+ * face.lossFactor; // K
  */
 export function roughFace(model: RoughnessModel, input: RoughFaceInput): RoughFace {
   const { rq, frequency, conductivity, permittivity } = input;
   if (!(Number.isFinite(permittivity) && permittivity >= 1))
     throw new RangeError(`relative permittivity on the face must be 1 or more, got ${permittivity}`);
-  const delta = skinDepth(frequency, conductivity);
-  const rs = 1 / (conductivity * delta);
-  const face = (z: Complex, planeShift: number, flags: readonly ValidityFlag[]): RoughFace => ({
+  if (model !== 'smooth' && !(Number.isFinite(rq) && rq >= 0))
+    throw new RangeError(`Rq must be 0 m or more, got ${rq}`);
+  return faceOf(model, faces[model](input, skinDepth(frequency, conductivity)), input);
+}
+
+/** A model's view of a face, given the units of the metal and frequency it stands in. */
+export function faceOf(model: RoughnessModel, view: ModelFace, conditions: FaceConditions): RoughFace {
+  const { frequency, conductivity } = conditions;
+  const rs = surfaceResistance(frequency, conductivity);
+  const { impedance: z, plane, planeShift, flags } = view;
+  return {
     model,
     frequency,
     impedance: complex(rs * z.re, rs * z.im),
+    plane,
     planeShift,
     lossFactor: z.re,
     reactance: z.im,
     flags,
-  });
-  switch (model) {
-    case 'smooth':
-      return face(complex(1, 1), 0, []);
-    case 'hammerstad':
-    case 'groiss': {
-      const k = (model === 'hammerstad' ? hammerstad : groiss)(rq, delta);
-      return face(complex(k.factor, k.factor), 0, lossFactorFlags(model, rq, rq / delta, k));
-    }
-    case 'gradient':
-      return face(
-        gradient(rq, delta),
-        gradientPlaneShift(rq, frequency, conductivity, permittivity),
-        gradientFlags(rq, rq / delta),
-      );
-  }
+  };
 }
 
 /**
@@ -140,7 +97,11 @@ export function roughPlatedFace(
   input: Omit<RoughFaceInput, 'conductivity'>,
 ): RoughFace {
   const conductivity = (Math.PI * input.frequency * MU0) / (flat.re * flat.re);
-  const equal = roughFace(model, { ...input, conductivity });
+  return overFlatImpedance(roughFace(model, { ...input, conductivity }), flat);
+}
+
+/** The same for a face already calculated over the equal half space. */
+export function overFlatImpedance(equal: RoughFace, flat: Complex): RoughFace {
   const added = (equal.reactance - 1) * flat.re;
   return {
     ...equal,

@@ -77,11 +77,16 @@ export function tableBoxes(context: BlockContext, table: TableBlock, bodyHeight:
   const caption = captionBoxes(context, table, element);
   const setter = new LineSetter(press, set.size);
   const setRow = (cells: readonly CellText[]): SetCell[] =>
-    cells.map(({ runs, numeric, signature }, i) => {
-      const lines = setter.lines(runs, columns[i].width - 2 * padX);
-      const room = signature ? Math.max(0, signatureLines - lines.length) : 0;
+    cells.map((cell, i) => {
+      const lines = setter.lines(cell.runs, columns[i].width - 2 * padX);
+      const room = cell.signature ? Math.max(0, signatureLines - lines.length) : 0;
       const empty: Line = { pieces: [], width: 0 };
-      return { lines: [...lines, ...Array.from({ length: room }, () => empty)], numeric, signature };
+      return {
+        lines: [...lines, ...Array.from({ length: room }, () => empty)],
+        // A reason in place of a figure reads as a sentence: from the left.
+        numeric: cell.numeric && (cells === heads || lines.length <= 2),
+        signature: cell.signature,
+      };
     });
 
   const painter = new RowPainter(press, columns, set);

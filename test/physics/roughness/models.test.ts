@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { normalCdf } from '../../../src/numerics/normal.js';
 import { gradient, gradientPlaneShift, groiss, hammerstad } from '../../../src/physics/roughness/index.js';
 
 const RATIOS = [0.02, 0.05, 0.1, 0.2, 0.3, 0.5, 0.7, 1, 1.5, 2, 3, 4, 6, 8, 10, 15];
@@ -83,6 +84,33 @@ describe('gradient model', () => {
     expect(Math.abs(z.re - re)).toBeLessThan(2e-4 * z.re);
     expect(Math.abs(z.im - (im + 2 * top))).toBeLessThan(2e-3);
   });
+
+  it.each([0.3, 1.68, 4.2, 10])(
+    'is solved to 1e-6 at Rq/δ %d: plain Runge–Kutta steps in another variable agree',
+    (r) => {
+      // dz/ds = r (2j − Φ(−s) z²) from 8 Rq inside to 8 Rq outside, fourth order, fixed steps; then back to the mean plane.
+      const n = 16_000;
+      const h = 16 / n;
+      const slope = (metal: number, [a, b]: readonly number[]) => [
+        -r * metal * (a! * a! - b! * b!),
+        r * (2 - metal * 2 * a! * b!),
+      ];
+      let z = [1, 1];
+      const along = (k: number[], f: number) => [z[0]! + f * k[0]!, z[1]! + f * k[1]!];
+      for (let i = 0; i < n; i++) {
+        const s = -8 + i * h;
+        const [at, mid, next] = [normalCdf(-s), normalCdf(-s - h / 2), normalCdf(-s - h)];
+        const k1 = slope(at, z);
+        const k2 = slope(mid, along(k1, h / 2));
+        const k3 = slope(mid, along(k2, h / 2));
+        const k4 = slope(next, along(k3, h));
+        z = [0, 1].map((c) => z[c]! + (h / 6) * (k1[c]! + 2 * k2[c]! + 2 * k3[c]! + k4[c]!));
+      }
+      const found = gradient(r, 1);
+      expect(Math.abs(found.re / z[0]! - 1)).toBeLessThan(1e-6);
+      expect(Math.abs(found.im - (z[1]! - 16 * r))).toBeLessThan(1e-6 * Math.hypot(found.re, found.im));
+    },
+  );
 
   it('its electrostatic plane rises as frequency falls, and scales with Rq', () => {
     const es = (rq: number, f: number) => gradientPlaneShift(rq, f, 5.8e7, 3);

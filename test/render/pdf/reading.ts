@@ -62,7 +62,8 @@ async function readText(
       const mark = marks.at(-1) ?? 'none';
       texts.set(mark, (texts.get(mark) ?? '') + item.str + (item.hasEOL ? '\n' : ''));
     } else if (item.type === 'endMarkedContent') marks.pop();
-    else marks.push(item.tag === 'Artifact' ? 'artifact' : item.id);
+    // The package's types leave the tag out.
+    else marks.push((item as { tag?: string }).tag === 'Artifact' ? 'artifact' : item.id);
   }
   const text = contentIds([structure]).map((id) => texts.get(id) ?? '');
   return { text: text.join(''), artifacts: texts.get('artifact') ?? '' };
