@@ -1,15 +1,13 @@
 import { dirname, join } from 'node:path';
 import { visible } from '../quantity/index.js';
 import type { Disk } from './disk.js';
+import type { Files } from './files.js';
 import { takeLock } from './lock.js';
 import { OutputError, onDisk } from './output-error.js';
 import { isFolderName, isPlainPath } from './paths.js';
 import { isReleased, type ReadRevision, releasedChanges } from './released.js';
 import { type RevisionSummary, readSummary, revisionFile, sortSummaries, summaryText } from './revision.js';
 import { attempt, recoverFrom, swapAll, unfinished } from './swap.js';
-
-/** Path, with forward slashes → content. */
-export type Files = ReadonlyMap<string, Uint8Array | string>;
 
 /** Whether a revision was written, or lies there as it was released. */
 export type Publication = 'written' | 'left as released';

@@ -1,6 +1,6 @@
 import { changesBetween } from '../dossier/changes.js';
 import { type RevisionData, readRevisionData } from '../dossier/previous.js';
-import type { Files } from './output.js';
+import type { Files } from './files.js';
 import { type RevisionSummary, readSummary, revisionFile } from './revision.js';
 
 /** Reads a file of an existing revision by its path below the folder; undefined where there is none. */

@@ -98,6 +98,8 @@ async function pageView(
     status: page.titleBlock.documentStatus,
     documentType: page.titleBlock.documentType,
     kindName: kindNames[page.kind],
+    // The same dossier on paper; other pages have no sheet of their own.
+    paper: page.kind === 'dossier' ? relativeLink(path, `pdf/${page.id.replace(/^board\//, '')}.pdf`) : '',
     style: relativeLink(path, 'style.css'),
     home: relativeLink(path, pagePath('overview')),
     marking: page.marking ?? '',

@@ -2,10 +2,10 @@
  * Where pages lie and how they link. Page ids are made by the dossier from checked slugs; what is not such an id is a
  * fault of ours and stops the build rather than becoming a path or a link.
  */
-const slug = /^[A-Za-z0-9]+(?:(?:--|[-_.])?[A-Za-z0-9]+)*$/;
+const slug = /^[A-Za-z0-9]+(?:(?:--|[-_.])[A-Za-z0-9]+)*$/;
 
 /** Ids of chapters and blocks; the double underscore is kept for ids that pages derive from them. */
-const elementId = /^[A-Za-z][A-Za-z0-9]*(?:[-_]?[A-Za-z0-9]+)*$/;
+const elementId = /^[A-Za-z][A-Za-z0-9]*(?:[-_][A-Za-z0-9]+)*$/;
 
 export function checkElementId(id: string): string {
   if (!elementId.test(id)) throw new Error(`not a safe element id: ${JSON.stringify(id)}`);

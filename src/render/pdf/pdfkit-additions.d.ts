@@ -38,7 +38,7 @@ declare namespace PDFKit {
     /** Writes the claims of conformance. */
     endSubset(): void;
     /** The font in use; `font` is the parsed file. */
-    _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean } };
+    _font: { readonly font: { hasGlyphForCodePoint(code: number): boolean; _tables: unknown } };
     /** Writes the descriptive part of the XMP packet. */
     _addInfo(): void;
   }

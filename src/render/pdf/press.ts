@@ -14,6 +14,12 @@ const facePaths: Readonly<Record<Face, string>> = {
   mono: createRequire(import.meta.url).resolve('dejavu-fonts-ttf/ttf/DejaVuSansMono.ttf'),
 };
 
+/**
+ * Tables of the font files as they were decoded before, by path. Only these are shared between documents: the glyphs of
+ * an opened font note the text that they were first made for, and would carry it from one document into the next.
+ */
+const decodedTables = new Map<string, unknown>();
+
 export type Element = PDFKit.PDFStructureElement;
 /** Text of one face and one direction of writing. */
 export interface Glyphs {
@@ -53,6 +59,12 @@ export class Press {
       info,
     });
     claimAccessibility(this.doc);
+    for (const path of Object.values(facePaths)) {
+      const { font } = this.doc.font(path)._font;
+      const known = decodedTables.get(path);
+      if (known === undefined) decodedTables.set(path, font._tables);
+      else font._tables = known;
+    }
     this.doc.outline.options = { ...this.doc.outline.options, expanded: true };
   }
 

@@ -1,0 +1,2 @@
+/** Path, with forward slashes → content. */
+export type Files = ReadonlyMap<string, Uint8Array | string>;
