@@ -44,6 +44,23 @@ function failOn(logger: CollectingLogger): void {
   if (logger.messages.length > 0) throw new Error(`chart: ${logger.messages.join('; ')}`);
 }
 
+/** Charts stand on a page and in a PDF: the second time the compiled chart is at hand. As many as a large pack has. */
+const compiledCharts = new Map<string, ReturnType<typeof vega.parse>>();
+const CHARTS_KEPT = 256;
+
+function compiledChart(spec: VegaLiteSpec, logger: CollectingLogger): ReturnType<typeof vega.parse> {
+  const key = JSON.stringify(spec);
+  let chart = compiledCharts.get(key);
+  if (!chart) {
+    const compiled = compile(spec, { logger }).spec;
+    failOn(logger);
+    chart = vega.parse(compiled);
+    if (compiledCharts.size >= CHARTS_KEPT) compiledCharts.clear();
+    compiledCharts.set(key, chart);
+  }
+  return chart;
+}
+
 /**
  * A view that has run and can be painted: with `toSVG`, or by any painter that reads its scenegraph.
  * The caller ends it with `finalize()`.
@@ -52,9 +69,7 @@ function failOn(logger: CollectingLogger): void {
  */
 export async function prepareView(spec: VegaLiteSpec): Promise<View> {
   const logger = new CollectingLogger();
-  const compiled = compile(spec, { logger }).spec;
-  failOn(logger);
-  const view = new vega.View(vega.parse(compiled), { renderer: 'none', logger });
+  const view = new vega.View(compiledChart(spec, logger), { renderer: 'none', logger });
   await view.runAsync();
   failOn(logger);
   return view;
