@@ -326,7 +326,7 @@ const columns: readonly Method[] = [
       'Potentials of magnetic line currents on the slab, surface wave included, as Sommerfeld integrals tabulated over distance; admittance of every pair of edges by line integrals.',
     source:
       'D. M. Pozar, IEEE Trans. Antennas Propag. 30(6), 1982; J. R. Mosig and F. E. Gardiol, 1982 and 1985; K. A. Michalski and J. R. Mosig, 1997',
-    range: 'Infinite slab and ground, no cover. Coupling between columns comes out 1.6 to 2.8 dB too strong',
+    range: 'Infinite slab and ground, no cover. Coupling between columns comes out 1 to 4 dB too strong',
   },
   {
     id: 'step-reactance',

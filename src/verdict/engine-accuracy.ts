@@ -32,7 +32,7 @@ const FULL_WAVE = 'own comparison of the network with independent full-wave solu
 
 /** Largest |ΔS11| found on columns is 0.12, after all five corrections 0.04 to 0.12; 0.10 is used. */
 export const REFLECTION_ERROR = 0.1;
-/** Two neighbours of about 0.05 each, their coupling overstated by up to 2.8 dB: 2 × 0.05 × 0.38, added to the passive figure. */
+/** Two neighbours of about 0.06 each as the network has them, overstated by up to 4 dB: 2 × 0.06 × 0.37, added to the passive figure. */
 export const ACTIVE_REFLECTION_ERROR = 0.14;
 /** Beam direction and pattern edges, rad. */
 export const DIRECTION_ERROR = (0.5 * Math.PI) / 180;
@@ -79,7 +79,7 @@ export const ENGINE_ACCURACY: readonly EngineAccuracy[] = [
     statement: '±0.14 as a complex number, turned into dB at the value found',
     ground: 'argued',
     source:
-      'passive figure of 0.10 plus 0.04: two neighbours coupled by about 0.05 each, the network overstating that by up to 2.8 dB',
+      'passive figure of 0.10 plus 0.04: two neighbours coupled by about 0.06 each, the network overstating that by up to 4 dB',
     spread: (value) => reflectionSpread(value, ACTIVE_REFLECTION_ERROR),
   },
   {

@@ -5,7 +5,7 @@
  * Microstrip sections with loss by face; step reactances; covered edges; open ends; slab kernel with its surface wave.
  * Compared with independent full-wave solutions of columns: reflection within 0.04 to 0.12 (complex), beam direction
  * 0.3 to 0.6°, sidelobes 0.35 to 0.65 dB (uniform) and 1.7 dB (tapered). Limits: infinite slab and ground, no cover
- * layer, coupling between columns overstated by 1.6 to 2.8 dB, dielectric loss of the fringing fields in the lines only.
+ * layer, coupling between columns overstated by 1 to 4 dB, dielectric loss of the fringing fields in the lines only.
  */
 import { abs2, add, type Complex, complex, div, inverse, mul, neg, scale, sub, ZERO } from '../../numerics/complex.js';
 import { complexMatrix, factorise, solveInPlace } from '../../numerics/complex-lu.js';
