@@ -1,8 +1,9 @@
-import type { ArrayDrawing, DrawingData, StackUpDrawing } from '../dossier/document.js';
+import type { ArrayDrawing, DrawingData, StackUpDrawing, ToothDrawing } from '../dossier/document.js';
 import { arrayShapes } from './array.js';
 import type { Drawing } from './shapes.js';
 import { stackUpShapes } from './stack-up.js';
 import { theme as quiet, type Theme } from './theme.js';
+import { toothShapes } from './tooth.js';
 
 /** Words for those who cannot see the picture; the page gives its own. */
 export interface Words {
@@ -26,6 +27,21 @@ export function drawArray(
   return arrayShapes(data, theme, words.title, words.desc);
 }
 
+export function drawTooth(
+  data: ToothDrawing,
+  words: Words = { title: 'Tooth', desc: data.faces.map((face) => `${face.label}: ${face.note}`).join('; ') },
+  theme: Theme = quiet,
+): Drawing {
+  return toothShapes(data, theme, words.title, words.desc);
+}
+
 export function drawing(data: DrawingData, words?: Words, theme: Theme = quiet): Drawing {
-  return data.drawing === 'stack-up' ? drawStackUp(data, words, theme) : drawArray(data, words, theme);
+  switch (data.drawing) {
+    case 'stack-up':
+      return drawStackUp(data, words, theme);
+    case 'array':
+      return drawArray(data, words, theme);
+    case 'tooth':
+      return drawTooth(data, words, theme);
+  }
 }

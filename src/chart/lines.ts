@@ -21,7 +21,7 @@ import { alongLine, type Box, choosePlace, shorten } from './labels.js';
 import { fitDomain, niceStep } from './scale.js';
 import type { LineStyle, Theme } from './theme.js';
 
-/** Lines over a common axis, with the spread between models as a band, limits and vertical marks. */
+/** Lines over a common axis, with a shaded band between its edges, limits and vertical marks. */
 export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
   const xType = chart.xScale ?? 'linear';
   const yType = chart.yScale ?? 'linear';
@@ -53,16 +53,23 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
   const pixels: (readonly [number, number])[] = [];
   const curves = chart.series.map((series) => {
     const style = series.emphasis ? theme.emphasis : styles[next++ % styles.length];
-    const pieces = clipLine(series.points, xDomain, yDomain);
-    const last = pieces.at(-1)?.at(-1);
+    const { plain, stuck } = splitCurve(series, xDomain, yDomain);
+    const dotted: LineStyle = { ...style, dash: theme.saturated };
+    const last = [...plain, ...stuck].at(-1)?.at(-1);
     ends.push({
       text: series.label,
       at: last === undefined ? frame.height : frame.y.toPixel(last[1]),
-      style,
+      style: stuck.length > 0 && plain.length === 0 ? dotted : style,
       bold: series.emphasis === true,
     });
-    for (const piece of pieces) pixels.push(...alongLine(toPixels(frame, piece)));
-    return { layer: polylines(pieces, style), emphasis: series.emphasis === true };
+    for (const piece of [...plain, ...stuck]) pixels.push(...alongLine(toPixels(frame, piece)));
+    return {
+      layers: [
+        ...(plain.length === 0 && stuck.length > 0 ? [] : [polylines(plain, style)]),
+        ...(stuck.length === 0 ? [] : [polylines(stuck, dotted)]),
+      ],
+      emphasis: series.emphasis === true,
+    };
   });
   const band = chart.band === undefined ? [] : bandLayer(chart.band.points, xDomain, yDomain, theme);
   if (chart.band !== undefined) {
@@ -103,12 +110,24 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
       ...band,
       ...flagLayers(frame),
       ...limits,
-      ...curves.filter((curve) => !curve.emphasis).map((curve) => curve.layer),
-      ...curves.filter((curve) => curve.emphasis).map((curve) => curve.layer),
+      ...curves.filter((curve) => !curve.emphasis).flatMap((curve) => curve.layers),
+      ...curves.filter((curve) => curve.emphasis).flatMap((curve) => curve.layers),
       ...endLabels(frame, ends),
     ],
     { x: xStep, y: yStep },
   );
+}
+
+/** The part of a curve whose model still tells something, and the part from its ceiling on. */
+function splitCurve(
+  { points, saturatedFrom }: LinesChart['series'][number],
+  [x0, x1]: readonly [number, number],
+  yDomain: readonly [number, number],
+) {
+  if (saturatedFrom === undefined || saturatedFrom > x1)
+    return { plain: clipLine(points, [x0, x1], yDomain), stuck: [] };
+  const stuck = clipLine(points, [Math.max(x0, saturatedFrom), x1], yDomain);
+  return { plain: saturatedFrom <= x0 ? [] : clipLine(points, [x0, saturatedFrom], yDomain), stuck };
 }
 
 function domains(chart: LinesChart, xType: 'linear' | 'log', yType: 'linear' | 'log') {
@@ -138,15 +157,22 @@ function bandLayer(
   theme: Theme,
 ): Layer[] {
   const clamp = (y: number) => Math.max(y0, Math.min(y1, y));
+  const shown = points.filter(([x, low, high]) => x >= x0 && x <= x1 && Number.isFinite(low) && Number.isFinite(high));
+  // A pale ground alone would not stand out from the paper: its edges are drawn.
+  const edge: LineStyle = { color: theme.figure.accent, dash: [], width: 0.6 };
+  const edges = [1, 2].flatMap((side) =>
+    clipLine(
+      shown.map((p) => [p[0], p[side]] as const),
+      [x0, x1],
+      [y0, y1],
+    ),
+  );
   return [
     {
-      data: {
-        values: points
-          .filter(([x, low, high]) => x >= x0 && x <= x1 && Number.isFinite(low) && Number.isFinite(high))
-          .map(([x, low, high]) => ({ x, y: clamp(low), y2: clamp(high) })),
-      },
+      data: { values: shown.map(([x, low, high]) => ({ x, y: clamp(low), y2: clamp(high) })) },
       mark: { type: 'area', color: theme.figure.band, opacity: 1, line: false },
       encoding: { y2: { field: 'y2' } },
     },
+    ...(edges.length === 0 ? [] : [polylines(edges, edge)]),
   ];
 }

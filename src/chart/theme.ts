@@ -44,6 +44,8 @@ export interface Theme {
   /** In the order in which series take them; past the end they repeat. */
   readonly series: readonly LineStyle[];
   readonly emphasis: LineStyle;
+  /** Dots are kept for the part of a curve where its model is saturated; no series has them. */
+  readonly saturated: readonly number[];
   /** First name is the font whose advance widths charts are laid out with. */
   readonly chartFont: string;
   readonly chartFontSize: number;
@@ -98,13 +100,18 @@ export const theme: Theme = {
   series: [
     { color: '#1c2126', dash: [], width: 1.5 },
     { color: '#8a4216', dash: [7, 3], width: 1.5 },
-    { color: '#48708c', dash: [2, 2], width: 1.7 },
+    { color: '#48708c', dash: [10, 2], width: 1.6 },
     { color: '#545b62', dash: [8, 3, 2, 3], width: 1.4 },
     { color: '#b06a36', dash: [4, 2], width: 1.4 },
     { color: '#2f5570', dash: [10, 3, 2, 3, 2, 3], width: 1.4 },
     { color: '#6b6f74', dash: [12, 4], width: 1.3 },
-    { color: '#76797d', dash: [1, 3], width: 1.7 },
+    { color: '#76797d', dash: [3, 2, 3, 5], width: 1.5 },
+    { color: '#1c2126', dash: [14, 3, 2, 3], width: 1.3 },
+    { color: '#8a4216', dash: [3, 3, 9, 3], width: 1.3 },
+    { color: '#48708c', dash: [16, 5], width: 1.3 },
+    { color: '#545b62', dash: [5, 2, 1, 2, 1, 2], width: 1.3 },
   ],
+  saturated: [1.5, 4],
   emphasis: { color: '#8a4216', dash: [], width: 2.2 },
   chartFont: "'DejaVu Sans', Verdana, 'Bitstream Vera Sans', sans-serif",
   chartFontSize: 11,

@@ -10,7 +10,7 @@ import {
   packData,
   packPage,
 } from '../dossier/index.js';
-import { allChecks, methods, runChecks } from '../evidence/index.js';
+import { accuracyTable, allChecks, methods, runChecks } from '../evidence/index.js';
 import { audienceOf, loadPack, type PackFiles, type Problem, packFor } from '../manifest/index.js';
 import type { Pack } from '../manifest/model.js';
 import {
@@ -93,9 +93,10 @@ export async function buildPack(options: BuildOptions, effects: BuildEffects): P
     const procurement = await studyProcurement(pack, studies, verdicts, effects, enter);
     enter('checking the engine against published values');
     const evidence = runChecks(allChecks);
+    const accuracy = accuracyTable();
     enter('composing the pages');
     const { programVersion } = options;
-    const parts = { pack, studies, verdicts, evidence, methods, programVersion, ...found, procurement };
+    const parts = { pack, studies, verdicts, evidence, methods, accuracy, programVersion, ...found, procurement };
     const files = await drawPack(parts, effects, enter);
     enter('publishing');
     // A hash over files with hidden entries would confirm a guess at them.

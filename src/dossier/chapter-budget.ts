@@ -5,7 +5,7 @@ import type { Chapter } from './document.js';
 import { gainBudget } from './gain-budget.js';
 import { celsius, GAP, gigahertz } from './values.js';
 
-export const NO_RESULTS = 'Nothing was computed for this board; the reason stands under Verdict.';
+export const NO_RESULTS = 'Not evaluated for this board; the reason stands under Verdict.';
 
 const levelText = (value: number): string => `${formatNumber(value, 2)}${GAP}dBi`;
 const changeText = (value: number): string => `${formatNumber(value, 2, { plus: true })}${GAP}dB`;

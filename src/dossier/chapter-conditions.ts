@@ -1,6 +1,6 @@
 import { quantityTitle } from '../verdict/index.js';
 import { cell, chapter, facts, number, plainTable, prose } from './blocks.js';
-import { type BoardContext, bandPoints, type Judged } from './context.js';
+import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
 import { bandText, celsius, changePair, count, temperatureText } from './values.js';
@@ -26,7 +26,7 @@ function toleranceTables({ board, study, judged }: BoardContext): readonly Block
   return groups.map((group, n) =>
     plainTable(
       `tolerances-${n + 1}`,
-      'Change of the worst value at the lower / upper limit of each tolerance, nominal roughness model',
+      'Change of the worst value at the lower / upper limit of each tolerance, other figures nominal',
       [
         { title: 'Tolerance', width: 1.6 },
         { title: 'Range', width: 1.2 },
@@ -46,8 +46,9 @@ function toleranceTables({ board, study, judged }: BoardContext): readonly Block
 
 export function conditionsChapter(context: BoardContext): Chapter {
   const { board, study } = context;
-  const points = bandPoints(context);
-  const temperatures = [...new Set(study.nominal.points.map((p) => p.temperatureC))];
+  const grid = study.nominal.points.length === 0 ? study.nominal.line : study.nominal.points;
+  const temperatures = [...new Set(grid.map((p) => p.temperatureC))];
+  const frequencies = new Set(grid.map((p) => p.frequency)).size;
   return chapter(
     'conditions',
     'Conditions',
@@ -56,7 +57,9 @@ export function conditionsChapter(context: BoardContext): Chapter {
       ['Operating band', bandText(board.band)],
       [
         'Frequencies evaluated',
-        points === undefined ? 'none' : count(points.nominal.length, 'frequency', 'frequencies'),
+        frequencies === 0
+          ? 'none'
+          : `${count(frequencies, 'frequency', 'frequencies')}${study.nominal.points.length === 0 ? ', of the feed line only' : ''}`,
       ],
       ['Temperature range', temperatureText(board.temperature)],
       ['Temperatures evaluated', temperatures.length === 0 ? 'none' : temperatures.map(celsius).join(', ')],

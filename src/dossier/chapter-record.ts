@@ -5,6 +5,7 @@ import type { BoardContext, PackInput } from './context.js';
 import type { Block, Chapter } from './document.js';
 import { lineageBlocks } from './lineage.js';
 import { DEFINITIONS, link } from './links.js';
+import { choiceText } from './model-words.js';
 import { CAUTIONS } from './statements.js';
 import { powerAbove } from './values.js';
 
@@ -98,7 +99,7 @@ export function inputsChapter(context: BoardContext): Chapter {
       ['Board file', { code: board.file }],
       ['Based on', board.basedOn.length === 0 ? 'no other board' : board.basedOn.join(', which is based on ')],
       ['Requirement set', `${requirements.title}: `, { code: requirements.file }],
-      ['Nominal roughness model', analysis.roughnessModel],
+      ['Nominal figures of rough copper', choiceText(analysis.roughnessModel)],
       ['Largest frequency step', `${formatNumber(analysis.frequencyStep / 1e6, 0)} MHz`],
       ['Program', `boardcase ${input.programVersion}`],
       ['Hash of the inputs of these results', { code: study.hash }],

@@ -1,14 +1,14 @@
 import { quantityTitle } from '../verdict/index.js';
 import { cell, chapter, number, prose, table } from './blocks.js';
-import { modelTitle } from './chapter-copper.js';
 import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
 import { DEFINITIONS, EVIDENCE, link } from './links.js';
+import { sideTitle } from './model-words.js';
 import { changeText, marginText, valueText } from './values.js';
 
 function partTable({ board, study }: BoardContext, { requirement, verdict }: Judged): Block {
-  const { unit, parts, models, adverse = 0, favourable = 0, margin = 0 } = verdict;
+  const { unit, parts, sides, adverse = 0, favourable = 0, margin = 0 } = verdict;
   const against = (value: number): Cell => number(changeText(-value, unit));
   const forIt = (value: number): Cell => number(changeText(value, unit));
   const detailOf = (id: string, detail: string): string => {
@@ -17,7 +17,7 @@ function partTable({ board, study }: BoardContext, { requirement, verdict }: Jud
     const shared = study.tolerances.filter((t) => t.label === tolerance.label).length > 1;
     return `${figureTextByPath(board, tolerance.figure)}${shared ? ` (${tolerance.figure.path})` : ''}`;
   };
-  const byModel = models.map((m) => `${modelTitle(m.model)} ${valueText(m.value, unit)}`).join(', ');
+  const bySide = sides.map((s) => `${sideTitle(s.side).toLowerCase()} ${valueText(s.value, unit)}`).join(', ');
   return table(
     `uncertainty-${requirement.id}`,
     `${requirement.id}, ${quantityTitle(requirement)}: margin ${marginText(margin, unit)}, parts of its uncertainty`,
@@ -27,7 +27,11 @@ function partTable({ board, study }: BoardContext, { requirement, verdict }: Jud
         cell(part.label),
         against(part.adverse),
         forIt(part.favourable),
-        cell(part.kind === 'roughness' ? `worst value with each model: ${byModel}` : detailOf(part.id, part.detail)),
+        cell(
+          part.kind === 'roughness'
+            ? `worst value under each estimate of the copper’s texture: ${bySide}`
+            : detailOf(part.id, part.detail),
+        ),
       ]),
       [
         cell({ strong: 'Together' }),
@@ -45,7 +49,7 @@ export function uncertaintyChapter(context: BoardContext): Chapter {
     'uncertainty',
     'Uncertainty',
     prose(
-      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread over the roughness models is added linearly, because nobody knows which model is right for this copper. Every tolerance is moved alone to both its limits under every roughness model, and its largest effect counts. The rule stands under ',
+      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread from the low to the high estimate of the copper’s texture is added linearly, because it is no random error. Every tolerance is moved alone to both its limits under every estimate, and its largest effect counts. The rule stands under ',
       link('Definitions', DEFINITIONS, 'uncertainty-rule'),
       ', the engine accuracy with its sources under ',
       link('Evidence', EVIDENCE, 'engine-accuracy'),

@@ -155,7 +155,7 @@ export function verdictChapter(context: BoardContext): Chapter {
       ['Margin', 'distance of the worst value to its limit, positive inside'],
       [
         'Uncertainty',
-        'how much smaller and how much larger the margin may be: engine accuracy, every declared tolerance and the spread over the roughness models; parts in ',
+        'how much smaller and how much larger the margin may be: engine accuracy, every declared tolerance and the band of the copper’s texture; parts in ',
         link('Uncertainty', boardPage(board.id), 'uncertainty'),
       ],
       [

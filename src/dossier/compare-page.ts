@@ -3,6 +3,7 @@ import { quantityOf } from '../verdict/index.js';
 import { cell, chapter, DASH, figureBlock, list, number, plainTable, prose, table } from './blocks.js';
 import { cautionsChapter } from './chapter-record.js';
 import { marginCell, statusInline, valueCell } from './chapter-verdict.js';
+import { copperComparison } from './compare-copper.js';
 import { type BoardContext, bandPoints, type Judged, judgedOn, type PackInput, page } from './context.js';
 import { differencesBetween } from './differences.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
@@ -227,6 +228,7 @@ export function comparisonPage(input: PackInput, pair: Pair): DocumentPage {
       fieldsChapter(pair),
       verdictsChapter(pair),
       budgetChapter(pair),
+      ...copperComparison(pair),
       ...(curves.length === 0 ? [] : [chapter('curves', 'Over frequency', ...curves)]),
       cautionsChapter(),
     ],

@@ -1,4 +1,4 @@
-import type { EvidenceResult, Method } from '../evidence/index.js';
+import type { Accuracy, EvidenceResult, Method } from '../evidence/index.js';
 import type { Board, Pack, Requirement } from '../manifest/model.js';
 import type { BoardStudy, PointResult } from '../study/results.js';
 import type { BoardVerdict, ProcurementResults, RequirementVerdict } from '../verdict/index.js';
@@ -13,6 +13,8 @@ export interface PackInput {
   readonly verdicts: readonly BoardVerdict[];
   readonly evidence: readonly EvidenceResult[];
   readonly methods: readonly Method[];
+  /** How close the solvers come to what is better than they are. */
+  readonly accuracy: readonly Accuracy[];
   readonly programVersion: string;
   /** Data of the revision before this one, where the pack names one. */
   readonly previous?: PreviousData;

@@ -11,6 +11,9 @@ const text = z.string();
 const place = z.strictObject({ frequencyHz: z.number(), temperatureC: z.number() });
 const status = z.enum(['meets', 'undecided', 'misses', 'not evaluated', 'open until measured']);
 
+/** Low, middle and high estimate of a rough face for what is known of its texture. */
+const side = z.enum(['low', 'middle', 'high']);
+
 const part = z.strictObject({
   id: text,
   kind: z.enum(['engine', 'roughness', 'tolerance']),
@@ -33,7 +36,9 @@ const verdict = z.strictObject({
   adverse: value,
   favourable: value,
   parts: z.array(part),
-  byModel: z.array(z.strictObject({ model: text, value: z.number(), margin: z.number() })),
+  bySide: z
+    .array(z.strictObject({ side, value: z.number(), margin: z.number() }))
+    .describe('worst value and margin under each estimate of the roughness band'),
   reason: text.optional(),
 });
 
@@ -179,15 +184,68 @@ const point = z.strictObject({
   referenceImpedanceOhm: z.array(value),
   elevation: cutFigures,
   azimuth: cutFigures,
-  lineLossDbPerM: value,
-  lineEffectivePermittivity: value,
   powerResidual: value.describe('power of ten above the residual of the circuit, over the input power'),
   farFieldClosure: value,
+});
+
+const linePoint = z.strictObject({
+  frequencyHz: z.number(),
+  temperatureC: z.number(),
+  lossDbPerM: value,
+  effectivePermittivity: value,
+  impedanceOhm: value,
 });
 
 const curves = z.strictObject({
   x: z.array(z.number()),
   curves: z.array(z.strictObject({ model: text, y: z.array(value) })),
+  band: z.strictObject({ low: z.array(value), middle: z.array(value), high: z.array(value) }),
+});
+
+const faceFigures = {
+  lossFactor: value,
+  reactance: value.describe('in units of the smooth surface resistance, to the mean plane'),
+  planeShiftM: value,
+  slowWaveLengthM: value,
+};
+
+const face = z.strictObject({
+  face: text,
+  place: z.enum(['underside', 'ground', 'outer']),
+  rqM: value,
+  skinDepthM: value,
+  known: text.describe('what is known of the texture'),
+  band: z.array(z.strictObject({ side, ...faceFigures, reason: text })),
+  models: z.array(z.strictObject({ model: text, ...faceFigures, outOfRange: z.array(text) })),
+  narrowing: z
+    .array(z.strictObject({ quantity: text, measurement: text, spreadNow: value, wouldNarrowTo: value }))
+    .describe('measurements that would narrow the band of the loss factor, the most useful first'),
+  saturation: z.array(z.strictObject({ model: text, text })),
+});
+
+const lossByFace = z.strictObject({
+  side,
+  faces: z.array(
+    z.strictObject({
+      face: z.enum(['underside', 'top', 'edges', 'ground']),
+      smoothDbPerM: value,
+      finishDbPerM: value,
+      textureDbPerM: value,
+    }),
+  ),
+  dielectricDbPerM: value,
+  totalDbPerM: value,
+  effectivePermittivity: value,
+  impedanceOhm: value,
+});
+
+const slowing = z.strictObject({
+  side,
+  lineRise: value.describe('relative rise of the effective permittivity of the feed line'),
+  patchRise: value,
+  resonanceShiftHz: value,
+  tiltShiftRad: value,
+  applied: z.boolean().describe('false where the permittivity is a design value, which holds the effect already'),
 });
 
 export const boardDataSchema = z
@@ -207,21 +265,19 @@ export const boardDataSchema = z
       })
       .optional()
       .describe('where the results are of a retuned layout: passive reflection of the worst column at the band centre'),
-    nominal: z.array(point),
-    models: z.array(z.strictObject({ model: text, points: z.array(point) })),
+    nominalRoughness: text.describe('band: the middle estimate; otherwise the model named in the analysis'),
+    nominal: z.array(point).describe('empty where the columns were not evaluated'),
+    nominalLine: z.array(linePoint).describe('feed line of the first column'),
+    sides: z.array(z.strictObject({ side, points: z.array(point), line: z.array(linePoint) })),
     cuts: z
       .array(z.strictObject({ frequencyHz: z.number(), temperatureC: z.number(), elevation: cut, azimuth: cut }))
       .describe('at the band edges and the band centre, nominal temperature'),
     lineLossDbPerM: curves.describe('over Hz'),
     lossFactor: curves.describe('over Rq in m'),
-    faces: z.array(
-      z.strictObject({
-        face: text,
-        rqM: value,
-        skinDepthM: value,
-        models: z.array(z.strictObject({ model: text, lossFactor: value, reactance: value, planeShiftM: value })),
-      }),
-    ),
+    effectivePermittivity: curves.describe('of the feed line, over Rq in m of both faces to the laminate'),
+    lineLossByFace: z.array(lossByFace).describe('at the band centre and nominal temperature'),
+    slowWave: z.array(slowing).describe('against smooth faces, at the band centre'),
+    faces: z.array(face),
     flags: z.array(z.strictObject({ code: text, severity: text, model: text, text })),
     notEvaluated: z.array(z.strictObject({ quantities: z.array(text), reason: text })),
     losslessClosure: value,

@@ -1,6 +1,16 @@
 import type { Board, Requirement } from '../manifest/model.js';
 import type { Complex } from '../numerics/complex.js';
-import type { Cut, CutFigures, ModelCurves, PointResult } from '../study/results.js';
+import type {
+  Cut,
+  CutFigures,
+  FaceFigures,
+  FaceState,
+  LineLossByFace,
+  LinePoint,
+  ModelCurves,
+  PointResult,
+  SlowWave,
+} from '../study/results.js';
 import { type BoardVerdict, quantityOf, type RequirementVerdict } from '../verdict/index.js';
 import { type BoardContext, bandPoints, boardContexts, markingOf, noticesOf, type PackInput } from './context.js';
 import {
@@ -28,9 +38,69 @@ const figuresData = (f: CutFigures) => ({
   sidelobeDb: maybe(f.sidelobeDb),
 });
 const cutData = (c: Cut) => ({ angleRad: Array.from(c.angle, num), gainDbi: Array.from(c.gainDbi, maybe) });
-const curvesData = ({ x, curves }: ModelCurves) => ({
+const curvesData = ({ x, curves, band }: ModelCurves) => ({
   x: x.map(num),
   curves: curves.map(({ model, y }) => ({ model, y: y.map(maybe) })),
+  band: { low: band.low.map(maybe), middle: band.middle.map(maybe), high: band.high.map(maybe) },
+});
+
+const linePointData = (p: LinePoint) => ({
+  frequencyHz: num(p.frequency),
+  temperatureC: num(p.temperatureC),
+  lossDbPerM: maybe(p.lossDbPerM),
+  effectivePermittivity: maybe(p.effectivePermittivity),
+  impedanceOhm: maybe(p.impedance),
+});
+
+const faceFiguresData = (f: FaceFigures) => ({
+  lossFactor: maybe(f.lossFactor),
+  reactance: maybe(f.reactance),
+  planeShiftM: maybe(f.planeShift),
+  slowWaveLengthM: maybe(f.slowWaveLength),
+});
+
+const faceData = ({ face, place, rq, skinDepth, known, band, models, narrowing, saturation }: FaceState) => ({
+  face,
+  place,
+  rqM: maybe(rq),
+  skinDepthM: maybe(skinDepth),
+  known,
+  band: band.map((entry) => ({ side: entry.side, ...faceFiguresData(entry), reason: entry.reason })),
+  models: models.map((entry) => ({
+    model: entry.model,
+    ...faceFiguresData(entry),
+    outOfRange: entry.flags.filter(({ severity }) => severity === 'outside').map(({ text }) => text),
+  })),
+  narrowing: narrowing.map(({ quantity, measurement, spreadNow, wouldNarrowTo }) => ({
+    quantity,
+    measurement,
+    spreadNow: maybe(spreadNow),
+    wouldNarrowTo: maybe(wouldNarrowTo),
+  })),
+  saturation: saturation.map(({ model, text }) => ({ model, text })),
+});
+
+const lossByFaceData = ({ side, faces, dielectric, total, effectivePermittivity, impedance }: LineLossByFace) => ({
+  side,
+  faces: faces.map(({ face, smooth, finish, texture }) => ({
+    face,
+    smoothDbPerM: maybe(smooth),
+    finishDbPerM: maybe(finish),
+    textureDbPerM: maybe(texture),
+  })),
+  dielectricDbPerM: maybe(dielectric),
+  totalDbPerM: maybe(total),
+  effectivePermittivity: maybe(effectivePermittivity),
+  impedanceOhm: maybe(impedance),
+});
+
+const slowWaveData = ({ side, lineRise, patchRise, resonanceShift, tiltShift, applied }: SlowWave) => ({
+  side,
+  lineRise: maybe(lineRise),
+  patchRise: maybe(patchRise),
+  resonanceShiftHz: maybe(resonanceShift),
+  tiltShiftRad: maybe(tiltShift),
+  applied,
 });
 
 const pointData = (p: PointResult): PointData => ({
@@ -48,8 +118,6 @@ const pointData = (p: PointResult): PointData => ({
   referenceImpedanceOhm: p.referenceImpedance.map(maybe),
   elevation: figuresData(p.elevation),
   azimuth: figuresData(p.azimuth),
-  lineLossDbPerM: maybe(p.lineLossDbPerM),
-  lineEffectivePermittivity: maybe(p.lineEffectivePermittivity),
   powerResidual: Number.isFinite(p.powerResidual) ? num(10 ** exponentAbove(p.powerResidual)) : null,
   farFieldClosure: maybe(p.farFieldClosure),
 });
@@ -75,7 +143,7 @@ const verdictData = (boardId: string, v: RequirementVerdict): VerdictData => ({
     favourable: num(favourable),
     ...(atLimits === undefined ? {} : { atLimits: { low: num(atLimits.low), high: num(atLimits.high) } }),
   })),
-  byModel: v.models.map(({ model, value, margin }) => ({ model, value: num(value), margin: num(margin) })),
+  bySide: v.sides.map(({ side, value, margin }) => ({ side, value: num(value), margin: num(margin) })),
   ...(v.reason === undefined ? {} : { reason: v.reason }),
 });
 
@@ -140,8 +208,14 @@ function boardData(context: BoardContext): BoardData {
     title: board.title,
     inputsHash: study.hash,
     ...retuningData(board),
+    nominalRoughness: input.pack.analysis.roughnessModel,
     nominal: study.nominal.points.map(pointData),
-    models: study.models.map(({ model, sweep }) => ({ model, points: sweep.points.map(pointData) })),
+    nominalLine: study.nominal.line.map(linePointData),
+    sides: study.sides.map(({ side, sweep }) => ({
+      side,
+      points: sweep.points.map(pointData),
+      line: sweep.line.map(linePointData),
+    })),
     cuts: [...new Set(chosen)].map((p) => ({
       frequencyHz: num(p.frequency),
       temperatureC: num(p.temperatureC),
@@ -150,17 +224,10 @@ function boardData(context: BoardContext): BoardData {
     })),
     lineLossDbPerM: curvesData(study.lineLoss),
     lossFactor: curvesData(study.lossFactor),
-    faces: study.faces.map(({ face, rq, skinDepth, models }) => ({
-      face,
-      rqM: maybe(rq),
-      skinDepthM: maybe(skinDepth),
-      models: models.map((m) => ({
-        model: m.model,
-        lossFactor: maybe(m.lossFactor),
-        reactance: maybe(m.reactance),
-        planeShiftM: maybe(m.planeShift),
-      })),
-    })),
+    effectivePermittivity: curvesData(study.effectivePermittivity),
+    lineLossByFace: study.lineLossByFace.map(lossByFaceData),
+    slowWave: study.slowWave.map(slowWaveData),
+    faces: study.faces.map(faceData),
     flags: study.flags.map(({ code, severity, model, text }) => ({ code, severity, model, text })),
     notEvaluated: study.notEvaluated.map(({ quantities, reason }) => ({ quantities: [...quantities], reason })),
     losslessClosure: maybe(study.losslessClosure),

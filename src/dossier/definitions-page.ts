@@ -5,6 +5,7 @@ import { cautionsChapter } from './chapter-record.js';
 import { type PackInput, page } from './context.js';
 import type { Chapter, DocumentPage } from './document.js';
 import { DEFINITIONS, EVIDENCE, link } from './links.js';
+import { MODEL_WORDS } from './model-words.js';
 import { NOT_MODELLED } from './statements.js';
 
 const gain = (): Chapter =>
@@ -97,7 +98,11 @@ const statuses = (): Chapter =>
     'Statuses',
     facts(
       'status-facts',
-      ['Meets', { status: 'meets' }, ' inside the limit with every roughness model and the whole adverse uncertainty'],
+      [
+        'Meets',
+        { status: 'meets' },
+        ' inside the limit under every estimate of the copper’s texture and with the whole adverse uncertainty',
+      ],
       [
         'Undecided',
         { status: 'undecided' },
@@ -106,7 +111,7 @@ const statuses = (): Chapter =>
       [
         'Misses',
         { status: 'misses' },
-        ' outside the limit with every roughness model and the whole favourable uncertainty',
+        ' outside the limit under every estimate of the copper’s texture and with the whole favourable uncertainty',
       ],
       ['Not evaluated', { status: 'not evaluated' }, ' no value, with the reason; never read as meets'],
       [
@@ -138,14 +143,14 @@ const uncertaintyRule = (): Chapter =>
           '.',
         ],
         [
-          'Roughness models: the worst value is found again with every model. The spread is added linearly, because it is not a random error.',
+          'Texture of the copper: the worst value is found again under the low, middle and high estimate of every face. The spread is added linearly, because it is not a random error.',
         ],
         [
           'Tolerances: each declared spread is moved alone to both its limits and the worst value found again, wherever it then lies. A change for the better at both limits counts nothing against the board.',
         ],
         ['Engine accuracy and tolerances are combined by root sum of squares, separately against and for the board.'],
         [
-          'Both bounds are built on the worst and the best value over all roughness models, so the choice of the nominal model cannot turn undecided into meets.',
+          'Both bounds are built on the worst and the best value over the three estimates, so the choice of what is called nominal cannot turn undecided into meets.',
         ],
       ],
       true,
@@ -161,13 +166,26 @@ const limits = (): Chapter =>
     'Limits of the calculation',
     caution('What is not modelled', ...NOT_MODELLED.map((line) => [line])),
     list([
-      ['A cover layer (solder mask, film) is not in the models; figures that depend on it are not evaluated.'],
+      [
+        'A cover layer (solder mask, film) is computed for lines. Patches and columns under a cover layer are not modelled; figures of them are not evaluated.',
+      ],
       ['Layers below the ground are drawn, not computed.'],
       [
-        'Rq alone fixes neither loss nor phase of rough copper; the spread between the models is shown and enters every verdict.',
+        'Rq alone fixes neither loss nor phase of rough copper; the band from low to high estimate is shown and enters every verdict. Its edges are estimates, not bounds.',
       ],
       ['Tolerances are moved one at a time; joint effects and yield are not computed.'],
     ]),
+  );
+
+const roughnessModels = (): Chapter =>
+  chapter(
+    'roughness-models',
+    'Models of rough copper',
+    prose(
+      'No model is the truth for every foil. The models stand side by side in each dossier; the band is built from what is known of the texture, by solved shapes and by the models that hold for them. ',
+      'A formula that ends at a ceiling cannot rank foils beyond it and is never used to set a limit.',
+    ),
+    facts('roughness-model-facts', ...MODEL_WORDS),
   );
 
 const words = (): Chapter =>
@@ -181,8 +199,35 @@ const words = (): Chapter =>
       ['Evidence', 'methods, their sources and ranges, and the checks run'],
       ['Binding, target', 'a binding requirement decides; a target is shown'],
       ['Basis', 'how a figure is known: guaranteed, typical, measured or estimated'],
-      ['Rq', 'root mean square height of a profile (ISO 21920)'],
+      ['Rq, Sq', 'root mean square height of a profile (ISO 21920-2), of a surface (ISO 25178-2)'],
+      ['Rz', 'maximum height of a profile (ISO 21920-2); where it is not stated, 5.5 Rq is assumed and said so'],
+      [
+        'Autocorrelation length Sal',
+        'shortest distance in which the autocorrelation of a surface falls to 0.2 (ISO 25178-2): small for fine texture',
+      ],
+      ['Correlation length', 'distance in which the autocorrelation falls to 1/e; from Sal for a Gaussian one'],
+      [
+        'Developed area ratio Sdr',
+        'how much larger the surface is than its plan (ISO 25178-2); it grows with every finer filter',
+      ],
+      ['Nodule', 'grain of the treatment of a foil, taken as one of equal balls, stacked, on a square lattice'],
+      ['Nesting index', 'cut-off of a texture filter (ISO 16610): S takes off what is finer, L what is longer'],
       ['K', 'loss of a rough face over that of a smooth one'],
+      [
+        'Band; low, middle, high',
+        'estimates of a rough face for what is known of its texture; more knowledge narrows them. They are no bounds',
+      ],
+      ['Mean plane', 'plane of a rough face with as much copper above as below; thicknesses are between mean planes'],
+      ['Electrostatic plane', 'plane at which the electric field ends on a rough face, a little above the mean plane'],
+      [
+        'Slow-wave length',
+        'depth from the electrostatic plane to where the magnetic field ends; half a skin depth when smooth',
+      ],
+      ['Saturated', 'of a formula: within 5 % of its ceiling, where it no longer tells foils apart'],
+      [
+        'In-plane permittivity',
+        'of the laminate along the board; the field at patch edges and line edges meets it, the rest the one through the thickness',
+      ],
     ),
   );
 
@@ -200,6 +245,7 @@ export function definitionsPage(input: PackInput): DocumentPage {
       quantities(),
       statuses(),
       uncertaintyRule(),
+      roughnessModels(),
       limits(),
       words(),
       cautionsChapter(),

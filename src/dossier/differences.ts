@@ -1,9 +1,9 @@
-import type { Board, Figure, FinishLayer } from '../manifest/model.js';
+import type { Board, Figure, FinishLayer, Texture } from '../manifest/model.js';
 import { type Dimension, formatSpread } from '../quantity/index.js';
 import { declarationsByPart } from '../verdict/index.js';
 import { micrometres } from './figures.js';
 import { factorText } from './retuning.js';
-import { bandText, celsius, costText, statedNumber, temperatureText } from './values.js';
+import { bandText, celsius, costText, count, gigahertz, statedNumber, temperatureText } from './values.js';
 
 interface Field {
   readonly label: string;
@@ -26,6 +26,40 @@ const layers = (finish: readonly FinishLayer[], text: (layer: FinishLayer) => st
   finish.length === 0 ? 'bare' : finish.map((layer) => `${layer.material}: ${text(layer)}`).join('; ');
 const spread = (figure: Figure, dimension: Dimension | 'number'): string => optional(figure, dimension);
 
+/** All that is known of a texture: boards may differ in nothing but what Rq cannot see. */
+function textureText({ rq, rz, correlationLength, developedAreaRatio, lay, nodule, measured }: Texture): string {
+  return [
+    `Rq ${spread(rq, 'length')}`,
+    ...(rz === undefined ? [] : [`Rz ${spread(rz, 'length')}`]),
+    correlationLength === undefined
+      ? 'no correlation length'
+      : `correlation length ${spread(correlationLength, 'length')}`,
+    developedAreaRatio === undefined ? 'no Sdr' : `Sdr ${spread(developedAreaRatio, 'ratio')}`,
+    ...(lay === undefined ? [] : [`lay ${lay}`]),
+    ...(nodule === undefined
+      ? []
+      : [
+          `nodules of radius ${spread(nodule.radius, 'length')}, pitch ${spread(nodule.pitch, 'length')}, ${count(nodule.layers, 'layer')}`,
+        ]),
+    ...(measured === undefined ? [] : [`measured: ${measured.file}`]),
+  ].join('; ');
+}
+
+/** Dispersion counts from there. */
+const takenAt = ({ provenance: { frequency } }: Figure): string =>
+  frequency === undefined ? 'not stated' : gigahertz(frequency);
+
+function waterText(board: Board): string {
+  const { water } = board.stackUp.laminate.material;
+  if (water === undefined) return 'not stated';
+  const { uptake, permittivityPerShare, lossTangentPerShare } = water;
+  return [
+    `share of mass ${spread(uptake, 'ratio')}`,
+    ...(permittivityPerShare === undefined ? [] : [`permittivity ${statedNumber(permittivityPerShare)} per share`]),
+    ...(lossTangentPerShare === undefined ? [] : [`loss tangent ${statedNumber(lossTangentPerShare)} per share`]),
+  ].join('; ');
+}
+
 /** As stated, wherever they are declared for the board; the same property of two parts once each. */
 function declaredText(board: Board): string {
   const texts = declarationsByPart(board).map(
@@ -42,6 +76,10 @@ const FIELDS: readonly Field[] = [
     text: (b) =>
       `${spread(b.stackUp.laminate.material.permittivity, 'number')} (${b.stackUp.laminate.material.permittivityKind})`,
   },
+  { label: 'Permittivity taken at', text: (b) => takenAt(b.stackUp.laminate.material.permittivity) },
+  { label: 'In-plane permittivity', text: (b) => optional(b.stackUp.laminate.material.inPlanePermittivity, 'number') },
+  { label: 'Loss tangent taken at', text: (b) => takenAt(b.stackUp.laminate.material.lossTangent) },
+  { label: 'Water taken up', text: waterText },
   { label: 'Loss tangent', text: (b) => spread(b.stackUp.laminate.material.lossTangent, 'number') },
   {
     label: 'Temperature coefficient of permittivity',
@@ -61,12 +99,11 @@ const FIELDS: readonly Field[] = [
   },
   {
     label: 'Strip, dielectric face',
-    text: (b) =>
-      `${b.stackUp.strip.dielectricFace.kind}, Rq ${spread(b.stackUp.strip.dielectricFace.texture.rq, 'length')}`,
+    text: (b) => `${b.stackUp.strip.dielectricFace.kind}, ${textureText(b.stackUp.strip.dielectricFace.texture)}`,
   },
   {
     label: 'Strip, outer face',
-    text: (b) => `${b.stackUp.strip.outerFace.kind}, Rq ${spread(b.stackUp.strip.outerFace.texture.rq, 'length')}`,
+    text: (b) => `${b.stackUp.strip.outerFace.kind}, ${textureText(b.stackUp.strip.outerFace.texture)}`,
   },
   { label: 'Finish', text: (b) => b.stackUp.strip.finish.name },
   {
@@ -94,8 +131,7 @@ const FIELDS: readonly Field[] = [
   },
   {
     label: 'Ground, dielectric face',
-    text: (b) =>
-      `${b.stackUp.ground.dielectricFace.kind}, Rq ${spread(b.stackUp.ground.dielectricFace.texture.rq, 'length')}`,
+    text: (b) => `${b.stackUp.ground.dielectricFace.kind}, ${textureText(b.stackUp.ground.dielectricFace.texture)}`,
   },
   {
     label: 'Layers below the ground',

@@ -160,9 +160,11 @@ export interface LinesChart {
   readonly series: readonly {
     readonly label: string;
     readonly emphasis?: boolean;
+    /** From here on the curve is dotted: its model has reached its ceiling and tells nothing apart. */
+    readonly saturatedFrom?: number;
     readonly points: readonly (readonly [number, number])[];
   }[];
-  /** Shaded between lower and upper: the spread between models. */
+  /** Shaded between lower and upper, with both edges drawn: the band of what is known. */
   readonly band?: { readonly label: string; readonly points: readonly (readonly [number, number, number])[] };
   readonly limits?: readonly {
     readonly label: string;
@@ -178,7 +180,26 @@ export interface LinesChart {
 
 // ---------------------------------------------------------------- drawings to scale: data, not shapes
 
-export type DrawingData = StackUpDrawing | ArrayDrawing;
+export type DrawingData = StackUpDrawing | ArrayDrawing | ToothDrawing;
+
+/** Sections through copper faces, µm, one true scale in both directions and for all faces; copper is drawn below. */
+export interface ToothDrawing {
+  readonly drawing: 'tooth';
+  readonly widthUm: number;
+  readonly faces: readonly {
+    readonly label: string;
+    /** What is drawn: measured, or a sketch from which figures. */
+    readonly note: string;
+    readonly above: 'laminate' | 'outside';
+    readonly skinDepthUm: number;
+    readonly rqUm: number;
+    readonly rz: { readonly um: number; readonly assumed: boolean };
+    /** Heights above the mean plane from the left edge on. */
+    readonly profile: { readonly intervalUm: number; readonly heightsUm: readonly number[] };
+    /** Balls by the place of their centres, x from the left edge and height above the mean plane. */
+    readonly nodules?: { readonly radiusUm: number; readonly centres: readonly (readonly [number, number])[] };
+  }[];
+}
 
 export interface StackUpDrawing {
   readonly drawing: 'stack-up';

@@ -16,10 +16,10 @@ export function stackUpDrawing(board: Board): StackUpDrawing {
       : [
           {
             label: `Cover layer: ${cover.material}`,
-            detail: `permittivity ${statedNumber(cover.permittivity.value)}, not in the models`,
+            detail: `permittivity ${statedNumber(cover.permittivity.value)}, computed for lines, not for columns`,
             thicknessUm: um(cover.thickness.value),
             material: 'cover' as const,
-            computed: false,
+            computed: true,
           },
         ];
   return {

@@ -1,6 +1,7 @@
 import type { EvidenceResult } from '../evidence/index.js';
 import { decimalsFor, formatNumber } from '../quantity/index.js';
 import { ENGINE_ACCURACY, quantityOf } from '../verdict/index.js';
+import { accuracyChapter } from './accuracy-chapter.js';
 import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
 import { cautionsChapter } from './chapter-record.js';
 import { type PackInput, page } from './context.js';
@@ -55,7 +56,7 @@ function checkTable(topic: string, checks: readonly EvidenceResult[], n: number)
 }
 
 export function evidencePage(input: PackInput): DocumentPage {
-  const { evidence, methods } = input;
+  const { evidence, methods, accuracy } = input;
   const topics = [...new Set(evidence.map((e) => e.topic))];
   const failed = evidence.filter((e) => !e.ok);
   const byHow = (how: EvidenceResult['howKnown']) => evidence.filter((e) => e.howKnown === how).length;
@@ -110,6 +111,7 @@ export function evidencePage(input: PackInput): DocumentPage {
           ),
         ),
       ),
+      accuracyChapter(accuracy),
       chapter(
         'engine-accuracy',
         'Engine accuracy',

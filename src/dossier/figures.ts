@@ -1,4 +1,4 @@
-import type { Board, Figure } from '../manifest/model.js';
+import type { Board, Figure, Texture } from '../manifest/model.js';
 import { type Dimension, formatQuantity, formatSpread } from '../quantity/index.js';
 import { bandText, gigahertz } from './values.js';
 
@@ -20,7 +20,16 @@ export function figuresOf(board: Board): readonly FigureUse[] {
       uses.push({ label, figure, dimension, dielectric });
     }
   };
+  const addTexture = (face: string, { rq, correlationLength, developedAreaRatio, rz, nodule }: Texture) => {
+    add(`Rq of the ${face}`, rq, 'length');
+    add(`Rz of the ${face}`, rz, 'length');
+    add(`Correlation length of the ${face}`, correlationLength, 'length');
+    add(`Sdr of the ${face}`, developedAreaRatio, 'ratio');
+    add(`Radius of the nodules of the ${face}`, nodule?.radius, 'length');
+    add(`Pitch of the nodules of the ${face}`, nodule?.pitch, 'length');
+  };
   add('Permittivity of the laminate', laminate.material.permittivity, 'number', true);
+  add('In-plane permittivity of the laminate', laminate.material.inPlanePermittivity, 'number', true);
   add('Loss tangent of the laminate', laminate.material.lossTangent, 'number', true);
   add(
     'Temperature coefficient of permittivity',
@@ -32,18 +41,19 @@ export function figuresOf(board: Board): readonly FigureUse[] {
     laminate.material.lossTangentTemperatureCoefficient,
     'temperature_coefficient',
   );
+  add('Water taken up by the laminate, share of mass', laminate.material.water?.uptake, 'ratio');
   add('Thickness of the laminate', laminate.thickness, 'length');
   add('Thickness of the strip', strip.thickness, 'length');
   add('Conductivity of the strip copper', strip.foil.conductivity, 'conductivity');
-  add('Rq of the strip, dielectric face', strip.dielectricFace.texture.rq, 'length');
-  add('Rq of the strip, outer face', strip.outerFace.texture.rq, 'length');
+  addTexture('strip, dielectric face', strip.dielectricFace.texture);
+  addTexture('strip, outer face', strip.outerFace.texture);
   for (const layer of strip.finish.layers) {
     add(`Thickness of ${layer.material} (finish)`, layer.thickness, 'length');
     add(`Conductivity of ${layer.material} (finish)`, layer.conductivity, 'conductivity');
   }
   add('Thickness of the ground', ground.thickness, 'length');
   add('Conductivity of the ground copper', ground.foil.conductivity, 'conductivity');
-  add('Rq of the ground, dielectric face', ground.dielectricFace.texture.rq, 'length');
+  addTexture('ground, dielectric face', ground.dielectricFace.texture);
   add('Thickness of the cover layer', cover?.thickness, 'length');
   add('Permittivity of the cover layer', cover?.permittivity, 'number', true);
   add('Loss tangent of the cover layer', cover?.lossTangent, 'number', true);
@@ -61,7 +71,7 @@ export const figureText = ({ figure, dimension }: FigureUse): string =>
 /** Text of a figure that is known by its path only, such as that of a tolerance. */
 export function figureTextByPath(board: Board, figure: Figure): string {
   const use = figuresOf(board).find((u) => u.figure.path === figure.path);
-  return figureText(use ?? { label: '', figure, dimension: 'number', dielectric: false });
+  return figureText({ ...(use ?? { label: '', dimension: 'number', dielectric: false }), figure });
 }
 
 export interface Concern {
@@ -88,7 +98,8 @@ function concernOf(use: FigureUse, board: Board): Concern | undefined {
       outsideFrequency = true;
       clauses.push(`taken at ${gigahertz(frequency)}, used at ${bandText(board.band)}`);
     }
-    if (direction === 'in-plane') clauses.push('taken in plane, used through the thickness');
+    if (direction === 'in-plane' && use.figure !== board.stackUp.laminate.material.inPlanePermittivity)
+      clauses.push('taken in plane, used through the thickness');
   }
   if (basis === 'estimated') clauses.push('estimated, without a source that stands for it');
   if (basis === 'typical') clauses.push('typical, not guaranteed');

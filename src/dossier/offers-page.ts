@@ -1,6 +1,7 @@
 import { type AskedItem, askedItems, askedWords } from '../manifest/index.js';
 import type { Board } from '../manifest/model.js';
 import type { Procurement, Recipient } from '../manifest/procurement-model.js';
+import type { RoughnessSide } from '../study/results.js';
 import {
   ALLOWANCE_REACH,
   type AllowanceOutcome,
@@ -14,7 +15,9 @@ import { caution, cell, chapter, list, number, prose, table } from './blocks.js'
 import { cautionsChapter } from './chapter-record.js';
 import { type PackInput, page } from './context.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
+import { micrometres } from './figures.js';
 import { boardPage, boardTitle, fileLink, link, OFFERS, requirementPage } from './links.js';
+import { modelTitle, sideTitle } from './model-words.js';
 import { answeredRows, answeredWords } from './offer-rows.js';
 import { freeText, inUnit, towardsNominal, unitBehind } from './supplier-limits.js';
 import { KIND_WORDS, PARAMETER_WORDS } from './supplier-words.js';
@@ -90,6 +93,7 @@ function allowanceChapter({ pack }: PackInput, procurement: Procurement, { allow
     ...(searched.length === 0
       ? [prose('No board that something is asked for has a binding, computed requirement.')]
       : searched.map((board) => allowanceTable(board, allowances.get(board.id) ?? [], items))),
+    ...ceilingCaution(searched.flatMap((board) => allowances.get(board.id) ?? [])),
     caution('How far the search goes', [
       Object.entries(ALLOWANCE_REACH)
         .map(([parameter, { words }]) => `${PARAMETER_WORDS[parameter as keyof typeof ALLOWANCE_REACH].what}: ${words}`)
@@ -99,33 +103,45 @@ function allowanceChapter({ pack }: PackInput, procurement: Procurement, { allow
   );
 }
 
+/** The model behind the nominal figures may tell no foils apart; then no limit on a texture is its word. */
+function ceilingCaution(results: readonly AllowanceResult[]): readonly Block[] {
+  const ceilings = results.flatMap(({ ceiling }) => ceiling ?? []);
+  if (ceilings.length === 0) return [];
+  const { model, from } = ceilings.reduce((a, b) => (b.from < a.from ? b : a));
+  return [
+    caution('No limit from a saturated model', [
+      `The analysis names ${modelTitle(model)}, which tells no foils apart from an Rq of ${micrometres(from)}. It was not used for any limit here: limits on textures come from the low, middle and high estimate.`,
+    ]),
+  ];
+}
+
+const SIDES: readonly RoughnessSide[] = ['low', 'middle', 'high'];
+
 function allowanceTable(board: Board, results: readonly AllowanceResult[], items: readonly AskedItem[]): Block {
-  const failing = results.flatMap(({ models }) =>
-    models.map(({ outcome }) => (outcome.kind === 'not met at nominal' ? outcome.requirementIds : undefined)),
+  const failing = results.flatMap(({ sides }) =>
+    sides.map(({ outcome }) => (outcome.kind === 'not met at nominal' ? outcome.requirementIds : undefined)),
   );
   if (failing.every((ids) => ids !== undefined)) {
     return prose(
       link(boardTitle(board), boardPage(board.id)),
       ': already not met at nominal (',
       ...requirementLinks([...new Set(failing.flat())]),
-      '), under every roughness model, so that no item has an allowance.',
+      '), under every estimate of the copper’s texture, so that no item has an allowance.',
     );
   }
   return table(
     `allowances-${board.id}`,
-    `Calculated allowances of ${boardTitle(board)}, under each roughness model, with the requirement that stops meeting first`,
-    ['Item|1.8', 'Direction|0.8', '#Nominal', 'Hammerstad|1.3', 'Groiss|1.3', 'Gradient|1.3'],
-    results.map(({ path, parameter, direction, nominal, models }) => {
+    `Calculated allowances of ${boardTitle(board)}, under each estimate of the copper’s texture, with the requirement that stops meeting first`,
+    ['Item|1.8', 'Direction|0.8', '#Nominal', ...SIDES.map((side) => `${sideTitle(side)}|1.3`)],
+    results.map(({ path, parameter, direction, nominal, sides }) => {
       const item = items.find(({ figures }) => figures.some((f) => f.board === board.id && f.path === path))!;
       const measured = { ...item, nominal };
-      const under = (model: string) => outcomeCell(models.find((m) => m.model === model)!.outcome, measured);
+      const under = (side: RoughnessSide) => outcomeCell(sides.find((s) => s.side === side)!.outcome, measured);
       return [
         cell(PARAMETER_WORDS[parameter].what, ...(item.layer === undefined ? [] : [`, ${item.layer}`])),
         cell(direction),
         number(withUnit(statedNumber(inUnit(measured, nominal)), measured)),
-        under('hammerstad'),
-        under('groiss'),
-        under('gradient'),
+        ...SIDES.map(under),
       ];
     }),
   );
@@ -142,8 +158,6 @@ function outcomeCell(outcome: AllowanceOutcome, item: AskedItem): Cell {
         link(outcome.requirementId, requirementPage(outcome.requirementId)),
         ')',
       );
-    case 'saturated':
-      return cell('saturated: no limit can be set on this parameter');
     case 'not limited':
       return cell(freeText(item, outcome.searchedTo));
     case 'not met at nominal':

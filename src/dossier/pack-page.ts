@@ -159,9 +159,15 @@ const statusesChapter = (): Chapter =>
     'statuses',
     'Statuses in short',
     list([
-      [{ status: 'meets' }, ': inside the limit with every roughness model and the whole adverse uncertainty.'],
+      [
+        { status: 'meets' },
+        ': inside the limit under every estimate of the copper’s texture and with the whole adverse uncertainty.',
+      ],
       [{ status: 'undecided' }, ': the margin is below the uncertainty.'],
-      [{ status: 'misses' }, ': outside the limit with every roughness model and the whole favourable uncertainty.'],
+      [
+        { status: 'misses' },
+        ': outside the limit under every estimate of the copper’s texture and with the whole favourable uncertainty.',
+      ],
       [{ status: 'not evaluated' }, ': no value, with the reason; never read as meets.'],
       [{ status: 'open until measured' }, ': a test decides; the calculation stands beside it.'],
       [{ status: 'incomplete' }, ': of a board, a binding requirement is not evaluated.'],

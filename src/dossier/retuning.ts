@@ -47,7 +47,7 @@ export function retuningBlocks({ retuned, columns }: Board): readonly Block[] {
   return [
     prose(
       { strong: 'Retuned before the study. ' },
-      `Patch and link lengths of the drawing are multiplied by ${factorText(factor)}; every figure and verdict here is of the retuned layout. The factor is the one between ${lowest} and ${highest.toFixed(3)} at which the passive reflection of the worst column is least at the band centre, with the beam within half its beamwidth of broadside, under the nominal roughness model and at nominal temperature. Widths, feed line, offsets and pitch are as drawn: this makes laminates comparable, it is not a finished layout.`,
+      `Patch and link lengths of the drawing are multiplied by ${factorText(factor)}; every figure and verdict here is of the retuned layout. The factor is the one between ${lowest} and ${highest.toFixed(3)} at which the passive reflection of the worst column is least at the band centre, with the beam within half its beamwidth of broadside, with nominal copper and at nominal temperature. Widths, feed line, offsets and pitch are as drawn: this makes laminates comparable, it is not a finished layout.`,
     ),
     facts(
       'retuning',

@@ -15,6 +15,7 @@ import type {
   Verification,
 } from '../manifest/procurement-model.js';
 import { type Allowances, type HeldLimits, heldLimits } from '../verdict/index.js';
+import { type TextureQuantity, unstated } from './texture-asks.js';
 
 interface Rule {
   readonly kinds: readonly RecipientKind[];
@@ -32,7 +33,11 @@ const figure = (...paths: readonly string[]): readonly string[] =>
   paths.flatMap((path) => ['value', 'spread', 'spread.minus', 'spread.plus'].map((part) => `${path}.${part}`));
 
 const TEXTURE_KEYS = ['Rq', 'Sq', 'Ra', 'Sa', 'Rz', 'Sz'];
-const texture = (path: string): readonly string[] => TEXTURE_KEYS.flatMap((key) => figure(`${path}.${key}`));
+/** Of a measured file the height and its spread; of what else is known of a texture only whether it is stated. */
+const texture = (path: string): readonly string[] => [
+  ...TEXTURE_KEYS.flatMap((key) => figure(`${path}.${key}`)),
+  ...['spread', 'spread.minus', 'spread.plus'].map((part) => `${path}.measured.${part}`),
+];
 const verified = (key: string): readonly string[] => [
   `procurement: verification.${key}.method`,
   `procurement: verification.${key}.specimen`,
@@ -149,6 +154,8 @@ export type SheetItem = Pick<
   readonly product?: string;
   /** Of a permittivity. */
   readonly permittivityKind?: 'bulk' | 'design';
+  /** What is not stated of the texture of the recipient's own foil, in a fixed order: by it only that something is missing. */
+  readonly unstated?: readonly TextureQuantity[];
   readonly verification: Verification;
 };
 
@@ -222,6 +229,7 @@ function sheetItem(
     limits: heldLimits(item, allowances),
     ...(product === undefined ? {} : { product }),
     ...(parameter === 'permittivity' ? { permittivityKind: permittivityKind(item, boards) } : {}),
+    ...(product === undefined ? {} : ownTexture(item, recipient, boards)),
     verification: verification[parameter as HeldParameter] ?? {},
   };
 }
@@ -233,6 +241,22 @@ const made = (boards: readonly Board[]) =>
 function ownProduct(item: AskedItem, { name }: Recipient, boards: readonly Board[]): string | undefined {
   const material = made(boards).find(({ id }) => id === item.material);
   return material?.maker === name ? material.name : undefined;
+}
+
+/** Of the recipient's own foil alone; no other kind of recipient is asked. */
+function ownTexture(
+  { material, parameter }: AskedItem,
+  { name, kind }: Recipient,
+  boards: readonly Board[],
+): Pick<SheetItem, 'unstated'> {
+  if (kind !== 'foil maker') return {};
+  const foil = boards
+    .flatMap(({ stackUp: { strip, ground } }) => [strip.foil, ground.foil])
+    .find(({ id, maker }) => id === material && maker === name);
+  if (foil === undefined) return {};
+  if (parameter === 'treated-face-texture') return { unstated: unstated(foil.treatedFace) };
+  if (parameter === 'untreated-face-texture') return { unstated: unstated(foil.untreatedFace) };
+  return {};
 }
 
 function permittivityKind(item: AskedItem, boards: readonly Board[]): 'bulk' | 'design' | undefined {

@@ -1,5 +1,6 @@
 import { decimalsFor, formatNumber, fromBase, unitNamed } from '../quantity/index.js';
 import type { HeldSide, SideAllowance } from '../verdict/index.js';
+import { sideTitle } from './model-words.js';
 import type { SheetItem } from './supplier-allowed-fields.js';
 import { GAP, statedNumber } from './values.js';
 
@@ -64,13 +65,10 @@ export function basisText({ limits: { lower, upper }, upperOnly }: SheetItem): s
   return `from: ${word(lower)}; to: ${word(upper)}`;
 }
 
-const MODEL_NAMES = { hammerstad: 'Hammerstad', groiss: 'Groiss', gradient: 'gradient' } as const;
-const named = (models: readonly (keyof typeof MODEL_NAMES)[]): string => models.map((m) => MODEL_NAMES[m]).join(', ');
-
 /** What the calculation says of one side. Where allowances are kept inside, only what limits is told. */
 export function allowanceText(item: SheetItem, side: 'lower' | 'upper', printed: boolean): string {
   const { allowance, origin } = item.limits[side];
-  if (!printed && origin === 'stated' && allowance.kind !== 'saturated') return 'not tighter than stated';
+  if (!printed && origin === 'stated') return 'not tighter than stated';
   // That some board does not meet is for nobody outside to read.
   if (allowance.kind === 'not met at nominal') return 'none calculated';
   return wording(item, allowance.kind === 'limited' ? { ...allowance, partly: false } : allowance);
@@ -81,20 +79,16 @@ export function wording(item: Measured & { readonly nominal: number }, allowance
   const gap = unitBehind(item);
   switch (allowance.kind) {
     case 'limited': {
-      const { tightest, loosest, byModel, saturated, partly } = allowance;
+      const { tightest, loosest, byEstimate, partly } = allowance;
       const [near, far] = [towardsNominal(item, tightest), towardsNominal(item, loosest)];
-      const models =
-        byModel.length === 1
-          ? ` (${named(byModel.map(({ model }) => model))})`
+      const estimates =
+        byEstimate.length === 1
+          ? ` (${byEstimate.map(({ side }) => sideTitle(side).toLowerCase()).join()} estimate)`
           : near === far
-            ? ' (all models alike)'
-            : ` (over the models ${near} to ${far}${gap})`;
-      const stuck =
-        saturated.length === 0 ? '' : `; saturated under ${named(saturated)}: no limit can be set on this parameter`;
-      return `${near}${gap}${models}${stuck}${partly ? '; some board or model already does not meet at nominal and sets none' : ''}`;
+            ? ' (all estimates alike)'
+            : ` (over the estimates ${near} to ${far}${gap})`;
+      return `${near}${gap}${estimates}${partly ? '; some board or estimate already does not meet at nominal and sets none' : ''}`;
     }
-    case 'saturated':
-      return `saturated (${named(allowance.saturated)}): no limit can be set on this parameter`;
     case 'not limited':
       return freeText(item, allowance.searchedTo);
     case 'not met at nominal':

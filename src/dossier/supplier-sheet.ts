@@ -6,6 +6,7 @@ import type { Cell, Chapter } from './document.js';
 import type { SheetContent, SheetItem } from './supplier-allowed-fields.js';
 import { allowanceText, basisText, limitIn, nominalIn, unitText } from './supplier-limits.js';
 import { DEMONSTRATION, KIND_WORDS, PARAMETER_WORDS, SIDES, TERMS, TEXTURE_DEFINITIONS } from './supplier-words.js';
+import { askText, type TextureQuantity } from './texture-asks.js';
 
 /** A sheet ready to print: it stands alone, links nowhere and carries no mark of the pack. */
 export interface SupplierSheet {
@@ -38,6 +39,7 @@ export function supplierSheet(content: SheetContent): SupplierSheet {
     chapters: [
       requestChapter(content),
       itemsChapter(content),
+      ...knowledgeChapter(content),
       limitsChapter(content),
       verificationChapter(content),
       chapter('certificate', 'Certificate of conformance', prose(content.certificate)),
@@ -110,6 +112,31 @@ function itemsChapter(content: SheetContent): Chapter {
 const limit = (item: SheetItem, side: 'lower' | 'upper'): Cell =>
   side === 'lower' && item.upperOnly ? cell('–') : number(limitIn(item, side));
 
+/** Where Rq alone is stated of a foil: what else to measure, with the conditions under which the figure is accepted. */
+function knowledgeChapter({ items }: SheetContent): readonly Chapter[] {
+  const open = items.filter(({ unstated = [] }) => unstated.length > 0);
+  if (open.length === 0) return [];
+  const asked = [...new Set(open.flatMap(({ unstated = [] }) => unstated))];
+  const missing = (quantity: TextureQuantity) =>
+    open.filter(({ unstated = [] }) => unstated.includes(quantity)).map(({ id }) => id);
+  return [
+    chapter(
+      'texture-knowledge',
+      'Figures to state beside the height',
+      prose(
+        'The height alone does not fix what a foil loses: foils of one height differ several times in loss. With the figures below a foil is judged by what it is, without them by the less favourable of what it may be. ',
+        'State them with the answer, with spread, instrument and filters; say where one cannot be given.',
+      ),
+      table(
+        'texture-knowledge-table',
+        'Figures of texture that are not stated yet',
+        ['Figure and when it is accepted|4', 'For items|1.6', 'Figure with spread|1.4', 'Instrument and filters|1.6'],
+        asked.map((quantity) => [cell(askText(quantity)), cell({ code: missing(quantity).join(', ') }), BLANK, BLANK]),
+      ),
+    ),
+  ];
+}
+
 function limitsChapter(content: SheetContent): Chapter {
   const twoSided = content.items.some(({ upperOnly }) => !upperOnly);
   return chapter(
@@ -117,12 +144,12 @@ function limitsChapter(content: SheetContent): Chapter {
     'Where the limits come from',
     prose(
       'A limit is the stated spread, or the calculated allowance where that is tighter. The allowance is the worst value of the item, moved alone, at which everything required of the finished board is still met with what else is uncertain. ',
-      'It is found under three published models of rough copper (Hammerstad; Groiss; gradient); the range between them is given, and the least favourable one counts. ',
-      '“Saturated” says that a model has reached its ceiling and can set no limit on this parameter.',
+      'It is found under a low, a middle and a high estimate of the loss of copper for what is known of its texture; the range between them is given, and the least favourable one counts. ',
+      'No limit comes from a formula that ends at a ceiling. The more of a texture is stated, the nearer the estimates lie.',
     ),
     table(
       'limits-table',
-      'Basis of each limit, with the calculated allowance and its spread over the roughness models',
+      'Basis of each limit, with the calculated allowance and its spread over the estimates of rough copper',
       [
         'Item|1.5',
         'Limit asked is|1.2',

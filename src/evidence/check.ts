@@ -49,3 +49,12 @@ export const INDEPENDENT_SECTION =
   'independent quasi-static cross-section solutions made for this project, not measured';
 export const INDEPENDENT_FULL_WAVE =
   'independent full-wave spectral-domain solutions made for this project, not measured';
+
+/** Works a value out when first asked for, for checks that share one solution. */
+export function once<T>(compute: () => T): () => T {
+  let known: { readonly value: T } | undefined;
+  return () => {
+    known ??= { value: compute() };
+    return known.value;
+  };
+}

@@ -8,7 +8,7 @@ import {
   thinStriplineImpedance,
 } from '../physics/line/index.js';
 import { ANNEALED_COPPER_CONDUCTIVITY, halfSpaceImpedance } from '../physics/material/index.js';
-import { type EvidenceCheck, INDEPENDENT_SECTION } from './check.js';
+import { type EvidenceCheck, INDEPENDENT_SECTION, once } from './check.js';
 
 const DB_PER_NEPER = 20 / Math.LN10;
 const copper = (frequency: number) => halfSpaceImpedance(frequency, ANNEALED_COPPER_CONDUCTIVITY);
@@ -159,7 +159,7 @@ function coplanarChecks(width: number, gap: number, impedance: number, permittiv
     source: INDEPENDENT_SECTION,
     howKnown: 'independent solution',
   } as const;
-  const section = () => coplanarSection(coplanar(width, gap));
+  const section = once(() => coplanarSection(coplanar(width, gap)));
   const checks: EvidenceCheck[] = [
     {
       ...common,

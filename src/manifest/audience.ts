@@ -3,7 +3,17 @@
  * by one: what is hidden is not there to be printed, hashed or judged, and a field added to the model later stays out
  * until it is named here.
  */
-import type { Audience, Board, Concession, DeclaredProperty, InputFile, Pack, Requirement, Review } from './model.js';
+import type {
+  Audience,
+  Board,
+  Concession,
+  DeclaredProperty,
+  InputFile,
+  MeasuredTexture,
+  Pack,
+  Requirement,
+  Review,
+} from './model.js';
 
 /** Ids have single hyphens only, so that no pack can have the name of another one's copy. */
 export const copyId = (packId: string, audience: string): string => `${packId}--${audience}`;
@@ -99,9 +109,11 @@ export function hiddenFiles({ boards }: Pack, hidden: Pick<Hidden, 'board'>): Re
   return new Set(boards.map(({ file }) => file).filter((file) => !shown.has(file)));
 }
 
-/** An inherited figure says in which file it stands; where that is hidden, only that it is inherited. */
+/** An inherited figure says in which file it stands; where that is hidden, only that it is inherited. No hash of a file goes along. */
 function withoutFiles<T>(data: T, files: ReadonlySet<string>): T {
   const text = JSON.stringify(data, (key, value: unknown) => {
+    // Like the hashes of inputs: a file of heights may carry notes that are for nobody else.
+    if (key === 'sha256') return NOT_GIVEN;
     if (key !== 'path' || typeof value !== 'string') return value;
     const end = value.indexOf(': ');
     return end > 0 && files.has(value.slice(0, end)) ? `inherited${value.slice(end)}` : value;
@@ -134,6 +146,7 @@ function inputsFor(pack: Pack, boards: readonly Board[], review: Review | undefi
   for (const board of boards) files.add(board.file);
   JSON.stringify(boards, (key, value: unknown) => {
     if (key === 'path' && typeof value === 'string' && value.includes(': ')) files.add(value.split(': ')[0]!);
+    if (key === 'measured') files.add((value as MeasuredTexture).file);
     return value;
   });
   return pack.inputs.filter(({ path }) => files.has(path)).map(({ path }) => ({ path, sha256: NOT_GIVEN }));

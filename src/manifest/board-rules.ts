@@ -3,7 +3,8 @@ import type { BoardDocument } from './documents/board-document.js';
 import { si } from './figures.js';
 import { expandPieces, patchCount, piecesRules } from './pieces.js';
 import type { Path, Problem } from './problem.js';
-import { ascending, exactlyOneOf, RuleReport, textureRules } from './rules.js';
+import { ascending, exactlyOneOf, RuleReport } from './rules.js';
+import { textureRules } from './texture-rules.js';
 import type { Node } from './tree.js';
 
 /** A finer sweep than this is a slip of the unit, not an analysis. */
@@ -56,7 +57,7 @@ function stackUpRules(report: RuleReport, { stack_up: stack }: BoardDocument): v
     report.at(
       [...outer, 'texture'],
       'no texture',
-      `a ${kind} outer face has a texture of its own: exactly one of Rq, Sq, Ra, Sa, Rz, Sz`,
+      `a ${kind} outer face has a texture of its own: Rq or another height`,
     );
   }
   if (texture) textureRules(report, [...outer, 'texture'], texture);

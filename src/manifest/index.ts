@@ -12,6 +12,7 @@ export { formatProblem, type Problem, sortProblems } from './problem.js';
 export type * from './procurement-model.js';
 export { QUANTITY_NAMES, type QuantityRule, REQUIREMENT_QUANTITIES } from './requirement-quantities.js';
 export {
+  LARGEST_TEXTURE_FILE,
   type MeasuredHeights,
   readTextureCsv,
   readTextureFile,

@@ -20,6 +20,7 @@ import { si } from './figures.js';
 import type { PackFiles } from './files.js';
 import { finishRules, foilRules, laminateRules } from './library-rules.js';
 import { materialReferences } from './material-references.js';
+import { MeasuredTextures } from './measured-textures.js';
 import type { Board, Pack, PreviousRevision, Review } from './model.js';
 import { type OpenFile, Reader } from './open-files.js';
 import { openProcurement, procurementFor } from './open-procurement.js';
@@ -66,6 +67,13 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
     laminateRules,
   );
   const foils = openLibrary<{ foils: FoilDocument[] }>(reader, packFile, 'foils', foilsDocument, foilRules);
+  const measured = new MeasuredTextures(reader);
+  for (const { file, doc } of foils.checked) {
+    doc.foils.forEach((foil, i) => {
+      measured.read(file.root, ['foils', i, 'treated_face'], foil.treated_face);
+      measured.read(file.root, ['foils', i, 'untreated_face'], foil.untreated_face);
+    });
+  }
   const finishes = openLibrary<{ finishes: FinishDocument[] }>(
     reader,
     packFile,
@@ -92,6 +100,8 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
     const merged = checked<BoardDocument>(boardDocument, { path: board.file.path, root: board.root }, problems);
     if (!merged) return [];
     problems.push(...boardRules(board.root, merged.doc, context));
+    const outer = merged.doc.stack_up.strip.outer_face.texture;
+    measured.read(board.root, ['stack_up', 'strip', 'outer_face', 'texture'], outer);
     return [{ doc: merged.doc, board }];
   });
 
@@ -108,8 +118,13 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   if (problems.length > 0 || !pack || !set) return { problems: sortProblems(problems) };
   const libraries: Libraries = {
     laminates: byId(laminates.checked, (d) => d.laminates, laminateOf),
-    foils: byId(foils.checked, (d) => d.foils, foilOf),
+    foils: byId(
+      foils.checked,
+      (d) => d.foils,
+      (foil, file) => foilOf(foil, file, measured.all),
+    ),
     finishes: byId(finishes.checked, (d) => d.finishes, finishOf),
+    measurements: measured.all,
   };
   const resolved = complete.map(({ doc, board }) => boardOf(doc, { ...board, file: board.file.path }, libraries));
   const parts = { boards: resolved, requirements: requirementsOf(set.doc, set.file.path), review, previous };
@@ -270,7 +285,7 @@ function packOf(doc: PackDocument, { boards, requirements, review, previous }: P
     boards,
     requirements,
     analysis: {
-      roughnessModel: doc.analysis.roughness_model,
+      roughnessModel: doc.analysis.roughness_model ?? 'band',
       frequencyStep: si(doc.analysis.frequency_step, 'frequency'),
     },
     inputs: reader.inputs(),

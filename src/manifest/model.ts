@@ -56,19 +56,61 @@ export interface Laminate {
   readonly permittivityTemperatureCoefficient?: Figure;
   /** Relative change of loss tangent per kelvin, 1/K. */
   readonly lossTangentTemperatureCoefficient?: Figure;
+  /** In the plane of the board, where it differs from `permittivity`; absent: not stated, taken as equal and said so. */
+  readonly inPlanePermittivity?: Figure;
+  /** Moisture: share of mass taken up in service (0.0004 for 0.04 %) and what it changes per unit of that share. */
+  readonly water?: {
+    readonly uptake: Figure;
+    /** Relative change of permittivity per mass share. */
+    readonly permittivityPerShare?: number;
+    /** Change of the loss tangent itself per mass share. */
+    readonly lossTangentPerShare?: number;
+  };
   readonly declared: readonly DeclaredProperty[];
 }
 
 export type TextureParameter = 'Rq' | 'Sq' | 'Ra' | 'Sa' | 'Rz' | 'Sz';
 
-/** Texture of one copper face; `rq` is what the models use, with how it was obtained. */
+/** Texture of one copper face; `rq` is what every model uses, with how it was obtained. What is known beside it narrows the band. */
 export interface Texture {
   readonly rq: Figure;
+  /** Distance at which the autocorrelation has fallen to 1/e, m: stated, or from Sal. */
+  readonly correlationLength?: Figure;
+  /** Developed interfacial area ratio Sdr (ISO 25178-2) as a ratio: 0.113 for 11.3 %. */
+  readonly developedAreaRatio?: Figure;
+  /** Maximum height stated beside Rq, m. */
+  readonly rz?: Figure;
+  /** To the current along a column; absent: not known. */
+  readonly lay?: 'isotropic' | 'across' | 'along';
+  /** Equal balls on a flat base, stacked `layers` high, on a square lattice. */
+  readonly nodule?: { readonly radius: Figure; readonly pitch: Figure; readonly layers: number };
+  /** Set when the figures were evaluated from a measured profile or height map of the pack. */
+  readonly measured?: MeasuredTexture;
   readonly stated: { readonly parameter: TextureParameter; readonly value: number };
   /** Set when Rq was not stated: a sentence naming the conversion and its assumption. */
   readonly conversion?: string;
+  /** Set when the correlation length comes from Sal: a sentence naming the conversion and its assumption. */
+  readonly lengthConversion?: string;
   readonly instrument?: string;
   readonly filter?: string;
+}
+
+/** A measured profile or height map and how it was evaluated (ISO 21920-2, ISO 25178-2, Gaussian filter of ISO 16610-21/-61). */
+export interface MeasuredTexture {
+  /** Path relative to the root folder. */
+  readonly file: string;
+  readonly sha256: string;
+  readonly kind: 'profile' | 'map';
+  /** Nesting indices, m; absent where no such filter was applied. */
+  readonly shortNestingIndex?: number;
+  readonly longNestingIndex?: number;
+  /** Sampling interval and extent, m. */
+  readonly interval: number;
+  readonly extent: number;
+  /** A piece of the evaluated heights for the drawing, m above the mean, at its own interval (m); a few hundred at most. */
+  readonly section?: { readonly interval: number; readonly heights: readonly number[] };
+  /** What the reviewer must know of it: form removed, points missing, resolution coarser than the skin depth. */
+  readonly remarks: readonly string[];
 }
 
 export interface Foil {
@@ -274,9 +316,12 @@ export interface RequirementSet {
 
 export type RoughnessModelName = 'hammerstad' | 'groiss' | 'gradient';
 
+/** `band`: middle estimate of what is known of each face. */
+export type RoughnessChoice = 'band' | RoughnessModelName;
+
 export interface Analysis {
-  /** Model behind the nominal figures; the spread always covers all models. */
-  readonly roughnessModel: RoughnessModelName;
+  /** What stands behind the nominal figures; the spread always covers the band from its low to its high estimate. */
+  readonly roughnessModel: RoughnessChoice;
   /** Largest frequency step over the band, Hz. */
   readonly frequencyStep: number;
 }

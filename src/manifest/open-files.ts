@@ -71,7 +71,16 @@ export class Reader {
 
   /** A file named by one value of a manifest that is no manifest itself: only read and hashed. Its path, or undefined. */
   openData(from: OpenFile, path: Path): string | undefined {
+    return this.openBytes(from, path)?.path;
+  }
+
+  /** The same with its content. */
+  openBytes(
+    from: OpenFile,
+    path: Path,
+  ): { readonly path: string; readonly bytes: Uint8Array; readonly sha256: string } | undefined {
     const node = nodeAt(from.root, path);
+    // Other kinds of value are reported by the check of the document.
     if (node?.kind !== 'scalar' || typeof node.value !== 'string') return undefined;
     const name = node.value;
     const problem = (found: string, allowed: string, fix?: string) => {
@@ -82,7 +91,8 @@ export class Reader {
       problem(quoted(name), resolved.refused, resolved.fix);
       return undefined;
     }
-    return this.bytesOf(resolved.path, problem, name) === undefined ? undefined : resolved.path;
+    const bytes = this.bytesOf(resolved.path, problem, name);
+    return bytes && { path: resolved.path, bytes, sha256: this.hashes.get(resolved.path)! };
   }
 
   private open(

@@ -1,17 +1,21 @@
 import type { Dimension } from '../quantity/index.js';
 import type { BoardDocument } from './documents/board-document.js';
 import type { FigureDocument } from './documents/fields.js';
+import type { Measurements } from './evaluated-texture.js';
 import { figureOf, si } from './figures.js';
 import type { Board, ColumnLayout, FeedPath, Figure, Finish, Foil, Laminate, Link, StackUp, Texture } from './model.js';
 import { expandPieces, patchCount } from './pieces.js';
 import { dotted, type Path } from './problem.js';
-import { declaredOf, textureOf } from './resolve-library.js';
+import { declaredOf } from './resolve-library.js';
+import { textureOf } from './resolve-texture.js';
 import { type Node, nodeAt } from './tree.js';
 
 export interface Libraries {
   readonly laminates: ReadonlyMap<string, Laminate>;
   readonly foils: ReadonlyMap<string, Foil>;
   readonly finishes: ReadonlyMap<string, Finish>;
+  /** Measured files of textures of their own. */
+  readonly measurements: Measurements;
 }
 
 /** A complete board as read: its own keys over those of the boards it is based on. */
@@ -80,7 +84,7 @@ function stackUpOf(
   const outerTexture: Texture =
     outer.texture === undefined
       ? face(stripFoil, doc.strip.dielectric_face === 'treated' ? 'untreated' : 'treated')
-      : textureOf(outer.texture, where(['stack_up', 'strip', 'outer_face', 'texture']));
+      : textureOf(outer.texture, where(['stack_up', 'strip', 'outer_face', 'texture']), libraries.measurements);
   return {
     ...(doc.cover
       ? {

@@ -1,39 +1,13 @@
-import { RQ_CONVERSIONS } from '../physics/texture/index.js';
 import type { BoardDocument } from './documents/board-document.js';
-import {
-  type FinishDocument,
-  type FoilDocument,
-  type LaminateDocument,
-  TEXTURE_PARAMETERS,
-  type TextureDocument,
-} from './documents/library-documents.js';
+import type { FinishDocument, FoilDocument, LaminateDocument } from './documents/library-documents.js';
+import type { Measurements } from './evaluated-texture.js';
 import { figureOf, si } from './figures.js';
-import type { DeclaredProperty, Finish, Foil, Laminate, Texture } from './model.js';
+import type { DeclaredProperty, Finish, Foil, Laminate } from './model.js';
+import { textureOf } from './resolve-texture.js';
 
 type DeclaredDocument = NonNullable<BoardDocument['declared']>;
 
 export const declaredOf = (doc: DeclaredDocument | undefined): readonly DeclaredProperty[] => doc ?? [];
-
-/** Texture with its Rq, converted where another parameter is stated, the doubt of the conversion added; never below 0. */
-export function textureOf(doc: TextureDocument, path: string): Texture {
-  const parameter = TEXTURE_PARAMETERS.find((p) => doc[p] !== undefined);
-  if (parameter === undefined) throw new Error(`unchecked texture ${path} reached the model`);
-  const stated = figureOf(doc[parameter]!, 'length', `${path}.${parameter}`);
-  const { factor, low, high, assumption } = RQ_CONVERSIONS[parameter];
-  const value = stated.value * factor;
-  return {
-    rq: {
-      ...stated,
-      value,
-      minus: Math.min(value, stated.minus * factor + stated.value * (factor - low)),
-      plus: stated.plus * factor + stated.value * (high - factor),
-    },
-    stated: { parameter, value: stated.value },
-    ...(assumption ? { conversion: assumption } : {}),
-    ...(doc.instrument === undefined ? {} : { instrument: doc.instrument }),
-    ...(doc.filter === undefined ? {} : { filter: doc.filter }),
-  };
-}
 
 export function laminateOf(doc: LaminateDocument, file: string): Laminate {
   const at = (key: string) => `${file}: ${doc.id}.${key}`;
@@ -71,11 +45,30 @@ export function laminateOf(doc: LaminateDocument, file: string): Laminate {
           ),
         }
       : {}),
+    ...(doc.in_plane_permittivity
+      ? { inPlanePermittivity: figureOf(doc.in_plane_permittivity, 'number', at('in_plane_permittivity')) }
+      : {}),
+    ...(doc.water ? { water: waterOf(doc.water, at('water.uptake')) } : {}),
     declared: declaredOf(doc.declared),
   };
 }
 
-export function foilOf(doc: FoilDocument, file: string): Foil {
+function waterOf(
+  {
+    uptake,
+    permittivity_per_share: permittivity,
+    loss_tangent_per_share: lossTangent,
+  }: NonNullable<LaminateDocument['water']>,
+  path: string,
+): NonNullable<Laminate['water']> {
+  return {
+    uptake: figureOf(uptake, 'ratio', path),
+    ...(permittivity === undefined ? {} : { permittivityPerShare: permittivity }),
+    ...(lossTangent === undefined ? {} : { lossTangentPerShare: lossTangent }),
+  };
+}
+
+export function foilOf(doc: FoilDocument, file: string, measurements: Measurements): Foil {
   const at = (key: string) => `${file}: ${doc.id}.${key}`;
   return {
     id: doc.id,
@@ -84,8 +77,8 @@ export function foilOf(doc: FoilDocument, file: string): Foil {
     invented: doc.invented,
     conductivity: figureOf(doc.conductivity, 'conductivity', at('conductivity')),
     temperatureCoefficient: si(doc.temperature_coefficient, 'temperature_coefficient'),
-    treatedFace: textureOf(doc.treated_face, at('treated_face')),
-    untreatedFace: textureOf(doc.untreated_face, at('untreated_face')),
+    treatedFace: textureOf(doc.treated_face, at('treated_face'), measurements),
+    untreatedFace: textureOf(doc.untreated_face, at('untreated_face'), measurements),
     declared: declaredOf(doc.declared),
   };
 }

@@ -1,6 +1,4 @@
 import { quoted } from '../quantity/index.js';
-import type { TextureDocument } from './documents/library-documents.js';
-import { TEXTURE_PARAMETERS } from './documents/library-documents.js';
 import { nearest } from './nearest.js';
 import { dotted, type Path, type Problem } from './problem.js';
 import type { Node } from './tree.js';
@@ -44,10 +42,6 @@ export function exactlyOneOf(report: RuleReport, path: Path, doc: object, keys: 
   if (given.length === 0) report.at(path, `none of ${keys.join(', ')}`, allowed);
   else report.atKey([...path, given[1]!], `${given.join(' and ')} together`, allowed);
   return false;
-}
-
-export function textureRules(report: RuleReport, path: Path, doc: TextureDocument): void {
-  exactlyOneOf(report, path, doc, TEXTURE_PARAMETERS);
 }
 
 /** Two values of one dimension in ascending order. */

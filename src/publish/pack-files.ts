@@ -1,9 +1,9 @@
 import { lstatSync, readFileSync, realpathSync, statSync } from 'node:fs';
 import { isAbsolute, join, relative, sep } from 'node:path';
-import type { PackFiles } from '../manifest/index.js';
+import { LARGEST_TEXTURE_FILE, type PackFiles } from '../manifest/index.js';
 
-/** Manifests are text that people write; anything larger is the wrong file. */
-const largestFile = 16 * 1024 * 1024;
+/** Measured heights are the largest that a pack holds; a manifest as large is refused when it is read as one. */
+const largestFile = LARGEST_TEXTURE_FILE;
 
 /**
  * The files of a pack under a root folder. A path is relative to the root, with forward slashes.
@@ -26,7 +26,7 @@ export function packFilesUnder(root: string): PackFiles {
         const status = statSync(real);
         if (!status.isFile()) return { refused: status.isDirectory() ? 'it is a folder' : 'it is not a regular file' };
         if (status.size > largestFile) {
-          return { refused: `it is larger than ${largestFile / 1024 / 1024} MiB, too large for a manifest` };
+          return { refused: `it is larger than ${largestFile / 1024 / 1024} MiB, too large for a file of a pack` };
         }
         return readFileSync(real);
       } catch (error) {

@@ -17,6 +17,7 @@ export type Dimension =
   | 'loss_per_length'
   | 'conductivity'
   | 'resistance'
+  | 'per_area'
   | 'ratio';
 
 export interface Unit {
@@ -136,6 +137,16 @@ export const DIMENSIONS: Readonly<Record<Dimension, DimensionInfo>> = {
       unit('Ω', ['ohm', 'Ω', 'Ω', 'ohms'], 0), // Greek capital omega and U+2126
       unit('kΩ', ['kohm', 'kΩ', 'kΩ'], 3),
       unit('mΩ', ['mohm', 'mΩ', 'mΩ'], -3),
+    ],
+  },
+  per_area: {
+    noun: 'a number per area',
+    base: '1/m²',
+    bareNumber: false,
+    units: [
+      unit('1/µm²', ['1/um2', '1/µm²', '1/μm²', '1/um²', '1/µm2'], 12),
+      unit('1/mm²', ['1/mm2', '1/mm²'], 6),
+      unit('1/m²', ['1/m2', '1/m²'], 0),
     ],
   },
   ratio: { noun: 'a ratio', base: '1', bareNumber: true, units: [unit('%', ['%', 'percent'], -2)] },

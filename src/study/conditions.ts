@@ -13,3 +13,5 @@ export function temperatures(board: Board): number[] {
   const { lowC, nominalC, highC } = board.temperature;
   return [...new Set([lowC, nominalC, highC])].sort((a, b) => a - b);
 }
+
+export const bandCentre = ({ band }: Board): number => (band.low + band.high) / 2;

@@ -1,9 +1,12 @@
-export { assembleStudy, planBoard, ROUGHNESS_MODELS } from './plan.js';
+export { nominalValues } from './nominal-values.js';
+export { assembleStudy, planBoard } from './plan.js';
 export type * from './results.js';
 export { RETUNE_LIMITS, retuneBoard } from './retune.js';
 export { runSweep } from './sweep.js';
 export { type RunTask, runTask, type TaskResult } from './task.js';
-export { movables, nominalValues, type Tolerance, tolerances } from './values.js';
+export { movables, type Tolerance, tolerances } from './tolerances.js';
+export type { BoardValues, FaceTexture } from './values.js';
+export { nominalView, ROUGHNESS_SIDES, type RoughnessView, viewText } from './views.js';
 
 import type { Analysis, Board } from '../manifest/model.js';
 import { assembleStudy, planBoard } from './plan.js';

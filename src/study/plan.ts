@@ -1,19 +1,23 @@
 /**
- * A board's study as independent tasks: one sweep each for the nominal state, the other roughness models, and both limits
- * of every tolerance under every roughness model (so that no verdict hangs on which model is called nominal). Tasks are plain data and pure, so that they can run on any thread in any order.
+ * A board's study as independent tasks: one sweep each for the estimates of the roughness band and for the nominal state,
+ * and both limits of every tolerance under each of these (so that no verdict hangs on which is called nominal). Tasks are
+ * plain data and pure, so that they can run on any thread in any order.
  */
 import { createHash } from 'node:crypto';
-import type { Analysis, Board, QuantityName, RoughnessModelName } from '../manifest/model.js';
-import type { ValidityFlag } from '../physics/validity.js';
-import { faceStates, lineLossCurves, lossFactorCurves, losslessClosure } from './curves.js';
-import { obstacle } from './obstacle.js';
-import type { BoardStudy, Sweep } from './results.js';
+import type { Analysis, Board, QuantityName } from '../manifest/model.js';
+import { boardFlags } from './board-flags.js';
+import { faceStates } from './face-states.js';
+import { lineLossByFace } from './line-loss-by-face.js';
+import { losslessClosure } from './lossless-closure.js';
+import { effectivePermittivityCurves, lineLossCurves, lossFactorCurves } from './model-curves.js';
+import { columnObstacle, lineObstacle } from './obstacle.js';
+import type { BoardStudy, ModelCurves, Sweep, ToleranceStudy } from './results.js';
+import { slowWave } from './slow-wave.js';
 import type { RunTask, TaskResult } from './task.js';
-import { tolerances } from './values.js';
+import { tolerances } from './tolerances.js';
+import { nominalView, ROUGHNESS_SIDES, type RoughnessView, viewText } from './views.js';
 
-export const ROUGHNESS_MODELS: readonly RoughnessModelName[] = ['hammerstad', 'groiss', 'gradient'];
-
-const COMPUTED: readonly QuantityName[] = [
+const ON_COLUMNS: readonly QuantityName[] = [
   'gain',
   'realized_gain',
   'directivity',
@@ -24,76 +28,102 @@ const COMPUTED: readonly QuantityName[] = [
   'sidelobe_level',
   'beam_direction',
   'pattern_mask',
-  'line_loss',
 ];
+const ON_LINES: readonly QuantityName[] = ['line_loss'];
+
+/** The nominal view, and the estimates that it is not. */
+function viewsOf({ roughnessModel }: Analysis): readonly RoughnessView[] {
+  const nominal = nominalView(roughnessModel);
+  return [nominal, ...ROUGHNESS_SIDES.filter((side) => side !== nominal)];
+}
+
+const drawnId = (view: RoughnessView, nominal: RoughnessView): string =>
+  view === nominal ? 'nominal' : `side-${view}`;
+const limitId = (tolerance: string, limit: string, view: RoughnessView): string =>
+  `tolerance-${tolerance}-${limit}-${view}`;
 
 /** @param board  as it is to be studied: retuned, where its manifest asks for that (`retuneBoard`) */
 export function planBoard(board: Board, analysis: Analysis): RunTask[] {
-  if (obstacle(board) !== undefined) return [];
-  const sweeps: RunTask[] = [
-    { id: 'nominal', label: 'nominal', kind: 'model', model: analysis.roughnessModel },
-    ...ROUGHNESS_MODELS.filter((model) => model !== analysis.roughnessModel).map(
-      (model): RunTask => ({ id: `model-${model}`, label: `roughness by ${model}`, kind: 'model', model }),
-    ),
-  ];
+  if (lineObstacle(board) !== undefined) return [];
+  const views = viewsOf(analysis);
+  const [nominal] = views;
+  const tasks: RunTask[] = views.map((view) => ({
+    id: drawnId(view, nominal),
+    label: view === nominal ? 'nominal' : viewText(view),
+    kind: 'as drawn',
+    view,
+  }));
   for (const { id, label } of tolerances(board))
-    for (const model of ROUGHNESS_MODELS)
+    for (const view of views)
       for (const limit of ['low', 'high'] as const)
-        sweeps.push({
-          id: `tolerance-${id}-${limit}-${model}`,
-          label: `${label} at its ${limit} limit, roughness by ${model}`,
+        tasks.push({
+          id: limitId(id, limit, view),
+          label: `${label} at its ${limit} limit, ${viewText(view)}`,
           kind: 'tolerance',
           tolerance: id,
           limit,
-          model,
+          view,
         });
-  return sweeps;
+  return tasks;
 }
 
 /** @param results of `planBoard`'s tasks, in its order */
 export function assembleStudy(board: Board, analysis: Analysis, results: readonly TaskResult[]): BoardStudy {
-  const reason = obstacle(board);
-  const flags = new Map<string, ValidityFlag>();
-  // Validity is said of the board as drawn; a tolerance limit just outside a range would only repeat it.
-  for (const result of results.filter(({ sweep }) => !sweep.id.startsWith('tolerance-')))
-    for (const flag of result.flags) if (!flags.has(flag.code)) flags.set(flag.code, flag);
-  const byId = new Map(results.map((result) => [result.sweep.id, result.sweep]));
-  const nominal: Sweep = byId.get('nominal') ?? { id: 'nominal', label: 'nominal', points: [] };
-  const evaluated = reason === undefined;
-  return {
+  const ofColumns = columnObstacle(board);
+  const ofLines = lineObstacle(board);
+  const head = {
     board,
     hash: createHash('sha256')
       .update(JSON.stringify([board, analysis]))
       .digest('hex'),
-    nominal,
-    models: evaluated
-      ? ROUGHNESS_MODELS.map((model) => ({
-          model,
-          sweep: model === analysis.roughnessModel ? nominal : need(byId, `model-${model}`),
-        }))
-      : [],
-    tolerances: evaluated
-      ? tolerances(board).map(({ id, label, figure, dimension }) => {
-          const at = (limit: string, model: string): Sweep => need(byId, `tolerance-${id}-${limit}-${model}`);
-          return {
-            id,
-            label,
-            figure,
-            dimension,
-            low: at('low', analysis.roughnessModel),
-            high: at('high', analysis.roughnessModel),
-            byModel: ROUGHNESS_MODELS.map((model) => ({ model, low: at('low', model), high: at('high', model) })),
-          };
-        })
-      : [],
-    lineLoss: evaluated ? lineLossCurves(board, analysis) : { x: [], curves: [] },
-    lossFactor: evaluated ? lossFactorCurves(board) : { x: [], curves: [] },
-    faces: evaluated ? faceStates(board) : [],
-    flags: [...flags.values()],
-    notEvaluated: evaluated ? [] : [{ quantities: COMPUTED, reason }],
-    losslessClosure: evaluated ? losslessClosure(board) : Number.NaN,
+    flags: boardFlags(board, results),
+    notEvaluated: [
+      ...(ofLines === undefined ? [] : [{ quantities: [...ON_COLUMNS, ...ON_LINES], reason: ofLines }]),
+      ...(ofLines !== undefined || ofColumns === undefined ? [] : [{ quantities: ON_COLUMNS, reason: ofColumns }]),
+    ],
+  };
+  if (ofLines !== undefined) return { ...head, ...NOTHING };
+  const byId = new Map(results.map((result) => [result.sweep.id, result.sweep]));
+  const nominal = nominalView(analysis.roughnessModel);
+  return {
+    ...head,
+    nominal: need(byId, 'nominal'),
+    sides: ROUGHNESS_SIDES.map((side) => ({ side, sweep: need(byId, drawnId(side, nominal)) })),
+    tolerances: tolerances(board).map(({ id, label, figure, dimension }): ToleranceStudy => {
+      const at = (limit: string, view: RoughnessView): Sweep => need(byId, limitId(id, limit, view));
+      return {
+        id,
+        label,
+        figure,
+        dimension,
+        low: at('low', nominal),
+        high: at('high', nominal),
+        bySide: ROUGHNESS_SIDES.map((side) => ({ side, low: at('low', side), high: at('high', side) })),
+      };
+    }),
+    lineLoss: lineLossCurves(board, analysis),
+    lossFactor: lossFactorCurves(board),
+    effectivePermittivity: effectivePermittivityCurves(board),
+    lineLossByFace: lineLossByFace(board),
+    slowWave: slowWave(board),
+    faces: faceStates(board),
+    losslessClosure: ofColumns === undefined ? losslessClosure(board) : Number.NaN,
   };
 }
+
+const NO_CURVES: ModelCurves = { x: [], curves: [], band: { low: [], middle: [], high: [] } };
+const NOTHING = {
+  nominal: { id: 'nominal', label: 'nominal', points: [], line: [] },
+  sides: [],
+  tolerances: [],
+  lineLoss: NO_CURVES,
+  lossFactor: NO_CURVES,
+  effectivePermittivity: NO_CURVES,
+  lineLossByFace: [],
+  slowWave: [],
+  faces: [],
+  losslessClosure: Number.NaN,
+} as const;
 
 function need(sweeps: ReadonlyMap<string, Sweep>, id: string): Sweep {
   const sweep = sweeps.get(id);

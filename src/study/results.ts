@@ -1,5 +1,6 @@
-import type { Board, Figure, QuantityName, RoughnessModelName } from '../manifest/model.js';
+import type { Board, Figure, QuantityName } from '../manifest/model.js';
 import type { Complex } from '../numerics/complex.js';
+import type { Narrowing, RoughnessModel } from '../physics/roughness/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import type { Dimension } from '../quantity/index.js';
 
@@ -58,9 +59,6 @@ export interface PointResult {
   readonly referenceImpedance: readonly number[];
   readonly elevation: CutFigures;
   readonly azimuth: CutFigures;
-  /** Feed line width on this stack-up, loss dB/m (metres!) and effective permittivity. */
-  readonly lineLossDbPerM: number;
-  readonly lineEffectivePermittivity: number;
   /** Input power minus the sum of all sinks, over input power (circuit): below 1e-9. */
   readonly powerResidual: number;
   /** (far-field power + guided wave) over power into the edges: 1 within 1 % on the lossless network; NaN where not evaluated. */
@@ -68,12 +66,29 @@ export interface PointResult {
   readonly cuts: { readonly elevation: Cut; readonly azimuth: Cut };
 }
 
+/** The feed line (first column's width) at one frequency and temperature: evaluated with cover layers too. */
+export interface LinePoint {
+  readonly frequency: number;
+  readonly temperatureC: number;
+  /** dB/m (metres!). */
+  readonly lossDbPerM: number;
+  readonly effectivePermittivity: number;
+  /** Ohm, power–current. */
+  readonly impedance: number;
+}
+
 /** One full sweep over band × temperature under one set of assumptions. Points ordered by temperature, then frequency. */
 export interface Sweep {
   readonly id: string;
   readonly label: string;
+  /** Empty where the columns cannot be evaluated (`notEvaluated` says why). */
   readonly points: readonly PointResult[];
+  /** Same grid as `points` would have. */
+  readonly line: readonly LinePoint[];
 }
+
+/** Estimates of a face for what is known of its texture: see physics/roughness. Not bounds, but what the verdict spans. */
+export type RoughnessSide = 'low' | 'middle' | 'high';
 
 /** One declared tolerance moved alone to both its limits. */
 export interface ToleranceStudy {
@@ -86,30 +101,78 @@ export interface ToleranceStudy {
   readonly low: Sweep;
   readonly high: Sweep;
   /**
-   * The same under every roughness model. With these a verdict does not depend on the nominal model at all: a saturated
-   * model makes a tolerance on Rq look harmless, and the largest effect over the models counts. Without, low and high stand for all.
+   * The same under every estimate of the roughness band, so that a verdict does not depend on which is called nominal: the
+   * largest effect counts. Without, low and high stand for all.
    */
-  readonly byModel?: readonly { readonly model: RoughnessModelName; readonly low: Sweep; readonly high: Sweep }[];
+  readonly bySide?: readonly { readonly side: RoughnessSide; readonly low: Sweep; readonly high: Sweep }[];
 }
 
-/** A curve over frequency or roughness with a value per roughness model. */
+/** Curves over frequency or roughness, one per roughness model, with the band of what is known. */
 export interface ModelCurves {
   readonly x: readonly number[];
-  readonly curves: readonly { readonly model: RoughnessModelName | 'smooth'; readonly y: readonly number[] }[];
+  readonly curves: readonly { readonly model: RoughnessModel; readonly y: readonly number[] }[];
+  readonly band: Readonly<Record<RoughnessSide, readonly number[]>>;
 }
 
+/** What one model or estimate says of a face. */
+export interface FaceFigures {
+  readonly lossFactor: number;
+  /** X in Rs to the mean plane. */
+  readonly reactance: number;
+  /** Electrostatic plane above the mean plane, m. */
+  readonly planeShift: number;
+  /** s = Xδ/2 + plane shift, m. */
+  readonly slowWaveLength: number;
+}
+
+/** A copper face at band centre and nominal temperature. */
 export interface FaceState {
   readonly face: string;
+  /** Which copper: `strip underside`, `ground`, `strip top and edges`; several foils are several faces. */
+  readonly place: 'underside' | 'ground' | 'outer';
   /** m */
   readonly rq: number;
   readonly skinDepth: number;
-  /** Per model, loss factor K, reactance X in Rs to the mean plane and electrostatic plane shift in m. */
-  readonly models: readonly {
-    readonly model: RoughnessModelName;
-    readonly lossFactor: number;
-    readonly reactance: number;
-    readonly planeShift: number;
+  /** What is known of its texture, in words: `Rq and correlation length`. */
+  readonly known: string;
+  readonly band: readonly (FaceFigures & { readonly side: RoughnessSide; readonly reason: string })[];
+  /** Every model that the knowledge suffices for, in the order of `applicableModels`, smooth first. */
+  readonly models: readonly (FaceFigures & {
+    readonly model: RoughnessModel;
+    readonly flags: readonly ValidityFlag[];
+  })[];
+  /** Measurements that would narrow the band, the most useful first. */
+  readonly narrowing: readonly Narrowing[];
+  /** Plain sentences for models that are saturated at this texture. */
+  readonly saturation: readonly { readonly model: RoughnessModel; readonly text: string }[];
+}
+
+/** Loss of the feed line by face at band centre and nominal temperature, dB/m; under each estimate. Sums to `total`. */
+export interface LineLossByFace {
+  readonly side: RoughnessSide;
+  readonly faces: readonly {
+    readonly face: 'underside' | 'top' | 'edges' | 'ground';
+    readonly smooth: number;
+    readonly finish: number;
+    readonly texture: number;
   }[];
+  readonly dielectric: number;
+  readonly total: number;
+  readonly effectivePermittivity: number;
+  readonly impedance: number;
+}
+
+/** How texture slows the wave on this board: s of both faces over the laminate thickness, against smooth faces. */
+export interface SlowWave {
+  readonly side: RoughnessSide;
+  /** Relative rise of effective permittivity of the feed line and of the widest patch. */
+  readonly lineRise: number;
+  readonly patchRise: number;
+  /** Hz and rad at band centre, from the patch's rise. */
+  readonly resonanceShift: number;
+  readonly tiltShift: number;
+  /** False where the laminate's permittivity is a design value, which holds the effect already: then it is printed, not applied. */
+  readonly applied: boolean;
 }
 
 export interface BoardStudy {
@@ -117,11 +180,17 @@ export interface BoardStudy {
   /** sha256 of everything the results depend on. */
   readonly hash: string;
   readonly nominal: Sweep;
-  /** One sweep per roughness model, the nominal one included (same object allowed). */
-  readonly models: readonly { readonly model: RoughnessModelName; readonly sweep: Sweep }[];
+  /** One sweep per estimate of the roughness band, the nominal one included where it is one of them (same object). */
+  readonly sides: readonly { readonly side: RoughnessSide; readonly sweep: Sweep }[];
   readonly tolerances: readonly ToleranceStudy[];
-  readonly lineLoss: ModelCurves; // dB/m over Hz, feed line width
-  readonly lossFactor: ModelCurves; // K over Rq in m, at the centre frequency and nominal temperature
+  /** dB/m over Hz, feed line. */
+  readonly lineLoss: ModelCurves;
+  /** K of the underside over Rq in m, band centre, nominal temperature; what else is known of the texture is kept. */
+  readonly lossFactor: ModelCurves;
+  /** Effective permittivity of the feed line over the Rq of both faces to the laminate, same conditions. */
+  readonly effectivePermittivity: ModelCurves;
+  readonly lineLossByFace: readonly LineLossByFace[];
+  readonly slowWave: readonly SlowWave[];
   readonly faces: readonly FaceState[];
   readonly flags: readonly ValidityFlag[];
   /** Quantities that this program cannot evaluate for this board, each with the reason. */

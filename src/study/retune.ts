@@ -9,7 +9,7 @@
  * the beam stands far off broadside. Only minima with the beam within half its beamwidth of broadside count, and of these the one
  * with the highest realized gain is taken.
  *
- * Conditions are nominal: nominal roughness model, nominal temperature, nominal figures. Widths, the feed line, offsets
+ * Conditions are nominal: nominal view of the texture, nominal temperature, nominal figures. Widths, the feed line, offsets
  * and the pitch stay.
  */
 import type { Analysis, Board, ColumnLayout } from '../manifest/model.js';
@@ -18,9 +18,10 @@ import { minimumBetween } from '../numerics/golden-section.js';
 import { arrayFigures, incidentWaves } from '../physics/array/index.js';
 import { type ColumnSolution, edgeNetwork } from '../physics/column/index.js';
 import { columnGeometry } from './geometry.js';
-import { obstacle } from './obstacle.js';
+import { nominalValues } from './nominal-values.js';
+import { columnObstacle } from './obstacle.js';
 import { surfaces } from './surfaces.js';
-import { nominalValues } from './values.js';
+import { nominalView } from './views.js';
 
 /** Twice as far as permittivities from 2.9 to 3.6 move a length. */
 const LOWEST = 0.85;
@@ -49,7 +50,7 @@ export function scaledLengths(columns: readonly ColumnLayout[], factor: number):
 
 /** A board with `retune` as it is to be studied; any other board, and one that is done, as it is. */
 export function retuneBoard(board: Board, analysis: Analysis): Board {
-  if (board.retune === undefined || board.retuned !== undefined || obstacle(board) !== undefined) return board;
+  if (board.retune === undefined || board.retuned !== undefined || columnObstacle(board) !== undefined) return board;
   const solve = solverAtCentre(board, analysis);
   const reflectionDb = (factor: number) => worstReflectionDb(solve(factor));
   const ratio = (HIGHEST / LOWEST) ** (1 / STEPS);
@@ -91,7 +92,7 @@ const hundredths = (db: number): number => Math.round(100 * db) / 100;
 function solverAtCentre(board: Board, { roughnessModel }: Analysis): (factor: number) => ColumnSolution {
   const values = nominalValues(board);
   const frequency = (board.band.low + board.band.high) / 2;
-  const state = surfaces(board, values, roughnessModel, frequency, board.temperature.nominalC);
+  const state = surfaces(board, values, nominalView(roughnessModel), frequency, board.temperature.nominalC);
   return (factor) => {
     // The drawing itself is not rounded; every other layout is what scaling prints.
     const layout = factor === 1 ? board.columns : scaledLengths(board.columns, factor);

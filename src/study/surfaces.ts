@@ -1,23 +1,23 @@
 /**
- * Surface impedance of each copper face of a board at a frequency and temperature, under one roughness model.
+ * Surface impedance of each copper face of a board at a frequency and temperature, under one view of its texture.
  */
 import type { Board } from '../manifest/model.js';
 import { complex } from '../numerics/complex.js';
 import type { Slab } from '../physics/column/index.js';
+import { MU0 } from '../physics/constants.js';
 import type { FaceImpedances } from '../physics/line/index.js';
 import { conductivityAt, platedImpedance, surfaceResistance } from '../physics/material/index.js';
-import {
-  type RoughFace,
-  type RoughnessModel,
-  referToElectrostaticPlane,
-  roughFace,
-  roughPlatedFace,
-} from '../physics/roughness/index.js';
+import { overFlatImpedance, type RoughFace, referToElectrostaticPlane } from '../physics/roughness/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
-import type { BoardValues } from './values.js';
+import { faceUnder } from './face-view.js';
+import { laminateNow } from './laminate.js';
+import type { BoardValues, FaceTexture } from './values.js';
+import type { RoughnessView } from './views.js';
 
 export interface Surfaces {
   readonly slab: Slab;
+  /** Of the slab for the feed line: another than the columns' only where the laminate differs in its plane. */
+  readonly linePermittivity: number;
   /** Between the electrostatic plane of the underside and the top, m. */
   readonly stripThickness: number;
   readonly faces: FaceImpedances;
@@ -26,36 +26,45 @@ export interface Surfaces {
   readonly flags: readonly ValidityFlag[];
 }
 
+/** Words for the faces that flags concern. */
+export const FACE_WORDS = {
+  underside: 'strip underside',
+  ground: 'ground',
+  outer: 'strip top and edges',
+} as const;
+export type FacePlace = keyof typeof FACE_WORDS;
+
 /**
  * Faces to the laminate are referred to their electrostatic planes and the slab made thinner by as much, so that one
  * height serves capacitance and inductance. Where the permittivity is a design value, fitted on lines with foil on, the
  * slowing of the wave by texture is in it already: then only the loss of the texture is taken.
+ *
+ * @param slowing overrides that, to see what texture does to the wave by itself
  */
 export function surfaces(
   board: Board,
   values: BoardValues,
-  model: RoughnessModel,
+  view: RoughnessView,
   frequency: number,
   temperatureC: number,
+  slowing = board.stackUp.laminate.material.permittivityKind === 'bulk',
 ): Surfaces {
-  const { strip, ground, laminate } = board.stackUp;
-  const rise = temperatureC - board.temperature.nominalC;
-  const permittivity = values.permittivity * (1 + values.permittivityTemperatureCoefficient * rise);
-  const lossTangent = values.lossTangent * (1 + values.lossTangentTemperatureCoefficient * rise);
+  const { strip, ground } = board.stackUp;
+  const laminate = laminateNow(board, values, frequency, temperatureC);
+  const { permittivity, lossTangent } = laminate;
   const stripSigma = conductivityAt(values.stripConductivity, temperatureC, strip.foil.temperatureCoefficient);
   const groundSigma = conductivityAt(values.groundConductivity, temperatureC, ground.foil.temperatureCoefficient);
-  const slowing = laminate.material.permittivityKind === 'bulk';
 
-  const towardsLaminate = (rq: number, conductivity: number) => {
-    const face = roughFace(model, { rq, frequency, conductivity, permittivity });
+  const towardsLaminate = (texture: FaceTexture, conductivity: number) => {
+    const face = faceUnder(view, texture, { frequency, conductivity, permittivity });
     const smooth = surfaceResistance(frequency, conductivity);
     const referred = slowing
       ? referToElectrostaticPlane(face)
       : { impedance: complex(face.impedance.re, smooth), heightReduction: 0 };
     return { face, ...referred, parts: { smooth, finish: 0, texture: face.impedance.re - smooth } };
   };
-  const underside = towardsLaminate(values.undersideRq, stripSigma);
-  const groundFace = towardsLaminate(values.groundRq, groundSigma);
+  const underside = towardsLaminate(values.underside, stripSigma);
+  const groundFace = towardsLaminate(values.ground, groundSigma);
 
   const smooth = surfaceResistance(frequency, stripSigma);
   const layers = strip.finish.layers.map((layer, i) => ({
@@ -64,7 +73,12 @@ export function surfaces(
     relativePermeability: layer.relativePermeability,
   }));
   const flat = platedImpedance(frequency, stripSigma, layers);
-  const outer: RoughFace = roughPlatedFace(model, flat, { rq: values.outerRq, frequency, permittivity: 1 });
+  // The half space with the flat layers' resistance feels the texture as they do.
+  const equal = (Math.PI * frequency * MU0) / (flat.re * flat.re);
+  const outer: RoughFace = overFlatImpedance(
+    faceUnder(view, values.outer, { frequency, conductivity: equal, permittivity: 1 }),
+    flat,
+  );
   const outerParts = { smooth, finish: flat.re - smooth, texture: outer.impedance.re - flat.re };
   return {
     slab: {
@@ -72,6 +86,7 @@ export function surfaces(
       lossTangent,
       height: values.height - underside.heightReduction - groundFace.heightReduction,
     },
+    linePermittivity: laminate.linePermittivity,
     stripThickness: values.stripThickness + underside.heightReduction,
     faces: {
       underside: underside.impedance,
@@ -80,6 +95,15 @@ export function surfaces(
       ground: groundFace.impedance,
     },
     parts: { underside: underside.parts, top: outerParts, edges: outerParts, ground: groundFace.parts },
-    flags: [...underside.face.flags, ...groundFace.face.flags, ...outer.flags],
+    flags: [
+      ...laminate.flags,
+      ...ofFace(underside.face, 'underside'),
+      ...ofFace(groundFace.face, 'ground'),
+      ...ofFace(outer, 'outer'),
+    ],
   };
 }
+
+/** Flags with the face they concern, so that one face's cannot hide another's. */
+const ofFace = ({ flags }: RoughFace, place: FacePlace): ValidityFlag[] =>
+  flags.map((flag) => ({ ...flag, code: `${flag.code}@${place}` }));

@@ -3,49 +3,58 @@ import type { Analysis, Board } from '../manifest/model.js';
 import { abs2 } from '../numerics/complex.js';
 import { arrayFigures, incidentWaves } from '../physics/array/index.js';
 import { type ColumnEngine, type ColumnProblem, edgeNetwork, type PowerBudget } from '../physics/column/index.js';
-import { SPEED_OF_LIGHT } from '../physics/constants.js';
-import { type MicrostripLine, microstripLine } from '../physics/line/index.js';
 import { type CutShape, farFieldPower, guidedWavePower } from '../physics/pattern/index.js';
-import type { RoughnessModel } from '../physics/roughness/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
-import { frequencies, temperatures } from './conditions.js';
+import { boardLine, columnLineFlags, feedWidth, linePoint, lossDbPerM } from './board-line.js';
+import { bandCentre, frequencies, temperatures } from './conditions.js';
 import { columnGeometry } from './geometry.js';
-import type { Cut, CutFigures, PointResult, PowerShares, Sweep } from './results.js';
+import { columnObstacle } from './obstacle.js';
+import type { Cut, CutFigures, LinePoint, PointResult, PowerShares, Sweep } from './results.js';
 import { type Surfaces, surfaces } from './surfaces.js';
 import type { BoardValues } from './values.js';
-
-/** dB per neper. */
-const DB_PER_NEPER = 20 / Math.LN10;
+import type { RoughnessView } from './views.js';
 
 export interface SweepResult {
   readonly sweep: Sweep;
   readonly flags: readonly ValidityFlag[];
 }
 
+/** The feed line at every point, and the columns where nothing stands in their way. */
 export function runSweep(
   board: Board,
   analysis: Analysis,
   id: string,
   label: string,
   values: BoardValues,
-  model: RoughnessModel,
+  view: RoughnessView,
 ): SweepResult {
   const list = frequencies(board, analysis);
-  const engine = engineFor(board, values);
+  const engine = columnObstacle(board) === undefined ? engineFor(board, values) : undefined;
+  const width = feedWidth(board);
   const flags = new Map<string, ValidityFlag>();
-  const points = temperatures(board).flatMap((temperatureC) =>
-    list.map((frequency) => {
+  const keep = (found: readonly ValidityFlag[]): void => {
+    for (const flag of found) if (!flags.has(flag.code)) flags.set(flag.code, flag);
+  };
+  const points: PointResult[] = [];
+  const line: LinePoint[] = [];
+  for (const temperatureC of temperatures(board))
+    for (const frequency of list) {
+      const state = surfaces(board, values, view, frequency, temperatureC);
+      const feed = boardLine(board, state, values, width, frequency);
+      line.push(linePoint(feed, frequency, temperatureC));
+      keep(state.flags);
+      keep(feed.flags);
+      if (!engine) continue;
       const centre = id === 'nominal' && temperatureC === board.temperature.nominalC && isCentre(board, frequency);
-      const { point, found } = evaluate(board, values, engine, model, frequency, temperatureC, centre);
-      for (const flag of found) if (!flags.has(flag.code)) flags.set(flag.code, flag);
-      return point;
-    }),
-  );
-  return { sweep: { id, label, points }, flags: [...flags.values()] };
+      if (centre) keep(columnLineFlags(state, width + values.etch, feed, frequency));
+      const { point, found } = evaluate(board, values, engine, state, frequency, temperatureC, centre);
+      points.push(point);
+      keep(found);
+    }
+  return { sweep: { id, label, points, line }, flags: [...flags.values()] };
 }
 
-const isCentre = (board: Board, frequency: number): boolean =>
-  Math.abs(frequency - (board.band.low + board.band.high) / 2) < 1;
+const isCentre = (board: Board, frequency: number): boolean => Math.abs(frequency - bandCentre(board)) < 1;
 
 /** Preparing a layout costs as much as several frequencies, and most sweeps share one: the last few are kept. */
 const engines = new Map<string, ColumnEngine>();
@@ -67,35 +76,26 @@ function engineFor(board: Board, values: BoardValues): ColumnEngine {
   return engine;
 }
 
-/** Microstrip of this width on the board at one condition. */
-export function boardLine(state: Surfaces, width: number, frequency: number): MicrostripLine {
-  const { slab, stripThickness, faces } = state;
-  const geometry = { width, height: slab.height, thickness: stripThickness, permittivity: slab.permittivity };
-  return microstripLine({ geometry, frequency, lossTangent: slab.lossTangent, faces });
-}
-
 function evaluate(
   board: Board,
   values: BoardValues,
   engine: ColumnEngine,
-  model: RoughnessModel,
+  state: Surfaces,
   frequency: number,
   temperatureC: number,
   closure: boolean,
 ): { point: PointResult; found: readonly ValidityFlag[] } {
-  const state = surfaces(board, values, model, frequency, temperatureC);
   const solution = engine.solve({ frequency, ...state });
   const waves = incidentWaves(board.feed);
   const figures = arrayFigures(solution, waves);
-  const lossDbPerM = (width: number): number => DB_PER_NEPER * boardLine(state, width, frequency).gamma.re;
-  const line = boardLine(state, board.columns[0].feedLine.width + values.etch, frequency);
+  const lossAt = (width: number): number => lossDbPerM(boardLine(board, state, values, width, frequency));
 
   // Power needed at the feed's input for the waves at the columns, each path with its own loss.
   let [delivered, supplied] = [0, 0];
   board.feed.forEach((path, c) => {
     const { feedLine } = board.columns[c];
-    const own = lossDbPerM(feedLine.width + values.etch) * feedLine.length;
-    const given = path.line ? lossDbPerM(path.line.width + values.etch) * path.line.length : values.feedLossDb[c];
+    const own = lossAt(feedLine.width) * feedLine.length;
+    const given = path.line ? lossAt(path.line.width) * path.line.length : values.feedLossDb[c];
     const power = abs2(waves[c]);
     delivered += power;
     supplied += power * 10 ** ((own + given) / 10);
@@ -127,8 +127,6 @@ function evaluate(
     referenceImpedance: solution.referenceImpedance,
     elevation: cutFigures(figures.elevation),
     azimuth: cutFigures(figures.azimuth),
-    lineLossDbPerM: DB_PER_NEPER * line.gamma.re,
-    lineEffectivePermittivity: (line.gamma.im / ((2 * Math.PI * frequency) / SPEED_OF_LIGHT)) ** 2,
     powerResidual: figures.powerResidual,
     farFieldClosure: closure
       ? (farFieldPower(figures.excited.edges) + guidedWavePower(figures.excited.edges)) /
@@ -136,7 +134,7 @@ function evaluate(
       : Number.NaN,
     cuts: { elevation: cut('elevation', figures.elevation), azimuth: cut('azimuth', figures.azimuth) },
   };
-  return { point, found: [...state.flags, ...solution.flags, ...line.flags] };
+  return { point, found: solution.flags };
 }
 
 function cutFigures(shape: CutShape): CutFigures {

@@ -51,7 +51,7 @@ export function planAllowances(
   items: readonly AskedItem[],
 ): AllowanceTask[] {
   const { board } = study;
-  if (study.nominal.points.length === 0) return [];
+  if (study.nominal.line.length === 0) return [];
   const seen = new Set<string>();
   return items.flatMap((item) =>
     item.figures.flatMap(({ board: id, path }) => {
@@ -99,7 +99,7 @@ function guarded(study: BoardStudy, verdict: BoardVerdict, set: RequirementSet, 
 }
 
 function guardOf({ parts }: RequirementVerdict, own: string | undefined): number {
-  // The spread over the roughness models is not among them: every model is searched by itself.
+  // The spread over the roughness band is not among them: every estimate is searched by itself.
   const others = parts.filter(({ kind, id }) => kind !== 'roughness' && id !== `tolerance-${own}`);
   return Math.hypot(...others.map(({ adverse }) => adverse));
 }

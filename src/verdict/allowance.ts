@@ -1,6 +1,9 @@
 /**
  * Allowance: the worst value of one item, moved alone, at which every binding requirement still meets.
  *
+ * It is searched under every estimate of the roughness band, never under a named model: one with a ceiling finds no limit where
+ * copper has one.
+ *
  * It asks how far the tolerance of the item may reach. So the moved item takes the place of its own tolerance in the rule
  * of the verdict: its effect and what stays uncertain combine by root sum of squares, against the margin at nominal.
  * Where a board meets, no allowance is therefore tighter than the declared spread; where one item spoils the verdict,
@@ -14,8 +17,8 @@ import type { Analysis, Board, Figure, Requirement, RoughnessModelName } from '.
 import type { HeldParameter } from '../manifest/procurement-model.js';
 import { bracketedRoot } from '../numerics/brent.js';
 import { conductivityAt } from '../physics/material/index.js';
-import { roughFace } from '../physics/roughness/index.js';
-import { movables, ROUGHNESS_MODELS, runSweep } from '../study/index.js';
+import { saturationRq } from '../physics/roughness/index.js';
+import { type BoardValues, movables, ROUGHNESS_SIDES, type RoughnessSide, runSweep } from '../study/index.js';
 import { limitOf, marginOf } from './quantities.js';
 import { worstValue } from './worst.js';
 
@@ -39,8 +42,6 @@ export interface AllowanceTask {
 export type AllowanceOutcome =
   /** `permitted` still meets; `beyond`, within the tolerance of the search, no longer does. */
   | { readonly kind: 'limited'; readonly permitted: number; readonly beyond: number; readonly requirementId: string }
-  /** The model has reached its ceiling and the limit was not: it cannot say how rough is too rough. */
-  | { readonly kind: 'saturated'; readonly searchedTo: number }
   | { readonly kind: 'not limited'; readonly searchedTo: number }
   | { readonly kind: 'not met at nominal'; readonly requirementIds: readonly string[] };
 
@@ -49,9 +50,17 @@ export interface AllowanceResult {
   readonly parameter: HeldParameter;
   readonly direction: AllowanceTask['direction'];
   readonly nominal: number;
-  readonly models: readonly { readonly model: RoughnessModelName; readonly outcome: AllowanceOutcome }[];
+  readonly sides: readonly { readonly side: RoughnessSide; readonly outcome: AllowanceOutcome }[];
+  /** The model that the analysis names has reached its ceiling within the search of a texture: no limit can come from it. */
+  readonly ceiling?: ModelCeiling;
   /** Sweeps run, for the cost of a build. */
   readonly sweeps: number;
+}
+
+export interface ModelCeiling {
+  readonly model: RoughnessModelName;
+  /** Rq from which it tells no foils apart, m. */
+  readonly from: number;
 }
 
 /** A root is found to this share of its distance from nominal. */
@@ -63,7 +72,7 @@ const COARSE_STEP = 1e12;
 
 /** Margin of each requirement, in the order of the task; −∞ where there is no value, for then nothing can be said to meet. */
 type Margins = readonly number[];
-type ByModel = Readonly<Record<RoughnessModelName, Margins>>;
+type BySide = Readonly<Record<RoughnessSide, Margins>>;
 
 interface Standing {
   /** Smallest reserve over the requirements, in shares of its guard: 0 or more where all meet. */
@@ -73,7 +82,7 @@ interface Standing {
 }
 
 /**
- * Searches one item in one direction under every roughness model.
+ * Searches one item in one direction under every estimate of the roughness band.
  *
  * Evaluated at both band edges and the centre, at the lowest, nominal and highest temperature. From nominal outward in
  * growing steps until a requirement stops meeting, then between the last two points; a requirement that fails and
@@ -83,43 +92,35 @@ export function searchAllowance(board: Board, analysis: Analysis, task: Allowanc
   const item = movables(board).find(({ figure }) => figure.path === task.path);
   if (!item) throw new RangeError(`board ${board.id} has no figure ${task.path}`);
   const coarse = { ...analysis, frequencyStep: COARSE_STEP };
-  const known = new Map<number, ByModel>();
-  const evaluate = (value: number): ByModel => {
+  const known = new Map<number, BySide>();
+  const evaluate = (value: number): BySide => {
     const found = known.get(value) ?? margins(board, coarse, item.move(value), task.requirements);
     known.set(value, found);
     return found;
   };
   const { figure } = item;
   const outcomes = outcomesOf(evaluate, known, figure, task);
-  const limited = (model: RoughnessModelName) => outcomes[model].kind !== 'not limited';
+  const ceiling = ceilingOf(board, analysis, task);
   return {
     path: task.path,
     parameter: task.parameter,
     direction: task.direction,
     nominal: figure.value,
-    models: ROUGHNESS_MODELS.map((model) => {
-      const outcome = outcomes[model];
-      const stuck = outcome.kind === 'not limited' && limited('gradient') && isSaturated(board, model, task);
-      return { model, outcome: stuck ? { kind: 'saturated', searchedTo: task.end } : outcome };
-    }),
-    sweeps: known.size * ROUGHNESS_MODELS.length,
+    sides: ROUGHNESS_SIDES.map((side) => ({ side, outcome: outcomes[side] })),
+    ...(ceiling ? { ceiling } : {}),
+    sweeps: known.size * ROUGHNESS_SIDES.length,
   };
 }
 
-function margins(
-  board: Board,
-  analysis: Analysis,
-  values: Parameters<typeof runSweep>[4],
-  requirements: readonly Guarded[],
-): ByModel {
-  const of = (model: RoughnessModelName): Margins => {
-    const { sweep } = runSweep(board, analysis, 'allowance', 'allowance', values, model);
+function margins(board: Board, analysis: Analysis, values: BoardValues, requirements: readonly Guarded[]): BySide {
+  const of = (side: RoughnessSide): Margins => {
+    const { sweep } = runSweep(board, analysis, 'allowance', 'allowance', values, side);
     return requirements.map(({ requirement }) => {
       const worst = worstValue(sweep, requirement, board);
       return 'notEvaluated' in worst ? -Infinity : marginOf(limitOf(requirement), worst.value);
     });
   };
-  return { hammerstad: of('hammerstad'), groiss: of('groiss'), gradient: of('gradient') };
+  return { low: of('low'), middle: of('middle'), high: of('high') };
 }
 
 /** How the requirements stand with the item moved, from the margins at nominal and where it is. */
@@ -134,18 +135,18 @@ export function standingOf(requirements: readonly Guarded[], nominal: Margins, m
 }
 
 function outcomesOf(
-  evaluate: (value: number) => ByModel,
-  known: ReadonlyMap<number, ByModel>,
+  evaluate: (value: number) => BySide,
+  known: ReadonlyMap<number, BySide>,
   { value: nominal, minus, plus }: Figure,
   { direction, end, requirements }: AllowanceTask,
-): Record<RoughnessModelName, AllowanceOutcome> {
+): Record<RoughnessSide, AllowanceOutcome> {
   const start = evaluate(nominal);
   const sign = direction === 'up' ? 1 : -1;
   const reach = Math.abs(end - nominal);
   const first = Math.max(direction === 'up' ? plus : minus, reach * SHORTEST_STEP);
 
-  const of = (model: RoughnessModelName): AllowanceOutcome => {
-    const standing = (value: number): Standing => standingOf(requirements, start[model], evaluate(value)[model]);
+  const of = (side: RoughnessSide): AllowanceOutcome => {
+    const standing = (value: number): Standing => standingOf(requirements, start[side], evaluate(value)[side]);
     const at = (value: number): number => standing(value).reserve;
     if (at(nominal) < 0) return { kind: 'not met at nominal', requirementIds: standing(nominal).failing };
     for (let step = first; ; step *= 2) {
@@ -153,7 +154,7 @@ function outcomesOf(
       if (at(value) < 0) break;
       if (value === end) return { kind: 'not limited', searchedTo: end };
     }
-    // Points that other models asked for bracket the root as well.
+    // Points that other estimates asked for bracket the root as well.
     const points = [...known.keys()].sort((a, b) => sign * (a - b));
     const out = points.findIndex((value) => at(value) < 0);
     const [inside, outside] = [points[out - 1], points[out]];
@@ -168,19 +169,23 @@ function outcomesOf(
       requirementId: standing(root.outside).binding,
     };
   };
-  // The gradient model first: it limits textures, and its points serve the others.
-  const gradient = of('gradient');
-  return { gradient, groiss: of('groiss'), hammerstad: of('hammerstad') };
+  // The high estimate first: it limits textures, and its points serve the others.
+  const high = of('high');
+  return { high, middle: of('middle'), low: of('low') };
 }
 
 const TEXTURES: readonly HeldParameter[] = ['treated-face-texture', 'untreated-face-texture', 'outer-face-texture'];
 
-/** Whether a roughness model has reached its ceiling at the end of the search. */
-function isSaturated(board: Board, model: RoughnessModelName, { parameter, direction, end }: AllowanceTask): boolean {
-  if (!TEXTURES.includes(parameter) || direction === 'down') return false;
+/** Where the named model, if there is one, stops telling roughnesses apart before the search of a texture ends. */
+function ceilingOf(
+  board: Board,
+  { roughnessModel: model }: Analysis,
+  { parameter, direction, end }: AllowanceTask,
+): ModelCeiling | undefined {
+  if (model === 'band' || !TEXTURES.includes(parameter) || direction === 'down') return undefined;
   const { foil } = board.stackUp.strip;
   const conductivity = conductivityAt(foil.conductivity.value, board.temperature.nominalC, foil.temperatureCoefficient);
   const frequency = (board.band.low + board.band.high) / 2;
-  const face = roughFace(model, { rq: end, frequency, conductivity, permittivity: 1 });
-  return face.flags.some(({ severity }) => severity === 'saturated');
+  const from = saturationRq(model, { frequency, conductivity, permittivity: 1 });
+  return from === undefined || from > end ? undefined : { model, from };
 }

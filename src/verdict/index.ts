@@ -2,6 +2,7 @@ export {
   type AllowanceOutcome,
   type AllowanceResult,
   type AllowanceTask,
+  type ModelCeiling,
   searchAllowance,
 } from './allowance.js';
 export { ALLOWANCE_REACH, planAllowances } from './allowance-plan.js';
@@ -13,5 +14,5 @@ export { type Allowances, type HeldLimits, type HeldSide, heldLimits, type SideA
 export { type BoardVerdict, judgeBoard, judgePack, judgeRequirement, type RequirementVerdict } from './judge.js';
 export { boardsOnOffer, type Offer, type ProcurementResults } from './procurement-results.js';
 export { marginOf, QUANTITIES, type Quantity, type QuantityUnit, quantityOf, quantityTitle } from './quantities.js';
-export type { UncertaintyPart } from './uncertainty.js';
+export type { SideWorst, UncertaintyPart } from './uncertainty.js';
 export { type Place, type WorstValue, worstValue } from './worst.js';

@@ -4,7 +4,7 @@ import { type BoardStatus, overallOf } from './board-status.js';
 import { decide, type RequirementStatus } from './decision.js';
 import { judgeDeclared } from './declared.js';
 import { limitOf, marginOf, quantityOf } from './quantities.js';
-import { type ModelWorst, type UncertaintyPart, uncertaintyOf } from './uncertainty.js';
+import { type SideWorst, type UncertaintyPart, uncertaintyOf } from './uncertainty.js';
 import { type Place, worstValue } from './worst.js';
 
 export interface RequirementVerdict {
@@ -26,8 +26,12 @@ export interface RequirementVerdict {
   /** Distance to the limit, positive inside. */
   readonly margin?: number;
   readonly parts: readonly UncertaintyPart[];
-  readonly models: readonly ModelWorst[];
-  /** How far the margin may be smaller, and larger, all parts together; 0 for declared properties. */
+  /** Worst value under each estimate of the roughness band. */
+  readonly sides: readonly SideWorst[];
+  /**
+   * How far the margin may be smaller, and larger, all parts together; 0 for declared properties. One of them may be negative
+   * where a named roughness model puts the nominal margin outside the band.
+   */
   readonly adverse?: number;
   readonly favourable?: number;
   /** Why it is not evaluated. */
@@ -47,7 +51,7 @@ type Calculated = Omit<RequirementVerdict, 'requirementId' | 'quantity' | 'weigh
   readonly status: 'meets' | 'undecided' | 'misses' | 'not evaluated';
 };
 
-const NO_NUMBERS = { parts: [], models: [] } as const;
+const NO_NUMBERS = { parts: [], sides: [] } as const;
 
 function calculate(study: BoardStudy, requirement: Requirement): Calculated {
   const { unit } = quantityOf(requirement.quantity);
@@ -71,11 +75,11 @@ function calculate(study: BoardStudy, requirement: Requirement): Calculated {
   if ('notEvaluated' in uncertainty) {
     return { ...NO_NUMBERS, ...found, status: 'not evaluated', reason: uncertainty.notEvaluated };
   }
-  const { parts, models, lower, upper } = uncertainty;
+  const { parts, sides, lower, upper } = uncertainty;
   return {
     ...found,
     parts,
-    models,
+    sides,
     adverse: margin - lower,
     favourable: upper - margin,
     status: decide({ lower, upper }),

@@ -1,6 +1,6 @@
 import type { Board, QuantityName, Requirement } from '../manifest/model.js';
 import { abs } from '../numerics/complex.js';
-import type { Cut, CutFigures, PointResult } from '../study/results.js';
+import type { Cut, CutFigures, LinePoint, PointResult } from '../study/results.js';
 import { highestExcess } from './mask.js';
 
 /** Unit in which limits, values and margins of a quantity are given. `1` is a plain ratio; empty for declared text. */
@@ -24,7 +24,10 @@ export interface Quantity {
   readonly cut: 'needed' | 'none';
   /** One sentence for the reader of a requirement. */
   readonly definition: string;
+  /** From the columns at one point of a sweep … */
   readonly at: (point: PointResult, context: PointContext) => PointValue;
+  /** … or from the feed line, which is evaluated where columns are not; then `at` has none. */
+  readonly onLine?: (point: LinePoint) => PointValue;
 }
 
 const DEGREES = 180 / Math.PI;
@@ -158,8 +161,10 @@ const CATALOGUE: Readonly<Record<QuantityName, Omit<Quantity, 'name'>>> = {
     title: 'Line loss',
     unit: 'dB/cm',
     cut: 'none',
-    definition: 'Attenuation of the feed line on this stack-up per centimetre, conductor and dielectric together.',
-    at: (point) => finite(point.lineLossDbPerM / 100, 'line loss was not evaluated there'),
+    definition:
+      'Attenuation of the feed line on this stack-up per centimetre, conductor and dielectric together, a cover layer included.',
+    at: () => ({ missing: 'line loss is a figure of the line' }),
+    onLine: (point) => finite(point.lossDbPerM / 100, 'line loss was not evaluated there'),
   },
   declared: {
     title: 'Declared property',

@@ -1,6 +1,7 @@
-import type { Requirement, RoughnessModelName } from '../manifest/model.js';
-import type { BoardStudy, Sweep, ToleranceStudy } from '../study/results.js';
+import type { Requirement } from '../manifest/model.js';
+import type { BoardStudy, FaceState, RoughnessSide, Sweep, ToleranceStudy } from '../study/results.js';
 import { DIRECTION_ERROR, engineAccuracyOf } from './engine-accuracy.js';
+import { lineOutside } from './line-range.js';
 import { limitOf, marginOf } from './quantities.js';
 import { type WorstValue, worstValue } from './worst.js';
 
@@ -11,26 +12,27 @@ export interface UncertaintyPart {
   readonly label: string;
   /** What was done and where the figure comes from. */
   readonly detail: string;
-  /** How far the margin may be smaller than the nominal one, ≥ 0. */
+  /** How far the margin may be smaller than the nominal one, ≥ 0; for roughness see `combine`. */
   readonly adverse: number;
-  /** How far the margin may be larger than the nominal one, ≥ 0. */
+  /** How far the margin may be larger than the nominal one, ≥ 0; for roughness see `combine`. */
   readonly favourable: number;
-  /** Worst values with the tolerance at its lower and upper limit, nominal roughness model. */
+  /** Worst values with the tolerance at its lower and upper limit, nominal view of the texture. */
   readonly atLimits?: { readonly low: number; readonly high: number };
 }
 
-export interface ModelWorst {
-  readonly model: RoughnessModelName;
+/** Worst value under one estimate of the roughness band. */
+export interface SideWorst {
+  readonly side: RoughnessSide;
   readonly value: number;
   readonly margin: number;
 }
 
 export interface Uncertainty {
   readonly parts: readonly UncertaintyPart[];
-  readonly models: readonly ModelWorst[];
-  /** Smallest margin over the models less the root sum of squares of the adverse parts. */
+  readonly sides: readonly SideWorst[];
+  /** Smallest margin over the estimates less the root sum of squares of the adverse parts. */
   readonly lower: number;
-  /** Largest margin over the models plus the root sum of squares of the favourable parts. */
+  /** Largest margin over the estimates plus the root sum of squares of the favourable parts. */
   readonly upper: number;
 }
 
@@ -46,9 +48,9 @@ const rss = (values: readonly number[]): number => Math.hypot(...values);
 /**
  * Uncertainty of a worst value.
  *
- * Engine accuracy and tolerances are independent and combine by root sum of squares. The spread over the roughness
- * models is added linearly, because nobody knows which model is right for this copper: it is not a random error.
- * All parts are taken over all models, so that the choice of the nominal one moves nothing but the nominal value.
+ * Engine accuracy and tolerances are independent and combine by root sum of squares. The spread from the low to the high
+ * estimate of the roughness band is added linearly, because it is what nobody knows of this copper: it is not a random error.
+ * All parts are taken over the estimates, so that the choice of what is nominal moves nothing but the nominal value.
  */
 export function uncertaintyOf(study: BoardStudy, requirement: Requirement, nominal: WorstValue): UncertaintyResult {
   try {
@@ -68,17 +70,18 @@ function combine(study: BoardStudy, requirement: Requirement, nominal: WorstValu
     return worst;
   };
   const nominalMargin = margin(nominal.value);
-  const models = study.models.map(({ model, sweep }) => {
-    const worst = under(sweep, `with the ${model} roughness model`);
-    return { model, sweep, worst, value: worst.value, margin: margin(worst.value) };
+  const sides = study.sides.map(({ side, sweep }) => {
+    const worst = under(sweep, `under the ${side} estimate of the texture`);
+    return { side, sweep, worst, value: worst.value, margin: margin(worst.value) };
   });
-  const all = [{ sweep: study.nominal, worst: nominal, margin: nominalMargin }, ...models];
+  // A study without its band has its nominal state alone.
+  const all = sides.length > 0 ? sides : [{ sweep: study.nominal, worst: nominal, margin: nominalMargin }];
   const lowest = all.reduce((a, b) => (b.margin < a.margin ? b : a));
   const highest = all.reduce((a, b) => (b.margin > a.margin ? b : a));
   const moved = (sweep: Sweep) =>
     [-DIRECTION_ERROR, DIRECTION_ERROR].map((shift) => margin(under(sweep, 'with the pattern moved', shift).value));
   const engine = [
-    engineLevel(requirement, lowest.worst, highest.worst),
+    engineLevel(study, requirement, lowest.worst, highest.worst),
     ...(requirement.quantity === 'pattern_mask'
       ? [
           engineDirection(
@@ -89,32 +92,53 @@ function combine(study: BoardStudy, requirement: Requirement, nominal: WorstValu
       : []),
   ];
   const tolerances = study.tolerances.map((tolerance) =>
-    tolerancePart(tolerance, (sweep, assumption) => under(sweep, assumption).value, margin, nominalMargin, models),
+    tolerancePart(tolerance, (sweep, assumption) => under(sweep, assumption).value, margin, nominalMargin, sides),
   );
+  // Signed: a named model may put the nominal margin outside the band, and the whole must still be the sum of its parts.
   const roughness: UncertaintyPart = {
     id: 'roughness',
     kind: 'roughness',
-    label: 'Roughness model',
-    detail: `worst value under each of ${models.map((m) => m.model).join(', ')}; added linearly`,
+    label: 'Roughness, low to high estimate',
+    detail: roughnessDetail(study.faces, lowest.margin > nominalMargin || highest.margin < nominalMargin),
     adverse: nominalMargin - lowest.margin,
     favourable: highest.margin - nominalMargin,
   };
   const independent = [...engine, ...tolerances];
   return {
     parts: [...engine, roughness, ...tolerances],
-    models: models.map(({ model, value, margin: m }) => ({ model, value, margin: m })),
+    sides: sides.map(({ side, value, margin: m }) => ({ side, value, margin: m })),
     lower: lowest.margin - rss(independent.map((p) => p.adverse)),
     upper: highest.margin + rss(independent.map((p) => p.favourable)),
   };
 }
 
-/** Engine accuracy at the least favourable value over the models (adverse) and at the most favourable (favourable). */
-function engineLevel(requirement: Requirement, lowest: WorstValue, highest: WorstValue): UncertaintyPart {
+/** `worst value under …, from what is known of the faces (strip underside: Rq only); added linearly`. */
+function roughnessDetail(faces: readonly FaceState[], outside: boolean): string {
+  const known = new Map<string, string[]>();
+  for (const { face, known: what } of faces) known.set(what, [...(known.get(what) ?? []), face.replace(/ \(.*$/, '')]);
+  const words = [...known].map(([what, of]) => `${of.join(', ')}: ${what}`).join('; ');
+  return [
+    'worst value under the low, middle and high estimate',
+    ...(words === '' ? [] : [` for what is known of the copper (${words})`]),
+    '; added linearly',
+    ...(outside ? ['. The named model puts the nominal value outside the band, which decides'] : []),
+  ].join('');
+}
+
+/** Engine accuracy at the least favourable value over the estimates (adverse) and at the most favourable (favourable). */
+function engineLevel(
+  { board }: BoardStudy,
+  requirement: Requirement,
+  lowest: WorstValue,
+  highest: WorstValue,
+): UncertaintyPart {
   const accuracy = engineAccuracyOf(requirement.quantity);
   const lowestPiece = Math.min(...(requirement.mask ?? []).map((piece) => piece.levelDb));
+  const outside = requirement.quantity === 'line_loss' ? lineOutside(board) : [];
   const spread = (worst: WorstValue) =>
     accuracy.spread(requirement.quantity === 'pattern_mask' ? lowestPiece : worst.value, {
       reflection: Math.sqrt(Math.max(0, 1 - worst.mismatch)),
+      outside: outside.length > 0,
     });
   const [against, forIt] = [spread(lowest), spread(highest)];
   const rising = limitOf(requirement).direction === 'at_most';
@@ -122,7 +146,7 @@ function engineLevel(requirement: Requirement, lowest: WorstValue, highest: Wors
     id: 'engine',
     kind: 'engine',
     label: 'Engine accuracy',
-    detail: `${accuracy.statement} (${accuracy.source})`,
+    detail: `${accuracy.statement} (${accuracy.source})${outside.length === 0 ? '' : `; outside here: ${outside.join('; ')}`}`,
     adverse: rising ? against.up : against.down,
     favourable: rising ? forIt.down : forIt.up,
   };
@@ -142,7 +166,7 @@ function tolerancePart(
   worstOf: (sweep: Sweep, assumption: string) => number,
   margin: (value: number) => number,
   nominalMargin: number,
-  models: readonly ModelWorst[],
+  sides: readonly SideWorst[],
 ): UncertaintyPart {
   const effect = (low: number, high: number, still: number) => ({
     adverse: Math.max(0, still - Math.min(margin(low), margin(high))),
@@ -153,19 +177,20 @@ function tolerancePart(
     high: worstOf(high, `${tolerance.label} at its upper limit`),
   });
   const atLimits = ends(tolerance.low, tolerance.high);
-  const effects = [effect(atLimits.low, atLimits.high, nominalMargin)];
-  for (const { model, low, high } of tolerance.byModel ?? []) {
-    const still = models.find((m) => m.model === model);
+  const bySide = tolerance.bySide ?? [];
+  const effects = bySide.flatMap(({ side, low, high }) => {
+    const still = sides.find((s) => s.side === side);
     const at = ends(low, high);
-    if (still !== undefined) effects.push(effect(at.low, at.high, still.margin));
-  }
+    return still === undefined ? [] : [effect(at.low, at.high, still.margin)];
+  });
+  if (effects.length === 0) effects.push(effect(atLimits.low, atLimits.high, nominalMargin));
   return {
     id: `tolerance-${tolerance.id}`,
     kind: 'tolerance',
     label: tolerance.label,
     detail:
       effects.length > 1
-        ? 'moved alone to both limits under every roughness model; the largest effect counts'
+        ? 'moved alone to both limits under every estimate of the texture; the largest effect counts'
         : 'moved alone to both limits',
     adverse: Math.max(...effects.map((e) => e.adverse)),
     favourable: Math.max(...effects.map((e) => e.favourable)),

@@ -1,6 +1,6 @@
 import type { Board, Requirement } from '../manifest/model.js';
-import type { PointResult, Sweep } from '../study/results.js';
-import { limitOf, marginOf, quantityOf } from './quantities.js';
+import type { LinePoint, PointResult, Sweep } from '../study/results.js';
+import { limitOf, marginOf, type PointContext, type PointValue, type Quantity, quantityOf } from './quantities.js';
 import { celsiusRange, celsiusText, gigahertzRange, gigahertzText } from './wording.js';
 
 export interface Place {
@@ -12,7 +12,7 @@ export interface Place {
 export interface WorstValue {
   readonly value: number;
   readonly where: Place;
-  /** 1 − reflected/incident power of the driven array at that place. */
+  /** 1 − reflected/incident power of the driven array at that place; 1 for a line by itself. */
   readonly mismatch: number;
 }
 
@@ -60,22 +60,35 @@ export function conditionOf(requirement: Requirement, board: Board) {
   };
 }
 
+/** One point of a sweep as a quantity sees it. */
+interface Sample extends Place {
+  readonly mismatch: number;
+  readonly found: () => PointValue;
+}
+
+/** Of the columns, or of the feed line. */
+function samplesOf({ points, line }: Sweep, { at, onLine }: Quantity, context: PointContext): readonly Sample[] {
+  const place = ({ frequency, temperatureC }: PointResult | LinePoint): Place => ({ frequency, temperatureC });
+  if (onLine) return line.map((point) => ({ ...place(point), mismatch: 1, found: () => onLine(point) }));
+  return points.map((point) => ({ ...place(point), mismatch: point.mismatch, found: () => at(point, context) }));
+}
+
 interface Grid {
   readonly frequencies: readonly number[];
   readonly temperatures: readonly number[];
-  readonly point: (temperature: number, frequency: number) => PointResult;
+  readonly point: (temperature: number, frequency: number) => Sample;
 }
 
-function gridOf(sweep: Sweep): Grid {
-  const frequencies = distinct(sweep.points.map((p) => p.frequency));
-  const temperatures = distinct(sweep.points.map((p) => p.temperatureC));
-  const byPlace = new Map(sweep.points.map((p) => [`${p.temperatureC}/${p.frequency}`, p]));
+function gridOf(id: string, samples: readonly Sample[]): Grid {
+  const frequencies = distinct(samples.map((p) => p.frequency));
+  const temperatures = distinct(samples.map((p) => p.temperatureC));
+  const byPlace = new Map(samples.map((p) => [`${p.temperatureC}/${p.frequency}`, p]));
   return {
     frequencies,
     temperatures,
     point: (t, f) => {
       const point = byPlace.get(`${temperatures[t]}/${frequencies[f]}`);
-      if (point === undefined) throw new RangeError(`sweep ${sweep.id} is not a full grid of band and temperature`);
+      if (point === undefined) throw new RangeError(`sweep ${id} is not a full grid of band and temperature`);
       return point;
     },
   };
@@ -105,19 +118,19 @@ function outsideReason(grid: Grid, requirement: Requirement, board: Board): stri
  * @throws RangeError when the sweep is not a full grid over band and temperature
  */
 export function worstValue(sweep: Sweep, requirement: Requirement, board: Board, patternShift = 0): Worst {
-  if (sweep.points.length === 0) return { notEvaluated: 'nothing was evaluated for this board' };
-  const grid = gridOf(sweep);
+  const quantity = quantityOf(requirement.quantity);
+  const samples = samplesOf(sweep, quantity, { requirement, board, patternShift });
+  if (samples.length === 0) return { notEvaluated: 'nothing was evaluated for this board' };
+  const grid = gridOf(sweep.id, samples);
   const outside = outsideReason(grid, requirement, board);
   if (outside !== undefined) return { notEvaluated: outside };
   const { band, temperature } = conditionOf(requirement, board);
   const fs = stations(grid.frequencies, band.low, band.high) ?? [];
   const ts = stations(grid.temperatures, temperature.lowC, temperature.highC) ?? [];
-  const quantity = quantityOf(requirement.quantity);
   const limit = limitOf(requirement);
-  const context = { requirement, board, patternShift };
-  const memo = new Map<PointResult, ReturnType<typeof quantity.at>>();
-  const valueAt = (point: PointResult) => {
-    const known = memo.get(point) ?? quantity.at(point, context);
+  const memo = new Map<Sample, PointValue>();
+  const valueAt = (point: Sample) => {
+    const known = memo.get(point) ?? point.found();
     memo.set(point, known);
     return known;
   };
@@ -150,5 +163,5 @@ const weights = (s: Between): readonly (readonly [number, number])[] =>
         [s.upper, s.weight],
       ];
 
-const missingReason = (missing: string, point: PointResult): string =>
+const missingReason = (missing: string, point: Place): string =>
   `${missing} (${gigahertzText(point.frequency)}, ${celsiusText(point.temperatureC)})`;

@@ -9,11 +9,13 @@ import { carryOut } from '../../src/cli/study-job.js';
 import { inThisThread } from '../../src/cli/workers.js';
 import { type Files, packFilesUnder, realDisk } from '../../src/publish/index.js';
 import { findBrowser, startBrowser } from '../browser/browser.js';
+import { measureSolvers } from './solvers.js';
 
 /**
  * Builds each demo pack once, in one thread and in memory, and writes what it took to standard output as JSON:
  * seconds per stage, tasks, bytes made, and the highest memory of the process so far. Then, for each dossier, the size of
- * page and PDF, and the time of its PDF beside the time in which a browser, where one is found, prints its page.
+ * page and PDF, and the time of its PDF beside the time in which a browser, where one is found, prints its page. Before
+ * that, the milliseconds of each solver.
  */
 interface Stage {
   readonly name: string;
@@ -147,8 +149,9 @@ async function printPages(files: Files, pages: readonly string[]) {
   }
 }
 
+const solvers = measureSolvers();
 const manifests = fileURLToPath(new URL('../../manifests', import.meta.url));
 const packs = [];
 for (const name of realDisk.list(join(manifests, 'packs')))
   packs.push(await measure(manifests, `packs/${name}/pack.yaml`));
-console.log(JSON.stringify({ node: process.version, threads: 1, packs }, null, 2));
+console.log(JSON.stringify({ node: process.version, threads: 1, ...solvers, packs }, null, 2));

@@ -90,6 +90,22 @@ describe('charts', () => {
     expect(words).toContain('Line loss (dB/cm)');
   });
 
+  it('dot the part of a curve where its model is saturated, and no other line', async () => {
+    const dots = `stroke-dasharray="${theme.saturated.join(',')}"`;
+    const stuck = (saturatedFrom: number | undefined): LinesChart => ({
+      ...crowded,
+      series: crowded.series.map((series, i) =>
+        i === 2 && saturatedFrom !== undefined ? { ...series, saturatedFrom } : series,
+      ),
+    });
+    const count = async (chart: LinesChart) => (await svgOf(chart)).split(dots).length - 1;
+    expect(await count(stuck(undefined))).toBe(0);
+    expect(await count(stuck(80))).toBe(0);
+    // From the middle on: one piece. From before the beginning: the whole curve, and the sample beside its name.
+    expect(await count(stuck(76.7))).toBe(1);
+    expect(await count(stuck(70))).toBe(2);
+  });
+
   it('tell lines apart by dash, not only by colour', async () => {
     const svg = await svgOf(crowded);
     const dashes = [...svg.matchAll(/mark-line[^>]*>(?:<path[^>]*>)+/g)].map(

@@ -63,6 +63,17 @@ const ADDED: Readonly<Record<string, readonly (readonly [string, string])[]>> = 
       'declared: [{ id: board-mass, value: 3.1, unit: g, document: BD-1, revision: A, date: 2026-03-01 }]\ncost: {',
     ],
   ],
+  // The foil that is asked for states all that a texture can, and its other face is the measured one.
+  'libraries/foils.yaml': [
+    [
+      'measured: { file: textures/kf-02-treated.csv,',
+      'Rq: { value: 0.2 um, spread: 0.04 um, basis: measured, method: own interferometer }\n      Sal: { value: 1.13 um, spread: 0.2 um, basis: measured, method: own autocorrelation }\n      Sdr: { value: 9 %, spread: 20 %, basis: measured, method: own area }\n      nodules: { radius: { value: 0.071 um, spread: 0.01 um, basis: measured }, pitch: { value: 0.23 um, spread: 0.02 um, basis: measured } }\n    untreated_face:\n      measured: { file: textures/kf-02-treated.csv,',
+    ],
+    [
+      '    untreated_face:\n      Rq: { value: 0.18 um, spread: 0.04 um, basis: typical, document: KF-DS-02, revision: D, date: 2026-01-19 }\n',
+      '',
+    ],
+  ],
   'packs/side-radar/procurement.yaml': [
     ['sampling: { confidence: 0.95, reliability: 0.90 }', 'sampling: { plan: sampling by agreed plan }'],
     [
@@ -88,7 +99,7 @@ function manifests(): readonly Manifest[] {
     manifest(`${pack}/procurement.yaml`, 'procurement', procurementDocument),
     manifest(`${pack}/requirements.yaml`, 'requirements', requirementsDocument),
     manifest(`${pack}/boards/side-1.yaml`, 'board', boardDocument),
-    ...[2, 3, 4, 5].map((n) => manifest(`${pack}/boards/side-${n}.yaml`, 'board', variantDocument)),
+    ...[2, 3, 4, 5, 6, 7].map((n) => manifest(`${pack}/boards/side-${n}.yaml`, 'board', variantDocument)),
     manifest('libraries/laminates.yaml', 'laminates', laminatesDocument),
     manifest('libraries/foils.yaml', 'foils', foilsDocument),
     manifest('libraries/finishes.yaml', 'finishes', finishesDocument),
@@ -153,6 +164,8 @@ export function plantedPack(): PlantedPack {
   }
   const answered = 'packs/side-radar/answers/laminate.csv';
   files.set(rename(answered), plantedAnswers(planter));
+  const profile = 'libraries/textures/kf-02-treated.csv';
+  files.set(rename(profile), plantedProfile(readFileSync(join(root, profile), 'utf8'), planter));
   for (const path of files.keys()) {
     const marker = posix.basename(path, posix.extname(path));
     planter.planted.push({ pattern: 'file: name', owner: path, kind: 'text', marker });
@@ -194,6 +207,15 @@ function plantedAnswers(planter: Planter): string {
     `S-pfas,,,,,,,,${text('answered declaration')}`,
     '',
   ].join('\n');
+}
+
+/** What a file of heights says of itself is for nobody's sheet; its heights are too many to be told apart by their digits. */
+function plantedProfile(text: string, planter: Planter): string {
+  return text.replace(/^(instrument|note),"?(.*?)"?$/gm, (_, key: string, value: string) => {
+    const marker = planter.text(value);
+    planter.planted.push({ pattern: `profile: ${key}`, owner: 'kf-02', kind: 'text', marker });
+    return `${key},${marker}`;
+  });
 }
 
 const idOf = (node: Node): string | undefined => {

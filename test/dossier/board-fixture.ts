@@ -203,7 +203,7 @@ export function pack(boards: readonly Board[], extra: Partial<Pack> = {}): Pack 
       invented: true,
       requirements,
     },
-    analysis: { roughnessModel: 'groiss', frequencyStep: 0.2e9 },
+    analysis: { roughnessModel: 'band', frequencyStep: 0.2e9 },
     inputs: ['foils.yaml', 'laminates.yaml', 'requirements.yaml', ...boards.map((b) => b.file)].sort().map(input),
     ...extra,
   };

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { differencesBetween } from '../../src/dossier/differences.js';
-import type { Board } from '../../src/manifest/model.js';
+import type { Board, Texture } from '../../src/manifest/model.js';
 import { board, figure } from './board-fixture.js';
 
 /** Fields that say where something comes from or what it is called, and change no result. */
@@ -39,11 +39,30 @@ function changed(value: unknown, [key, ...rest]: readonly string[]): unknown {
 }
 
 const base = board('qb-1');
+/** All that may be known of a texture. */
+const known = (path: string, texture: Texture): Texture => ({
+  ...texture,
+  rz: figure(`${path}.rz`, 2.2e-6, 0.3e-6),
+  correlationLength: figure(`${path}.length`, 1.1e-6, 0.1e-6),
+  developedAreaRatio: figure(`${path}.sdr`, 0.12, 0.02),
+  lay: 'across',
+  nodule: { radius: figure(`${path}.radius`, 0.2e-6, 0), pitch: figure(`${path}.pitch`, 0.6e-6, 0), layers: 2 },
+});
+const { strip, ground } = base.stackUp;
 const full: Board = {
   ...base,
   referenceImpedance: 50,
   stackUp: {
     ...base.stackUp,
+    strip: {
+      ...strip,
+      dielectricFace: { ...strip.dielectricFace, texture: known('s', strip.dielectricFace.texture) },
+      outerFace: { ...strip.outerFace, texture: known('o', strip.outerFace.texture) },
+    },
+    ground: {
+      ...ground,
+      dielectricFace: { ...ground.dielectricFace, texture: known('g', ground.dielectricFace.texture) },
+    },
     cover: {
       material: 'mask',
       permittivity: figure('c.permittivity', 3.5, 0.1),
@@ -56,6 +75,8 @@ const full: Board = {
         ...base.stackUp.laminate.material,
         permittivityTemperatureCoefficient: figure('l.tce', -20e-6, 5e-6),
         lossTangentTemperatureCoefficient: figure('l.tcd', 2e-3, 5e-4),
+        inPlanePermittivity: figure('l.plane', 3.1, 0.05),
+        water: { uptake: figure('l.water', 4e-4, 1e-4), permittivityPerShare: 20, lossTangentPerShare: 1.5 },
       },
     },
   },
@@ -67,6 +88,40 @@ const full: Board = {
 describe('differences between boards', () => {
   it('are none between a board and itself', () => {
     expect(differencesBetween([full, { ...full, id: 'other', title: 'Other' }])).toEqual([]);
+  });
+
+  it('show what Rq cannot see, and the file that it was measured in', () => {
+    const measured = {
+      file: 'textures/kf.csv',
+      sha256: 'cd'.repeat(32),
+      kind: 'profile' as const,
+      interval: 1e-7,
+      extent: 1e-4,
+      remarks: [],
+    };
+    const gentle = { ...strip.dielectricFace.texture, correlationLength: figure('c', 3e-6, 0), measured };
+    const other = {
+      ...base,
+      stackUp: { ...base.stackUp, strip: { ...strip, dielectricFace: { ...strip.dielectricFace, texture: gentle } } },
+    };
+    const found = differencesBetween([base, other]);
+    expect(found.map(({ label }) => label)).toEqual(['Strip, dielectric face']);
+    expect(found[0].values[0]).toContain('no correlation length');
+    expect(found[0].values[1]).toMatch(/correlation length 3.*measured: textures\/kf\.csv/);
+  });
+
+  it('show the frequency that a permittivity was taken at, from which dispersion counts', () => {
+    const { laminate } = base.stackUp;
+    const { permittivity } = laminate.material;
+    const moved = { ...permittivity, provenance: { ...permittivity.provenance, frequency: 77e9 } };
+    const other = {
+      ...base,
+      stackUp: {
+        ...base.stackUp,
+        laminate: { ...laminate, material: { ...laminate.material, permittivity: moved } },
+      },
+    };
+    expect(differencesBetween([base, other]).map(({ label }) => label)).toEqual(['Permittivity taken at']);
   });
 
   it('show a declared property, of the board or of one of its materials', () => {

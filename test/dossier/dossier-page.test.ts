@@ -93,27 +93,6 @@ describe('dossier', () => {
     }
   });
 
-  it('shades the spread between models and marks the faces of the board', () => {
-    const figure = blocksOf(dossier).find((b) => b.kind === 'figure' && b.id === 'loss-factor');
-    const content = figure?.kind === 'figure' ? figure.content : undefined;
-    if (content === undefined || !('chart' in content) || content.chart !== 'lines') throw new Error('no lines chart');
-    for (const [x, low, high] of content.band?.points ?? []) {
-      expect(low).toBeLessThanOrEqual(high);
-      expect(x).toBeGreaterThanOrEqual(0);
-    }
-    expect(content.band?.points).toHaveLength(25);
-    expect(content.marks).toEqual([
-      { label: 'strip, dielectric face + ground, dielectric face', at: 0.6 },
-      { label: 'strip, outer face', at: 0.25 },
-    ]);
-  });
-
-  it('says in a plain sentence where a roughness model is saturated', () => {
-    expect(textOf(dossier)).toContain('Hammerstad is saturated.');
-    expect(textOf(dossier)).toContain('do not rank foils by it');
-    expect(textOf(dossier)).not.toContain('Gradient is saturated.');
-  });
-
   it('names files, hashes, parents, overrides and the program', () => {
     const text = textOf(pageOf(document, 'board/qb-2'));
     expect(text).toContain('boards/qb-2.yaml');
@@ -123,13 +102,17 @@ describe('dossier', () => {
     expect(text).toMatch(/Based on[\s\S]*qb-1/);
   });
 
-  it('of a board that cannot be evaluated gives the reason and no figures', () => {
+  it('of a board whose columns cannot be evaluated gives the reason, and of figures those of its line alone', () => {
     const page = pageOf(document, 'board/qb-3');
     const [first] = page.chapters[0].blocks;
     expect(first).toMatchObject({ kind: 'verdict', status: 'incomplete' });
     expect(textOf(page)).toContain('the board has a cover layer');
-    const charts = blocksOf(page).filter((b) => b.kind === 'figure' && 'chart' in b.content);
-    expect(charts).toEqual([]);
+    const charts = blocksOf(page).flatMap((b) => (b.kind === 'figure' && 'chart' in b.content ? [b.id] : []));
+    expect(charts).toEqual(['loss-factor', 'effective-permittivity', 'line-loss']);
+    const rows = blocksOf(page).find((b) => b.kind === 'table' && b.id === 'results');
+    const line = rows?.kind === 'table' ? rows.rows.find(([name]) => plain(name.content[0]) === 'r-line') : undefined;
+    expect(line?.map((c) => c.content.map(plain).join('')).at(-1)).toBe('meets');
+    expect(textOf(page)).toContain('of the feed line only');
   });
 
   it('flags models used outside their range on page one', () => {

@@ -1,9 +1,9 @@
 import type { Block, DocumentPage, Inline, PackDocument } from '../../src/dossier/document.js';
 import type { PackInput } from '../../src/dossier/index.js';
-import type { EvidenceResult } from '../../src/evidence/index.js';
+import type { Accuracy, EvidenceResult } from '../../src/evidence/index.js';
 import { methods } from '../../src/evidence/methods.js';
 import type { Pack } from '../../src/manifest/model.js';
-import type { BoardStudy } from '../../src/study/results.js';
+import type { BoardStudy, Sweep } from '../../src/study/results.js';
 import { judgePack } from '../../src/verdict/index.js';
 import { board, pack } from './board-fixture.js';
 import { studyOf } from './study-fixture.js';
@@ -29,6 +29,43 @@ export const evidence: readonly EvidenceResult[] = [
   check('small', 2.4e-7, 2.41e-7, 'm', 1e-8),
 ];
 
+export const accuracy: readonly Accuracy[] = [
+  {
+    id: 'impedance',
+    figure: 'Impedance of a section',
+    comparedWith: 'a refined solution',
+    range: 'w/h 0.5 to 10',
+    target: 0.5,
+    unit: '%',
+    reached: 0.21,
+    cases: 10,
+    met: true,
+  },
+  {
+    id: 'gradient',
+    figure: 'Gradient model',
+    comparedWith: 'a finer step',
+    range: 'Rq 0.1 to 2.4 µm',
+    target: 1e-6,
+    unit: '1',
+    reached: 3.1e-13,
+    cases: 12,
+    met: true,
+  },
+  {
+    id: 'perturbation',
+    figure: 'Perturbation',
+    comparedWith: 'random surfaces',
+    range: 'rms slope to 0.5',
+    target: 0.005,
+    unit: '1',
+    reached: 0.0105,
+    cases: 6,
+    met: false,
+    remark: 'The fourth order is missing.',
+  },
+];
+
 export function inputOf(studies: readonly BoardStudy[], extra: Partial<Pack> = {}): PackInput {
   const subject = pack(
     studies.map((study) => study.board),
@@ -40,20 +77,28 @@ export function inputOf(studies: readonly BoardStudy[], extra: Partial<Pack> = {
     verdicts: judgePack(studies, subject.requirements),
     evidence,
     methods,
+    accuracy,
     programVersion: '0.1.0',
   };
 }
 
-/** A board that the models cannot evaluate: as a study leaves it, with nothing but the reason. */
+/** A board with a cover layer, as a study leaves it: the feed line and its copper, and the reason for all the rest. */
 export function notEvaluated(study: BoardStudy, reason = 'the board has a cover layer'): BoardStudy {
+  const lineOnly = (sweep: Sweep): Sweep => ({ ...sweep, points: [] });
   return {
     ...study,
-    nominal: { ...study.nominal, points: [] },
-    models: [],
-    tolerances: [],
-    lineLoss: { x: [], curves: [] },
-    lossFactor: { x: [], curves: [] },
-    faces: [],
+    nominal: lineOnly(study.nominal),
+    sides: study.sides.map(({ side, sweep }) => ({ side, sweep: lineOnly(sweep) })),
+    tolerances: study.tolerances.map((tolerance) => ({
+      ...tolerance,
+      low: lineOnly(tolerance.low),
+      high: lineOnly(tolerance.high),
+      bySide: (tolerance.bySide ?? []).map(({ side, low, high }) => ({
+        side,
+        low: lineOnly(low),
+        high: lineOnly(high),
+      })),
+    })),
     flags: [],
     losslessClosure: Number.NaN,
     notEvaluated: [
@@ -69,7 +114,6 @@ export function notEvaluated(study: BoardStudy, reason = 'the board has a cover 
           'sidelobe_level',
           'beam_direction',
           'pattern_mask',
-          'line_loss',
         ],
         reason,
       },

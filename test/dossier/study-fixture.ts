@@ -1,6 +1,31 @@
-import type { Board, Figure, RoughnessModelName } from '../../src/manifest/model.js';
+import type { Board, Figure, Texture } from '../../src/manifest/model.js';
 import { type Complex, complex, div } from '../../src/numerics/complex.js';
-import type { BoardStudy, Cut, CutFigures, PointResult, PowerShares, Sweep } from '../../src/study/results.js';
+import { skinDepth } from '../../src/physics/material/index.js';
+import {
+  applicableModels,
+  type RoughFace,
+  type RoughnessModel,
+  resonanceShift,
+  roughFace,
+  roughnessBand,
+  roughnessEstimates,
+  saturationStatement,
+  slowWaveLength,
+  type TextureKnowledge,
+  tiltShift,
+} from '../../src/physics/roughness/index.js';
+import type {
+  BoardStudy,
+  Cut,
+  CutFigures,
+  FaceState,
+  LinePoint,
+  ModelCurves,
+  PointResult,
+  PowerShares,
+  RoughnessSide,
+  Sweep,
+} from '../../src/study/results.js';
 
 /**
  * A study that behaves like one, from a few textbook relations: a resonator for the match, array factors for the cuts,
@@ -10,24 +35,74 @@ import type { BoardStudy, Cut, CutFigures, PointResult, PowerShares, Sweep } fro
 export interface Assumptions {
   /** Relative change of permittivity: moves resonance and beam. */
   readonly permittivity?: number;
-  /** Loss factor of the dielectric faces. */
+  /** Loss factor of the faces to the laminate. */
   readonly lossFactor?: number;
 }
 
-const MODELS: readonly RoughnessModelName[] = ['hammerstad', 'groiss', 'gradient'];
+const SIDES: readonly RoughnessSide[] = ['low', 'middle', 'high'];
 const C0 = 299792458;
+const CONDITIONS = { frequency: 76.5e9, conductivity: 5.8e7 } as const;
 const ANGLES = Float64Array.from({ length: 361 }, (_, i) => ((i - 180) / 2) * (Math.PI / 180));
 
-export function lossFactorOf(model: RoughnessModelName, rq: number, skinDepth = 0.238e-6): number {
-  const r = rq / skinDepth;
-  if (model === 'hammerstad') return 1 + (2 / Math.PI) * Math.atan(1.4 * r * r);
-  if (model === 'groiss') return r === 0 ? 1 : 1 + Math.exp(-((1 / (2 * r)) ** 1.6));
-  return 1 + 0.9 * r ** 1.05;
+/** What a manifest knows of a texture, for the physics. */
+export function knowledgeOf(texture: Texture, scale = 1): TextureKnowledge {
+  const { rq, correlationLength, developedAreaRatio, lay, nodule, rz } = texture;
+  return {
+    rq: rq.value * scale,
+    ...(correlationLength === undefined ? {} : { correlationLength: correlationLength.value }),
+    ...(developedAreaRatio === undefined ? {} : { developedAreaRatio: developedAreaRatio.value }),
+    ...(lay === undefined ? {} : { lay }),
+    ...(rz === undefined ? {} : { rz: rz.value }),
+    ...(nodule === undefined
+      ? {}
+      : { nodule: { radius: nodule.radius.value, pitch: nodule.pitch.value, layers: nodule.layers } }),
+  };
 }
 
-/** Slow wave of both faces, relative in permittivity; only the gradient model carries a large one. */
-const slowWave = (model: RoughnessModelName, rq: number): number =>
-  (model === 'gradient' ? 0.012 : 0.001) * (rq / 1e-6);
+/** Figures of the faces are the engine's own: pages print its sentences, and three sides in true order. */
+const estimates = (texture: Texture, scale = 1, permittivity = 3) =>
+  roughnessEstimates(knowledgeOf(texture, scale), { ...CONDITIONS, permittivity });
+
+const figuresOfFace = (face: RoughFace) => ({
+  lossFactor: face.lossFactor,
+  reactance: face.reactance,
+  planeShift: face.planeShift,
+  slowWaveLength: slowWaveLength(face),
+});
+
+export function faceState(
+  face: string,
+  place: FaceState['place'],
+  texture: Texture,
+  known: string,
+  permittivity: number,
+): FaceState {
+  const conditions = { ...CONDITIONS, permittivity };
+  const knowledge = knowledgeOf(texture);
+  const band = roughnessBand(knowledge, conditions);
+  const models = applicableModels(knowledge);
+  return {
+    face,
+    place,
+    rq: knowledge.rq,
+    skinDepth: skinDepth(conditions.frequency, conditions.conductivity),
+    known,
+    band: SIDES.map((side) => ({ side, ...figuresOfFace(band[side]), reason: band[side].reason })),
+    models: models.map((model) => {
+      const found = roughFace(model, { ...knowledge, ...conditions });
+      return { model, ...figuresOfFace(found), flags: found.flags };
+    }),
+    narrowing: band.narrowing,
+    saturation: models.flatMap((model) => {
+      const text = saturationStatement(model, knowledge, conditions);
+      return text === undefined ? [] : [{ model, text }];
+    }),
+  };
+}
+
+/** Slow wave of both faces, relative in permittivity. */
+const slowWave = (side: RoughnessSide, rq: number): number =>
+  ({ low: 0.001, middle: 0.004, high: 0.012 })[side] * (rq / 1e-6);
 
 function cutOf(plane: Cut['plane'], gainDbi: number, field: (angle: number) => number): Cut {
   const power = Array.from(ANGLES, (angle) => Math.max(field(angle) ** 2, 1e-12));
@@ -129,13 +204,23 @@ export function pointOf(
     referenceImpedance: board.columns.map(() => 70.5),
     elevation: figuresOf(elevation),
     azimuth: figuresOf(azimuth),
-    lineLossDbPerM: 24 * (0.5 + 0.5 * lossFactor) + 8,
-    lineEffectivePermittivity: 2.35 * (1 + permittivity),
     powerResidual: 3.1e-13,
     farFieldClosure: 0.9981,
     cuts: { elevation, azimuth },
   };
 }
+
+export const linePoint = (
+  frequency: number,
+  temperatureC: number,
+  { permittivity = 0, lossFactor = 1.6 }: Assumptions,
+): LinePoint => ({
+  frequency,
+  temperatureC,
+  lossDbPerM: 24 * (0.5 + 0.5 * lossFactor) + 8,
+  effectivePermittivity: 2.35 * (1 + permittivity),
+  impedance: 70.5,
+});
 
 export function sweepOf(board: Board, id: string, assumptions: Assumptions, frequencies = 5): Sweep {
   const { low, high } = board.band;
@@ -144,77 +229,115 @@ export function sweepOf(board: Board, id: string, assumptions: Assumptions, freq
       pointOf(board, low + ((high - low) * i) / (frequencies - 1), t, assumptions),
     ),
   );
-  return { id, label: id, points };
+  const line = points.map(({ frequency, temperatureC }) => linePoint(frequency, temperatureC, assumptions));
+  return { id, label: id, points, line };
 }
 
-export function studyOf(board: Board, nominalModel: RoughnessModelName = 'groiss'): BoardStudy {
-  const rq = board.stackUp.strip.dielectricFace.texture.rq.value;
-  const assume = (model: RoughnessModelName, scale = 1, permittivity = 0): Assumptions => ({
-    lossFactor: lossFactorOf(model, rq * scale),
-    permittivity: permittivity + slowWave(model, rq * scale),
+export function studyOf(board: Board, nominal: RoughnessSide = 'middle'): BoardStudy {
+  const { strip, ground, laminate } = board.stackUp;
+  const texture = strip.dielectricFace.texture;
+  const rq = texture.rq.value;
+  const permittivity = laminate.material.permittivity.value;
+  const assume = (side: RoughnessSide, scale = 1, change = 0): Assumptions => ({
+    lossFactor: estimates(texture, scale)[side].lossFactor,
+    permittivity: change + slowWave(side, rq * scale),
   });
-  const models = MODELS.map((model) => ({ model, sweep: sweepOf(board, `model-${model}`, assume(model)) }));
+  const sides = SIDES.map((side) => ({ side, sweep: sweepOf(board, `side-${side}`, assume(side)) }));
   const tolerance = (
     id: string,
     label: string,
     figure: Figure,
-    moved: (model: RoughnessModelName, sign: number) => Assumptions,
+    moved: (side: RoughnessSide, sign: number) => Assumptions,
   ) => {
-    const both = (model: RoughnessModelName) => ({
-      model,
-      low: sweepOf(board, `${id}-low-${model}`, moved(model, -1)),
-      high: sweepOf(board, `${id}-high-${model}`, moved(model, 1)),
-    });
-    const byModel = MODELS.map(both);
-    const { low, high } = byModel[MODELS.indexOf(nominalModel)];
-    return { id, label, figure, low, high, byModel };
+    const bySide = SIDES.map((side) => ({
+      side,
+      low: sweepOf(board, `${id}-low-${side}`, moved(side, -1)),
+      high: sweepOf(board, `${id}-high-${side}`, moved(side, 1)),
+    }));
+    const { low, high } = bySide[SIDES.indexOf(nominal)];
+    return { id, label, figure, low, high, bySide };
   };
-  const roughness = Array.from({ length: 25 }, (_, i) => (i * 2.4e-6) / 24);
+  const heights = Array.from({ length: 17 }, (_, i) => (i * 2.4e-6) / 16);
   const gigahertz = Array.from({ length: 11 }, (_, i) => 70e9 + i * 1.5e9);
+  const models = applicableModels(knowledgeOf(texture));
+  const factor = (model: RoughnessModel, height: number) =>
+    roughFace(model, { ...knowledgeOf(texture, height / rq), ...CONDITIONS, permittivity }).lossFactor;
+  const overHeight = heights.map((height) => estimates(texture, height / rq));
+  const curvesOver = (
+    x: readonly number[],
+    model: (name: RoughnessModel, at: number) => number,
+    band: (side: RoughnessSide, i: number) => number,
+  ): ModelCurves => ({
+    x,
+    curves: models.map((name) => ({ model: name, y: x.map((at) => model(name, at)) })),
+    band: {
+      low: x.map((_, i) => band('low', i)),
+      middle: x.map((_, i) => band('middle', i)),
+      high: x.map((_, i) => band('high', i)),
+    },
+  });
+  const here = estimates(texture);
+  const loss = (k: number, f: number) => ((20 + 12 * k) * f) / 77e9;
   return {
     board,
     hash: 'ab'.repeat(32),
-    nominal: models[MODELS.indexOf(nominalModel)].sweep,
-    models,
+    nominal: sides[SIDES.indexOf(nominal)].sweep,
+    sides,
     tolerances: [
-      tolerance('permittivity', 'Permittivity', board.stackUp.laminate.material.permittivity, (m, s) =>
-        assume(m, 1, s * 0.006),
+      tolerance('permittivity', 'Permittivity', laminate.material.permittivity, (side, sign) =>
+        assume(side, 1, sign * 0.006),
       ),
-      tolerance('roughness', 'Roughness of treated faces', board.stackUp.strip.dielectricFace.texture.rq, (m, s) =>
-        assume(m, 1 + 0.1 * s),
-      ),
+      tolerance('roughness', 'Roughness of treated faces', texture.rq, (side, sign) => assume(side, 1 + 0.1 * sign)),
     ],
-    lineLoss: {
-      x: gigahertz,
-      curves: [
-        { model: 'smooth', y: gigahertz.map((f) => (32 * f) / 77e9) },
-        ...MODELS.map((model) => ({
-          model,
-          y: gigahertz.map((f) => ((20 + 12 * lossFactorOf(model, rq)) * f) / 77e9),
-        })),
-      ],
-    },
-    lossFactor: {
-      x: roughness,
-      curves: [
-        { model: 'smooth', y: roughness.map(() => 1) },
-        ...MODELS.map((model) => ({ model, y: roughness.map((x) => lossFactorOf(model, x)) })),
-      ],
-    },
-    faces: ['strip, dielectric face', 'strip, outer face', 'ground, dielectric face'].map((face, i) => ({
-      face,
-      rq: i === 1 ? 0.25e-6 : rq,
-      skinDepth: 0.238e-6,
-      models: MODELS.map((model) => ({
-        model,
-        lossFactor: lossFactorOf(model, i === 1 ? 0.25e-6 : rq),
-        reactance: model === 'gradient' ? -2.85 : lossFactorOf(model, i === 1 ? 0.25e-6 : rq),
-        planeShift: model === 'gradient' ? 5.05 * (i === 1 ? 0.25e-6 : rq) : 0,
-      })),
-    })),
+    lineLoss: curvesOver(
+      gigahertz,
+      (model, f) => loss(factor(model, rq), f),
+      (side, i) => loss(here[side].lossFactor, gigahertz[i]),
+    ),
+    lossFactor: curvesOver(heights, factor, (side, i) => overHeight[i][side].lossFactor),
+    effectivePermittivity: curvesOver(
+      heights,
+      (model, height) => 2.35 * (1 + 0.003 * (factor(model, height) - 1)),
+      (side, i) => 2.35 * (1 + slowWave(side, heights[i])),
+    ),
+    lineLossByFace: SIDES.map((side) => {
+      const k = here[side].lossFactor;
+      const faces = [
+        { face: 'underside', smooth: 8.41, finish: 0, texture: 8.41 * (k - 1) },
+        { face: 'top', smooth: 2.37, finish: 1.133, texture: 0.214 },
+        { face: 'edges', smooth: 4.613, finish: 2.209, texture: 0 },
+        { face: 'ground', smooth: 6.18, finish: 0, texture: 6.18 * (k - 1) },
+      ] as const;
+      const dielectric = 7.377;
+      const total = faces.reduce((sum, f) => sum + f.smooth + f.finish + f.texture, dielectric);
+      return {
+        side,
+        faces,
+        dielectric,
+        total,
+        effectivePermittivity: 2.35 * (1 + slowWave(side, rq)),
+        impedance: 70.5,
+      };
+    }),
+    slowWave: SIDES.map((side) => {
+      const rise = slowWave(side, rq);
+      return {
+        side,
+        lineRise: 0.75 * rise,
+        patchRise: rise,
+        resonanceShift: resonanceShift(rise, CONDITIONS.frequency),
+        tiltShift: tiltShift(rise, 2.35),
+        applied: laminate.material.permittivityKind === 'bulk',
+      };
+    }),
+    faces: [
+      faceState('strip underside (treated)', 'underside', texture, 'Rq only', permittivity),
+      faceState('strip top and edges (foil), bare copper', 'outer', strip.outerFace.texture, 'Rq only', 1),
+      faceState('ground (treated)', 'ground', ground.dielectricFace.texture, 'Rq only', permittivity),
+    ],
     flags: [
       {
-        code: 'roughness.hammerstad-saturated',
+        code: 'roughness.hammerstad.saturated',
         severity: 'saturated',
         model: 'Hammerstad',
         text: 'Within 5 % of its ceiling of 2 on the treated faces: it no longer tells rougher copper apart.',

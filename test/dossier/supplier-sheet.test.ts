@@ -2,8 +2,9 @@ import { describe, expect, it } from 'vitest';
 import type { Block, Chapter, Inline, TableBlock } from '../../src/dossier/document.js';
 import { fieldsFor, sheetContent } from '../../src/dossier/supplier-allowed-fields.js';
 import { supplierSheet } from '../../src/dossier/supplier-sheet.js';
-import type { Pack, RoughnessModelName } from '../../src/manifest/model.js';
+import type { Foil, Pack, Texture } from '../../src/manifest/model.js';
 import type { HeldParameter } from '../../src/manifest/procurement-model.js';
+import type { RoughnessSide } from '../../src/study/results.js';
 import type { AllowanceOutcome, Allowances } from '../../src/verdict/index.js';
 import { askingPack } from '../manifest/procurement-fixture.js';
 
@@ -36,8 +37,7 @@ const limited = (permitted: number): AllowanceOutcome => ({
   beyond: permitted,
   requirementId: 'r-gain',
 });
-const saturated: AllowanceOutcome = { kind: 'saturated', searchedTo: 2.5e-6 };
-const MODELS: readonly RoughnessModelName[] = ['hammerstad', 'groiss', 'gradient'];
+const SIDES: readonly RoughnessSide[] = ['low', 'middle', 'high'];
 
 /** One upward search for a figure of the first board. */
 function searched(
@@ -46,8 +46,8 @@ function searched(
   parameter: HeldParameter,
   outcomes: readonly AllowanceOutcome[],
 ): Allowances {
-  const models = outcomes.map((outcome, i) => ({ model: MODELS[i], outcome }));
-  return new Map([[pack.boards[0].id, [{ path, parameter, direction: 'up', nominal: 0, models, sweeps: 0 }]]]);
+  const sides = outcomes.map((outcome, i) => ({ side: SIDES[i], outcome }));
+  return new Map([[pack.boards[0].id, [{ path, parameter, direction: 'up', nominal: 0, sides, sweeps: 0 }]]]);
 }
 
 const none: Allowances = new Map();
@@ -107,6 +107,50 @@ describe('a supplier sheet', () => {
     expect(rowsOf(chapterOf(areal.chapters, 'verification'))[0][1]).toMatch(
       /ISO 25178-2.*ISO 25178-3; instrument: profiler 50x; filter: S 0\.8 um/,
     );
+  });
+
+  it('asks a foil maker for what is not stated of its own foils, with the conditions under which it is accepted', () => {
+    const known = rowsOf(chapterOf(sheetFor(1).chapters, 'texture-knowledge'));
+    expect(known.map(([what]) => what.split(/[(;]/)[0].trim())).toEqual([
+      'Developed interfacial area ratio Sdr',
+      'Autocorrelation length Sal',
+      'Radius, pitch and number of layers of the nodules',
+      'Texture aspect ratio Str',
+    ]);
+    for (const [what, items] of known.slice(0, 2)) {
+      expect(what).toMatch(/accepted with S-filter nesting index 0\.25 µm or less/);
+      expect(what).toMatch(/lateral resolution|sampling interval/);
+      expect(items).toContain('A-treated-face-texture');
+    }
+    // No other recipient is asked, and no figure of a design stands in it.
+    for (const other of [0, 2]) expect(sheetFor(other).chapters.map(({ id }) => id)).not.toContain('texture-knowledge');
+    expect(JSON.stringify(chapterOf(sheetFor(1).chapters, 'texture-knowledge'))).not.toMatch(/GHz|dB|skin depth/);
+  });
+
+  it('asks no more for what a foil maker has stated', () => {
+    const pack = askingPack();
+    const length = { ...pack.boards[0].stackUp.strip.foil.treatedFace.rq, value: 1e-6 };
+    const stated = (texture: Texture): Texture => ({
+      ...texture,
+      correlationLength: length,
+      developedAreaRatio: { ...length, value: 0.1 },
+      nodule: { radius: length, pitch: length, layers: 1 },
+      lay: 'isotropic',
+    });
+    const full = (foil: Foil): Foil => ({
+      ...foil,
+      treatedFace: stated(foil.treatedFace),
+      untreatedFace: stated(foil.untreatedFace),
+    });
+    const boards = pack.boards.map((board) => ({
+      ...board,
+      stackUp: {
+        ...board.stackUp,
+        strip: { ...board.stackUp.strip, foil: full(board.stackUp.strip.foil) },
+        ground: { ...board.stackUp.ground, foil: full(board.stackUp.ground.foil) },
+      },
+    }));
+    expect(sheetFor(1, { ...pack, boards }).chapters.map(({ id }) => id)).not.toContain('texture-knowledge');
   });
 
   it('asks a fabricator for copper, etching, edges and finish, with negative limits as they are', () => {
@@ -188,12 +232,12 @@ describe('limits on a sheet', () => {
     return { items: rowsOf(chapterOf(chapters, 'items'))[1], basis: rowsOf(chapterOf(chapters, 'limits'))[1] };
   };
 
-  it('stay the stated ones where the allowance reaches further, which is printed with its spread over the models', () => {
+  it('stay the stated ones where the allowance reaches further, which is printed with its spread over the estimates', () => {
     const { items, basis } = limits(
       searched(pack, permittivity, 'permittivity', [limited(3.0668), limited(3.0686), limited(3.0335 + 0.02)]),
     );
     expect(items.slice(2, 5)).toEqual(['3.00', '2.95', '3.05']);
-    expect(basis).toEqual(['A-permittivity', 'stated', 'not computed', '3.053 (over the models 3.053 to 3.068)']);
+    expect(basis).toEqual(['A-permittivity', 'stated', 'not computed', '3.053 (over the estimates 3.053 to 3.068)']);
   });
 
   it('are the calculated ones where tighter, rounded towards nominal', () => {
@@ -204,19 +248,19 @@ describe('limits on a sheet', () => {
     expect(basis.slice(0, 2)).toEqual(['A-permittivity', 'from: stated; to: calculated']);
   });
 
-  it('say that no limit can be set where models are saturated', () => {
+  it('name the estimate where only one sets a limit, and never a model of the analysis', () => {
     const foilPack = askingPack();
     const { path } = foilPack.boards[0].stackUp.strip.foil.treatedFace.rq;
-    const basis = (outcomes: readonly AllowanceOutcome[]) =>
-      rowsOf(
-        chapterOf(sheetFor(1, foilPack, searched(foilPack, path, 'treated-face-texture', outcomes)).chapters, 'limits'),
-      )[0].at(-1);
-    expect(basis([saturated, saturated, limited(0.526e-6)])).toBe(
-      '0.52\u00a0µm (gradient); saturated under Hammerstad, Groiss: no limit can be set on this parameter',
+    const free: AllowanceOutcome = { kind: 'not limited', searchedTo: 2.5e-6 };
+    const found = new Map(
+      [...searched(foilPack, path, 'treated-face-texture', [free, free, limited(0.526e-6)])].map(([id, results]) => [
+        id,
+        results.map((result) => ({ ...result, ceiling: { model: 'hammerstad' as const, from: 0.51e-6 } })),
+      ]),
     );
-    expect(basis([saturated, saturated, { kind: 'not met at nominal', requirementIds: ['r-gain'] }])).toBe(
-      'saturated (Hammerstad, Groiss): no limit can be set on this parameter',
-    );
+    const { chapters } = sheetFor(1, foilPack, found);
+    expect(rowsOf(chapterOf(chapters, 'limits'))[0].at(-1)).toBe('0.52\u00a0µm (high estimate)');
+    expect(JSON.stringify(chapters)).not.toContain('Hammerstad');
   });
 
   it('do not tell anyone outside that a board fails', () => {
@@ -224,8 +268,12 @@ describe('limits on a sheet', () => {
     expect(limits(searched(pack, permittivity, 'permittivity', [failed, failed, failed])).basis[3]).toBe(
       'none calculated',
     );
+    expect(limits(searched(pack, permittivity, 'permittivity', [failed, limited(3.2), limited(3.2)])).basis[3]).toBe(
+      '3.20 (all estimates alike)',
+    );
+    // What the high estimate does not meet is never asked on the word of the others.
     expect(limits(searched(pack, permittivity, 'permittivity', [limited(3.2), limited(3.2), failed])).basis[3]).toBe(
-      '3.20 (all models alike)',
+      'none calculated',
     );
   });
 

@@ -31,6 +31,23 @@ describe('the manifests of this repository', () => {
     expect('problems' in result ? result.problems.map(formatProblem) : []).toEqual([]);
   });
 
+  it('compare boards that differ only in what Rq and a permittivity cannot see', () => {
+    const read = (file: string) => (existsSync(join(root, file)) ? readFileSync(join(root, file)) : undefined);
+    const result = loadPack({ read }, 'packs/side-radar/pack.yaml');
+    if ('problems' in result) throw new Error(result.problems.map(formatProblem).join('\n'));
+    const board = (id: string) => result.pack.boards.find((b) => b.id === id)!;
+    const [gentle, nodular] = [board('side-2'), board('side-6')];
+    expect(nodular.overrides).toEqual(['stack_up.strip.foil', 'stack_up.ground.foil', 'cost.amount']);
+    const [a, b] = [gentle, nodular].map(({ stackUp }) => stackUp.strip.dielectricFace.texture);
+    expect(b!.rq.value).toBe(a!.rq.value);
+    expect(a!.developedAreaRatio).toBeDefined();
+    expect(b!.nodule).toBeDefined();
+    const [bulk, design] = [board('side-1'), board('side-7')].map(({ stackUp }) => stackUp.laminate.material);
+    expect(design!.permittivity).toMatchObject({ value: bulk!.permittivity.value, plus: bulk!.permittivity.plus });
+    expect([bulk!.permittivityKind, design!.permittivityKind]).toEqual(['bulk', 'design']);
+    expect(board('side-1').stackUp.ground.dielectricFace.texture.measured).toMatchObject({ kind: 'profile' });
+  });
+
   it('include a pack', () => {
     expect(manifests.some((path) => posix.basename(path) === 'pack.yaml')).toBe(true);
   });

@@ -48,7 +48,20 @@ describe('manifestSchemas', () => {
     [
       'foils.yaml',
       '      Rq: { value: 0.4 um',
-      '      Rz: { value: 2 um, spread: 0 um, basis: typical }\n      Rq: { value: 0.4 um',
+      '      Ra: { value: 0.3 um, spread: 0 um, basis: typical }\n      Rq: { value: 0.4 um',
+    ],
+    ['foils.yaml', '      filter: S-filter', '      measured: { file: a.csv, spread: 0 }\n      filter: S-filter'],
+    ['foils.yaml', '      instrument: white', '      Sal_threshold: 0.3\n      instrument: white'],
+    [
+      'foils.yaml',
+      '      instrument: white',
+      '      nodules: { radius: { value: 0.2 um, spread: 0 um, basis: typical } }\n      instrument: white',
+    ],
+    ['foils.yaml', '      instrument: white', '      lay: crosswise\n      instrument: white'],
+    [
+      'laminates.yaml',
+      '    declared:',
+      '    water: { uptake: { value: 0.04 %, spread: 0, basis: typical } }\n    declared:',
     ],
     ['finishes.yaml', 'relative_permeability: 1', 'relative_permeability: one'],
     ['pack.yaml', 'status: for_review', 'status: for review'],
@@ -63,6 +76,32 @@ describe('manifestSchemas', () => {
     const text = fixtureText(file);
     expect(text).toContain(from);
     expect(accepts(file, text.replace(from, to))).toBe(false);
+  });
+
+  it('accepts all that a texture and a laminate may state', () => {
+    const more = (file: string, from: string, to: string) => accepts(file, fixtureText(file).replace(from, to));
+    const known = `Sal: { value: 1.2 um, spread: 10 %, basis: measured }
+      Sal_threshold: 0.3
+      Sdr: { value: 0.2, spread: 0.05, basis: measured }
+      Rz: { value: 2.4 um, spread: 0 um, basis: typical }
+      lay: isotropic
+      nodules: { radius: { value: 0.1 um, spread: 0 um, basis: typical }, per_area: { value: 9 1/um2, spread: 10 %, basis: typical }, layers: 3 }
+      instrument: white`;
+    expect(more('foils.yaml', 'instrument: white', known)).toBe(true);
+    const measured = 'measured: { file: a.x3p, long_nesting_index: 25 um, spread: { minus: 0.1, plus: 20 % } }';
+    expect(
+      more(
+        'foils.yaml',
+        'Ra: { value: 0.25 um, spread: 0.05 um, basis: typical, document: KF-DS-10, revision: B, date: 2026-01-19 }',
+        measured,
+      ),
+    ).toBe(true);
+    const water = `in_plane_permittivity: { value: 3.2, spread: 0.1, basis: typical }
+    water: { uptake: { value: 0.04 %, spread: 50 %, basis: typical }, permittivity_per_share: 8 }
+    declared:`;
+    expect(more('laminates.yaml', 'declared:', water)).toBe(true);
+    expect(more('pack.yaml', '  roughness_model: gradient\n', '')).toBe(true);
+    expect(more('pack.yaml', 'gradient', 'band')).toBe(true);
   });
 
   it('takes an empty value in a variant only', () => {

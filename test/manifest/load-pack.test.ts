@@ -177,6 +177,29 @@ describe('loadPack', () => {
     expect(design.boards[0]!.stackUp.laminate.material.fittedOn!.thickness).toBeCloseTo(127e-6, 12);
   });
 
+  it('gives in-plane permittivity and water of a laminate, and neither where nothing is stated', () => {
+    const stated = `in_plane_permittivity: { value: 3.2, spread: 0.1, basis: typical, direction: in_plane }
+    water: { uptake: { value: 0.04 %, spread: 50 %, basis: typical }, permittivity_per_share: 8, loss_tangent_per_share: 1 }
+    declared:`;
+    const laminate = (changes = {}) => packOf(load(changes)).boards[0]!.stackUp.laminate.material;
+    expect(laminate(edited('laminates.yaml', 'declared:', stated))).toMatchObject({
+      inPlanePermittivity: { value: 3.2, plus: 0.1, path: 'laminates.yaml: nl-30.in_plane_permittivity' },
+      water: {
+        uptake: { value: 0.0004, minus: 0.0002, path: 'laminates.yaml: nl-30.water.uptake' },
+        permittivityPerShare: 8,
+        lossTangentPerShare: 1,
+      },
+    });
+    expect(laminate()).not.toHaveProperty('water');
+    expect(laminate()).not.toHaveProperty('inPlanePermittivity');
+  });
+
+  it('takes the middle of the band where no roughness model is named', () => {
+    const without = packOf(load(edited('pack.yaml', '  roughness_model: gradient\n', '')));
+    expect(without.analysis.roughnessModel).toBe('band');
+    expect(packOf(load(edited('pack.yaml', 'gradient', 'band'))).analysis.roughnessModel).toBe('band');
+  });
+
   it('gives limits in the unit of their quantity', () => {
     const limits = Object.fromEntries(pack.requirements.requirements.map((r) => [r.id, r.limit]));
     expect(limits['r-gain']).toEqual({ direction: 'at_least', value: 13 });

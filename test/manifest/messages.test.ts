@@ -168,11 +168,32 @@ const CASES: readonly (readonly [name: string, file: string, from: string, to: s
     /found fitted_on with kind bulk/,
   ],
   [
+    'water that changes nothing',
+    'laminates.yaml',
+    '    declared:',
+    '    water: { uptake: { value: 0.04 %, spread: 50 %, basis: typical } }\n    declared:',
+    /laminates\[0\]\.water\n {2}found water that changes nothing; permittivity_per_share, loss_tangent_per_share or both are needed\.$/,
+  ],
+  [
+    'a water uptake with the % forgotten',
+    'laminates.yaml',
+    '    declared:',
+    '    water: { uptake: { value: 4, spread: 50 %, basis: typical }, permittivity_per_share: 8 }\n    declared:',
+    /water\.uptake\.value\n {2}found 4; the water uptake of a laminate lies between 0 and 0\.05\. Did you mean 4 %\?$/,
+  ],
+  [
+    'a roughness model that is none',
+    'pack.yaml',
+    'gradient',
+    'gradiant',
+    /one of band, hammerstad, groiss, gradient\. Did you mean gradient\?$/,
+  ],
+  [
     'two height parameters',
     'foils.yaml',
     'Ra: { value: 0.25 um',
     'Rq: { value: 0.3 um, spread: 0 um, basis: typical }\n      Ra: { value: 0.25 um',
-    /found Rq and Ra together; exactly one of Rq, Sq, Ra, Sa, Rz, Sz is needed\.$/,
+    /found Rq and Ra together; one of Rq, Sq, Ra, Sa is stated; Rz or Sz may stand beside it\.$/,
   ],
   [
     'no height parameter',

@@ -1,4 +1,4 @@
-import { mkdirSync, symlinkSync } from 'node:fs';
+import { mkdirSync, symlinkSync, truncateSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeEach, describe, expect, it } from 'vitest';
 import { packFilesUnder } from '../../src/publish/index.js';
@@ -53,6 +53,15 @@ describe('reading the files of a pack', () => {
     expect(text('two/x.yaml')).toEqual({ refused: expect.stringMatching(/link leads out/) });
     expect(text('inside.yaml')).toBe('foils');
     expect(text('dangling.yaml')).toEqual({ refused: expect.stringMatching(/nowhere/) });
+  });
+
+  it('reads a file as large as measured heights may be, and none that is larger', () => {
+    const sized = (bytes: number) => {
+      truncateSync(join(root, 'pack.yaml'), bytes);
+      return packFilesUnder(root).read('pack.yaml');
+    };
+    expect(sized(17 * 1024 * 1024)).toHaveLength(17 * 1024 * 1024);
+    expect(sized(64 * 1024 * 1024 + 1)).toEqual({ refused: expect.stringMatching(/larger than 64 MiB/) });
   });
 
   it('reads under a root that is itself reached through a link', () => {

@@ -19,10 +19,12 @@ const ORDER = ['pack', 'review', 'procurement', 'board', 'requirements', 'lamina
 /** Parts that recur are told once. */
 const FIGURE_KEYS = ['value', 'spread', 'basis'];
 const isFigure = (node: Node): boolean => FIGURE_KEYS.every((key) => node.properties?.[key] !== undefined);
+const isTexture = (node: Node): boolean => ['Rq', 'measured'].every((key) => node.properties?.[key] !== undefined);
 const isDeclared = (path: string): boolean => path.endsWith('declared[]');
 
 function rows(node: Node, path: string, needed: boolean): string[] {
   const own = path === '' ? [] : [row(path, node, needed)];
+  if (isTexture(node) && path !== '') return own;
   if (isFigure(node) || isDeclared(path)) {
     const extra = Object.entries(node.properties ?? {}).filter(([key]) => key === 'kind' || key === 'fitted_on');
     return [...own, ...(isFigure(node) ? extra.flatMap(([key, child]) => rows(child, `${path}.${key}`, false)) : [])];
@@ -39,21 +41,25 @@ function rows(node: Node, path: string, needed: boolean): string[] {
 
 function row(path: string, node: Node, needed: boolean): string {
   const allowed = node.enum ? ` One of ${node.enum.map((value) => `\`${value}\``).join(', ')}.` : '';
-  const kind = isFigure(node) ? ' *A figure.*' : '';
+  const kind = isFigure(node) ? ' *A figure.*' : isTexture(node) ? ' *A texture.*' : '';
   const text = `${node.description ?? ''}${allowed}${kind}`.replaceAll('|', '\\|');
   return `| \`${path}\` | ${needed ? 'yes' : ''} | ${text} |`;
 }
 
+function first(node: Node, fits: (node: Node) => boolean): Node | undefined {
+  if (fits(node)) return node;
+  for (const child of [...Object.values(node.properties ?? {}), ...(node.items ? [node.items] : [])]) {
+    const found = first(child, fits);
+    if (found) return found;
+  }
+  return undefined;
+}
+
+const textureRows = (): string[] =>
+  rows(first(manifestSchemas()['foils.schema.json'] as Node, isTexture) as Node, '', true);
+
 function figureRows(): string[] {
-  const find = (node: Node): Node | undefined => {
-    if (isFigure(node)) return node;
-    for (const child of [...Object.values(node.properties ?? {}), ...(node.items ? [node.items] : [])]) {
-      const found = find(child);
-      if (found) return found;
-    }
-    return undefined;
-  };
-  const figure = find(manifestSchemas()['finishes.schema.json'] as Node);
+  const figure = first(manifestSchemas()['finishes.schema.json'] as Node, isFigure);
   return Object.entries(figure?.properties ?? {}).map(([key, child]) =>
     row(key, child, figure?.required?.includes(key) ?? false),
   );
@@ -65,6 +71,7 @@ export function fieldTables(): string {
   const schemas = manifestSchemas();
   return [
     table('A figure, wherever one is due', figureRows()),
+    table('A texture of a copper face', textureRows()),
     ...ORDER.map((name) => {
       const schema = schemas[`${name}.schema.json`] as Node;
       return table(`\`${name}\``, rows(schema.else ?? schema, '', true));

@@ -1,4 +1,11 @@
-import type { ArrayDrawing, BudgetChart, CutChart, LinesChart, StackUpDrawing } from '../../src/dossier/document.js';
+import type {
+  ArrayDrawing,
+  BudgetChart,
+  CutChart,
+  LinesChart,
+  StackUpDrawing,
+  ToothDrawing,
+} from '../../src/dossier/document.js';
 
 /** Plausible curves for a page to be drawn with: closed forms of an array factor, no engine. */
 const round = (value: number, digits: number) => Number(value.toFixed(digits));
@@ -136,7 +143,11 @@ export const lossFactor: LinesChart = {
   yTitle: 'Loss factor K (1)',
   xScale: 'log',
   series: [
-    { label: 'Hammerstad', points: heights.map((rq) => [rq, round(hammerstad(rq), 4)] as const) },
+    {
+      label: 'Hammerstad (dotted: saturated)',
+      saturatedFrom: 0.51,
+      points: heights.map((rq) => [rq, round(hammerstad(rq), 4)] as const),
+    },
     { label: 'Groiss', points: heights.map((rq) => [rq, round(groiss(rq), 4)] as const) },
     { label: 'Gradient', emphasis: true, points: heights.map((rq) => [rq, round(1 + 2.1 * rq ** 0.9, 4)] as const) },
   ],
@@ -151,6 +162,32 @@ export const lossFactor: LinesChart = {
     { label: 'Foil SV-R, rolled', at: 0.25 },
     { label: 'Foil SV-2, very low profile', at: 0.4 },
     { label: 'Foil SV-9, standard', at: 0.85 },
+  ],
+};
+
+export const tooth: ToothDrawing = {
+  drawing: 'tooth',
+  widthUm: 12,
+  faces: [
+    {
+      label: 'Strip, dielectric face',
+      note: 'Sketch from stated figures, not a measurement: Gaussian profile of this Rq',
+      above: 'laminate',
+      skinDepthUm: 0.238,
+      rqUm: 0.42,
+      rz: { um: 2.31, assumed: true },
+      profile: { intervalUm: 0.1, heightsUm: Array.from({ length: 121 }, (_, i) => round(0.6 * Math.sin(i / 5), 3)) },
+    },
+    {
+      label: 'Ground, dielectric face',
+      note: 'Sketch from stated figures, not a measurement: one layer of balls on a flat base',
+      above: 'laminate',
+      skinDepthUm: 0.238,
+      rqUm: 0.3,
+      rz: { um: 1.2, assumed: false },
+      profile: { intervalUm: 12, heightsUm: [-0.2, -0.2] },
+      nodules: { radiusUm: 0.3, centres: Array.from({ length: 12 }, (_, i) => [0.5 + i, 0.1] as const) },
+    },
   ],
 };
 

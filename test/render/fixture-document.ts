@@ -374,6 +374,14 @@ const dossiers: readonly DocumentPage[] = boards.map((board, index) => ({
         alt: 'Loss factor of three models over Rq from 0.05 to 2 µm, with the spread shaded and three foils marked.',
         content: charts.lossFactor,
       },
+      {
+        kind: 'figure',
+        id: 'fig-tooth',
+        title: 'The tooth of each copper face to scale, beside the skin depth',
+        reading: 'The roughest face has an Rq of 0.42 µm, 1.8 times the skin depth of 0.238 µm.',
+        alt: 'Sections through two copper faces at one scale, each with bars for skin depth, Rq and Rz.',
+        content: charts.tooth,
+      },
     ),
     chapter('inputs', 'Inputs', {
       kind: 'table',

@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { engineAccuracyOf, reflectionSpread, sidelobeSpread } from '../../src/verdict/engine-accuracy.js';
+import { lineOutside } from '../../src/verdict/line-range.js';
+import { figure, fixtureBoard } from '../study/fixture-board.js';
 
 describe('engine accuracy', () => {
   it('turns a complex reflection error into an asymmetric one in dB', () => {
@@ -29,5 +31,26 @@ describe('engine accuracy', () => {
     expect(good).toBeGreaterThanOrEqual(0.35);
     expect(poor).toBeGreaterThan(good);
     expect(engineAccuracyOf('gain').spread(12, { reflection: 0.5 })).toEqual({ up: 0.35, down: 0.35 });
+  });
+
+  it('doubles that of a line outside what it was compared on, and names the respect', () => {
+    const { spread } = engineAccuracyOf('line_loss');
+    expect(spread(0.5, { reflection: 0 })).toEqual({ up: 0.015, down: 0.015 });
+    expect(spread(0.5, { reflection: 0, outside: true })).toEqual({ up: 0.03, down: 0.03 });
+    const board = fixtureBoard();
+    expect(lineOutside(board)).toEqual([]);
+    const { laminate } = board.stackUp;
+    const high = { ...laminate, thickness: figure('t', 0.4e-3) };
+    expect(lineOutside({ ...board, stackUp: { ...board.stackUp, laminate: high } }).join()).toMatch(
+      /0\.400 mm.*times as wide/,
+    );
+    const cover = {
+      material: 'mask',
+      permittivity: figure('a', 3),
+      lossTangent: figure('b', 0),
+      thickness: figure('c', 2e-5),
+    };
+    expect(lineOutside({ ...board, stackUp: { ...board.stackUp, cover } }).join()).toContain('cover');
+    expect(lineOutside({ ...board, band: { low: 130e9, high: 140e9 } }).join()).toContain('100 GHz');
   });
 });

@@ -23,16 +23,15 @@ const limited = (permitted: number): AllowanceOutcome => ({
   requirementId: 'r',
 });
 const free: AllowanceOutcome = { kind: 'not limited', searchedTo: 3.3 };
-const stuck: AllowanceOutcome = { kind: 'saturated', searchedTo: 3.3 };
 const failed: AllowanceOutcome = { kind: 'not met at nominal', requirementIds: ['r'] };
 
-/** Outcomes under Hammerstad, Groiss and gradient. */
+/** Outcomes under the low, middle and high estimate. */
 const search = (direction: 'down' | 'up', ...outcomes: readonly AllowanceOutcome[]): AllowanceResult => ({
   path: 'p',
   parameter: 'permittivity',
   direction,
   nominal: 3,
-  models: outcomes.map((outcome, i) => ({ model: (['hammerstad', 'groiss', 'gradient'] as const)[i], outcome })),
+  sides: outcomes.map((outcome, i) => ({ side: (['low', 'middle', 'high'] as const)[i]!, outcome })),
   sweeps: 1,
 });
 const upper = (a: AllowanceResult, ...b: readonly AllowanceResult[]) =>
@@ -53,12 +52,11 @@ describe('limit of an item', () => {
         kind: 'limited',
         tightest: 3.12,
         loosest: 3.2,
-        byModel: [
-          { model: 'hammerstad', permitted: 3.12 },
-          { model: 'groiss', permitted: 3.2 },
-          { model: 'gradient', permitted: 3.15 },
+        byEstimate: [
+          { side: 'low', permitted: 3.12 },
+          { side: 'middle', permitted: 3.2 },
+          { side: 'high', permitted: 3.15 },
         ],
-        saturated: [],
         partly: false,
       },
     });
@@ -76,14 +74,24 @@ describe('limit of an item', () => {
     expect(found).toMatchObject({ limit: 3.03, origin: 'calculated', allowance: { tightest: 3.03, loosest: 3.08 } });
   });
 
-  it('names the models that are saturated, beside a limit or alone', () => {
-    expect(upper(search('up', stuck, stuck, limited(3.05))).allowance).toMatchObject({
-      saturated: ['hammerstad', 'groiss'],
-    });
-    expect(upper(search('up', stuck, stuck, failed))).toEqual({
+  it('names the model that the analysis asks for where it has a ceiling, and takes no limit from it', () => {
+    const ceiling = { model: 'groiss', from: 0.4e-6 } as const;
+    const side = upper({ ...search('up', free, free, limited(3.05)), ceiling });
+    expect(side).toMatchObject({ limit: 3.05, origin: 'calculated', ceiling });
+    expect(upper(search('up', free, free, limited(3.05)))).not.toHaveProperty('ceiling');
+  });
+
+  it('is not signed on the lower estimates alone', () => {
+    expect(upper(search('up', limited(3.02), limited(3.01), failed))).toMatchObject({
       limit: 3.1,
       origin: 'stated',
-      allowance: { kind: 'saturated', saturated: ['hammerstad', 'groiss'] },
+      allowance: { kind: 'not met at nominal' },
+    });
+    // Another board still limits; the one that does not meet sets nothing.
+    expect(upper(search('up', limited(3.01), free, failed), search('up', free, free, limited(3.05)))).toMatchObject({
+      limit: 3.05,
+      origin: 'calculated',
+      allowance: { partly: true },
     });
   });
 
@@ -92,7 +100,7 @@ describe('limit of an item', () => {
     expect(upper(search('up', free, free, free), search('up', failed, failed, failed)).allowance).toEqual({
       kind: 'not met at nominal',
     });
-    expect(upper(search('up', limited(3.2), limited(3.2), failed)).allowance).toMatchObject({
+    expect(upper(search('up', failed, limited(3.2), limited(3.2))).allowance).toMatchObject({
       kind: 'limited',
       partly: true,
     });

@@ -20,7 +20,14 @@ describe('requirement quantities', () => {
     expect(value('gain', { gain: 20 })).toHaveProperty('value', 10 * Math.log10(20));
     expect(value('directivity', { directivity: 100 })).toEqual({ value: 20 });
     expect(value('realized_gain', { realizedGain: 10 })).toEqual({ value: 10 });
-    expect(value('line_loss', { lineLossDbPerM: 45 })).toEqual({ value: 0.45 });
+  });
+
+  it('take line loss from the line, not from the columns', () => {
+    const { onLine } = quantityOf('line_loss');
+    const at = { frequency: 76.5e9, temperatureC: 25, effectivePermittivity: 2.4, impedance: 50 };
+    expect(onLine?.({ ...at, lossDbPerM: 45 })).toEqual({ value: 0.45 });
+    expect(onLine?.({ ...at, lossDbPerM: Number.NaN })).toHaveProperty('missing');
+    expect(value('line_loss', {})).toHaveProperty('missing');
   });
 
   it('take the worst column for reflection', () => {

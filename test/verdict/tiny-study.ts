@@ -1,5 +1,5 @@
-import type { Requirement, RoughnessModelName } from '../../src/manifest/model.js';
-import type { BoardStudy, PointResult, Sweep } from '../../src/study/results.js';
+import type { Requirement } from '../../src/manifest/model.js';
+import type { BoardStudy, PointResult, RoughnessSide, Sweep } from '../../src/study/results.js';
 import { board, figure, requirement } from '../dossier/board-fixture.js';
 import { pointOf } from '../dossier/study-fixture.js';
 
@@ -15,43 +15,53 @@ export const sweepWith = (id: string, change: Partial<PointResult>): Sweep => ({
   id,
   label: id,
   points: [{ ...template, ...change }],
+  line: [],
 });
 const gainSweep = (id: string, dbi: number): Sweep => sweepWith(id, { gain: 10 ** (dbi / 10) });
 
 export interface TinyCase {
-  /** dBi under each model, in the order of MODELS. */
-  readonly models: readonly [number, number, number];
-  /** Change in dB of the gain at the low and high limit of each tolerance, per model. */
+  /** dBi under each estimate, in the order of SIDES. */
+  readonly sides: readonly [number, number, number];
+  /** Change in dB of the gain at the low and high limit of each tolerance under the low estimate; twice and three times that under the others. */
   readonly tolerances: readonly (readonly [number, number])[];
 }
 
-export const MODELS: readonly RoughnessModelName[] = ['hammerstad', 'groiss', 'gradient'];
+export const SIDES: readonly RoughnessSide[] = ['low', 'middle', 'high'];
+const NO_CURVES = { x: [], curves: [], band: { low: [], middle: [], high: [] } };
 
-export function tinyStudy({ models, tolerances }: TinyCase, nominal = 1): BoardStudy {
-  const sweeps = models.map((dbi, i) => ({ model: MODELS[i], sweep: gainSweep(MODELS[i], dbi) }));
+/** @param nominal which of the sides, or a gain of its own as a named model would give */
+export function tinyStudy({ sides, tolerances }: TinyCase, nominal: 0 | 1 | 2 | { dbi: number } = 1): BoardStudy {
+  const sweeps = sides.map((dbi, i) => ({ side: SIDES[i]!, sweep: gainSweep(SIDES[i]!, dbi) }));
+  const named = typeof nominal === 'number' ? undefined : nominal.dbi;
   return {
     board: tinyBoard,
     hash: '0'.repeat(64),
-    nominal: sweeps[nominal].sweep,
-    models: sweeps,
+    nominal: named === undefined ? sweeps[nominal as number]!.sweep : gainSweep('nominal', named),
+    sides: sweeps,
     tolerances: tolerances.map(([low, high], i) => {
-      const byModel = models.map((dbi, m) => ({
-        model: MODELS[m],
+      const bySide = sides.map((dbi, m) => ({
+        side: SIDES[m]!,
         low: gainSweep('low', dbi + low * (m + 1)),
         high: gainSweep('high', dbi + high * (m + 1)),
       }));
-      const { low: lowSweep, high: highSweep } = byModel[nominal];
+      const { low: lowSweep, high: highSweep } =
+        named === undefined
+          ? bySide[nominal as number]!
+          : { low: gainSweep('low', named + low), high: gainSweep('high', named + high) };
       return {
         id: `t${i}`,
         label: `Tolerance ${i}`,
         figure: figure(`t${i}`, 0, 1),
         low: lowSweep,
         high: highSweep,
-        byModel,
+        bySide,
       };
     }),
-    lineLoss: { x: [], curves: [] },
-    lossFactor: { x: [], curves: [] },
+    lineLoss: NO_CURVES,
+    lossFactor: NO_CURVES,
+    effectivePermittivity: NO_CURVES,
+    lineLossByFace: [],
+    slowWave: [],
     faces: [],
     flags: [],
     notEvaluated: [],

@@ -4,14 +4,40 @@ import { requirement } from '../dossier/board-fixture.js';
 import { gainRequirement, sweepWith, tinyStudy } from './tiny-study.js';
 
 describe('uncertainty', () => {
-  // 14.0, 13.6 (nominal) and 12.9 dBi; one tolerance ∓0.3 dB times 1, 2, 3 by model; 0.35 dB engine.
-  const study = tinyStudy({ models: [14, 13.6, 12.9], tolerances: [[-0.1, 0.05]] });
+  // 14.0, 13.6 (nominal) and 12.9 dBi; one tolerance ∓0.1 dB times 1, 2, 3 by estimate; 0.35 dB engine.
+  const study = tinyStudy({ sides: [14, 13.6, 12.9], tolerances: [[-0.1, 0.05]] });
   const verdict = judgeRequirement(study, gainRequirement('at_least', 12));
 
-  it('adds the spread over the models linearly to the root sum of squares of the rest', () => {
+  it('adds the spread over the estimates linearly to the root sum of squares of the rest', () => {
     expect(verdict.margin).toBeCloseTo(1.6, 9);
     expect(verdict.adverse).toBeCloseTo(0.7 + Math.hypot(0.35, 0.3), 9);
     expect(verdict.favourable).toBeCloseTo(0.4 + Math.hypot(0.35, 0.15), 9);
+  });
+
+  it('spans the estimates alone: a named model outside them moves the nominal value and no bound', () => {
+    const limit = gainRequirement('at_least', 12);
+    const bounds = (v: typeof verdict) => [v.margin! - v.adverse!, v.margin! + v.favourable!];
+    for (const dbi of [11, 12.9, 13.6, 15]) {
+      const named = judgeRequirement(
+        tinyStudy({ sides: [14, 13.6, 12.9], tolerances: [[-0.1, 0.05]] }, { dbi }),
+        limit,
+      );
+      expect(named.value).toBeCloseTo(dbi, 9);
+      expect(named.status).toBe(verdict.status);
+      bounds(named).forEach((bound, i) => {
+        expect(bound).toBeCloseTo(bounds(verdict)[i]!, 9);
+      });
+      const roughness = named.parts.find((p) => p.kind === 'roughness')!;
+      const rest = named.parts.filter((p) => p.kind !== 'roughness').map((p) => p.adverse);
+      expect(roughness.adverse + Math.hypot(...rest)).toBeCloseTo(named.adverse!, 9);
+      expect(roughness.detail.includes('outside the band')).toBe(dbi < 12.9 || dbi > 14);
+    }
+  });
+
+  it('says what is known of the faces behind the band', () => {
+    const face = { face: 'ground (treated)', known: 'Rq and correlation length' } as (typeof study.faces)[number];
+    const told = judgeRequirement({ ...study, faces: [face] }, gainRequirement('at_least', 12));
+    expect(told.parts.find((p) => p.kind === 'roughness')?.detail).toContain('ground: Rq and correlation length');
   });
 
   it('prints every part, and the parts add up to the whole', () => {
@@ -21,7 +47,7 @@ describe('uncertainty', () => {
     expect(linear + Math.hypot(...squares)).toBeCloseTo(verdict.adverse ?? Number.NaN, 9);
   });
 
-  it('takes the largest effect of a tolerance over the models and shows the nominal limits', () => {
+  it('takes the largest effect of a tolerance over the estimates and shows the nominal limits', () => {
     const part = verdict.parts.find((p) => p.kind === 'tolerance');
     expect(part?.adverse).toBeCloseTo(0.3, 9);
     expect(part?.atLimits?.low).toBeCloseTo(13.4, 9);
@@ -30,7 +56,7 @@ describe('uncertainty', () => {
 
   it('does not count a tolerance that helps at both limits against the board', () => {
     const helped = judgeRequirement(
-      tinyStudy({ models: [13, 13, 13], tolerances: [[0.2, 0.4]] }),
+      tinyStudy({ sides: [13, 13, 13], tolerances: [[0.2, 0.4]] }),
       gainRequirement('at_least', 12),
     );
     const part = helped.parts.find((p) => p.kind === 'tolerance');
@@ -38,16 +64,14 @@ describe('uncertainty', () => {
     expect(part?.favourable).toBeCloseTo(1.2, 9);
   });
 
-  it('is not evaluated when a roughness model yields no number, and says under which', () => {
+  it('is not evaluated when an estimate yields no number, and says under which', () => {
     const broken = {
       ...study,
-      models: study.models.map((m) =>
-        m.model === 'gradient' ? { ...m, sweep: sweepWith('x', { gain: Number.NaN }) } : m,
-      ),
+      sides: study.sides.map((s) => (s.side === 'high' ? { ...s, sweep: sweepWith('x', { gain: Number.NaN }) } : s)),
     };
     const found = judgeRequirement(broken, gainRequirement('at_least', 12));
     expect(found.status).toBe('not evaluated');
-    expect(found.reason).toContain('gradient');
+    expect(found.reason).toContain('high estimate');
     expect(found.value).toBeCloseTo(13.6, 9);
   });
 

@@ -20,7 +20,7 @@ function sweep(efficiency: (ghz: number, celsius: number) => number): Sweep {
       }),
     ),
   );
-  return { id: 's', label: 's', points };
+  return { id: 's', label: 's', points, line: [] };
 }
 const atLeast = (condition: Parameters<typeof requirement>[1]['condition']) =>
   requirement('r', { quantity: 'radiation_efficiency', limit: { direction: 'at_least', value: 0.5 }, condition });
@@ -80,6 +80,24 @@ describe('worst value', () => {
     expect('notEvaluated' in found && found.notEvaluated).toContain('(77 GHz, 50 °C)');
     expect(worstValue(holed, atLeast({ band: { low: 77.9e9, high: 78e9 } }), subject)).toHaveProperty('notEvaluated');
     expect(worstValue(holed, atLeast({ band: { low: 76e9, high: 76e9 } }), subject)).toHaveProperty('value', 0.9);
+  });
+
+  it('is taken from the line where the columns were not evaluated', () => {
+    const line = [0, 50].flatMap((temperatureC) =>
+      [76, 77, 78].map((ghz) => ({
+        frequency: ghz * 1e9,
+        temperatureC,
+        lossDbPerM: ghz + temperatureC / 10,
+        effectivePermittivity: 2.4,
+        impedance: 50,
+      })),
+    );
+    const loss = requirement('r', { quantity: 'line_loss', limit: { direction: 'at_most', value: 1 } });
+    const found = worstValue({ id: 's', label: 's', points: [], line }, loss, subject);
+    expect(found).toMatchObject({ where: { frequency: 78e9, temperatureC: 50 } });
+    expect('value' in found && found.value).toBeCloseTo(0.83, 12);
+    expect(worstValue({ id: 's', label: 's', points: [], line }, atLeast({}), subject)).toHaveProperty('notEvaluated');
+    expect(worstValue({ ...falling, line: [] }, loss, subject)).toHaveProperty('notEvaluated');
   });
 
   it('refuses a sweep with a hole in its grid', () => {

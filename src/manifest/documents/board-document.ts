@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { declared, exactlyOne, figure, id, numberFigure, quantity, range, statement, text } from './fields.js';
-import { textureDocument } from './library-documents.js';
+import { textureDocument } from './texture-document.js';
 
 const MOST_COLUMNS = 64;
 const MOST_PATCHES = 64;

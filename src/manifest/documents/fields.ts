@@ -123,7 +123,9 @@ const provenance = {
   date: date('Date of that document.').optional(),
 };
 
-function spread(dimension: Dimension | 'number') {
+const SPREAD = 'How far the figure may lie from its value. 0 when it is exact by definition.';
+
+export function spread(dimension: Dimension | 'number', description = SPREAD) {
   const one = (description: string) => {
     const info: Leaf = { kind: 'spread', dimension };
     if (dimension === 'number') {
@@ -147,7 +149,7 @@ function spread(dimension: Dimension | 'number') {
         })
         .describe('Different distances to the lower and the upper limit.'),
     ])
-    .describe('How far the figure may lie from its value. 0 when it is exact by definition.');
+    .describe(description);
 }
 
 /** A figure with a unit: value, spread, basis and source. `extra` adds keys to the same map. */
@@ -187,6 +189,26 @@ export function numberFigure<X extends z.ZodRawShape = Record<never, never>>(
     })
     .describe(description);
   return statement(schema, { what: 'a figure', figure: { dimension: 'number', floor: low } });
+}
+
+/** A figure that is a ratio: a plain number, or a text in %. Its spread in % is of the value, as everywhere. */
+export function ratioFigure(description: string, plausible: PlausibleRange, options: { readonly floor?: number } = {}) {
+  const value = z.union([z.number(), z.string().regex(new RegExp(quantityPattern('ratio'), 'u'))]);
+  const schema = z
+    .strictObject({
+      value: leaf(value.describe('Nominal value: a plain number, or a number in %.'), {
+        kind: 'quantity',
+        dimension: 'ratio',
+        range: plausible,
+      }),
+      spread: spread('number'),
+      ...provenance,
+    })
+    .describe(description);
+  return statement(schema, {
+    what: 'a figure',
+    figure: { dimension: 'ratio', ...(options.floor === undefined ? {} : { floor: options.floor }) },
+  });
 }
 
 /** Any figure as it comes out of the check. */

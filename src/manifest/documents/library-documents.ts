@@ -1,16 +1,6 @@
 import { z } from 'zod';
-import {
-  declared,
-  exactlyOne,
-  figure,
-  id,
-  invented,
-  numberFigure,
-  quantity,
-  range,
-  statement,
-  text,
-} from './fields.js';
+import { declared, figure, id, invented, numberFigure, quantity, range, ratioFigure, text } from './fields.js';
+import { textureDocument } from './texture-document.js';
 
 const identity = (what: string) => ({
   id: id(`Name by which boards refer to the ${what}.`),
@@ -53,34 +43,39 @@ const laminate = z
       'Relative change of the loss tangent per kelvin.',
       range(-0.05, 0.05, 'the temperature coefficient of a loss tangent', '%/K'),
     ).optional(),
+    in_plane_permittivity: numberFigure(
+      'Relative permittivity in the plane of the board, where it differs. Left out: taken as equal, and said so.',
+      1,
+      20,
+    ).optional(),
+    water: z
+      .strictObject({
+        uptake: ratioFigure(
+          'Share of mass that the laminate takes up as water in service, as a ratio or in %.',
+          range(0, 0.05, 'the water uptake of a laminate', '%'),
+          { floor: 0 },
+        ),
+        permittivity_per_share: z
+          .number()
+          .min(0)
+          .max(200)
+          .describe('Relative rise of the permittivity per unit of that share: 10 makes 0.04 % of water 0.4 %.')
+          .optional(),
+        loss_tangent_per_share: z
+          .number()
+          .min(0)
+          .max(50)
+          .describe('Rise of the loss tangent itself per unit of that share: 1 makes 0.04 % of water 0.0004.')
+          .optional(),
+      })
+      .meta({
+        description: 'Water in service, between none and the uptake stated. One of the two effects is needed.',
+        anyOf: [{ required: ['permittivity_per_share'] }, { required: ['loss_tangent_per_share'] }],
+      })
+      .optional(),
     declared: declared().optional(),
   })
   .describe('One laminate.');
-
-const PARAMETERS = ['Rq', 'Sq', 'Ra', 'Sa', 'Rz', 'Sz'] as const;
-const height = (name: string) =>
-  figure('length', name, range(0, 50e-6, 'the roughness of a copper face', 'um'), { floor: 0 }).optional();
-
-/** Texture of one copper face: exactly one height parameter. */
-export const textureDocument = () =>
-  statement(
-    z
-      .strictObject({
-        Rq: height('Root-mean-square height of the profile (ISO 21920).'),
-        Sq: height('Root-mean-square height of the surface (ISO 25178), taken as Rq.'),
-        Ra: height('Arithmetic mean height of the profile (ISO 21920), converted to Rq.'),
-        Sa: height('Arithmetic mean height of the surface (ISO 25178), converted to Rq.'),
-        Rz: height('Maximum height of the profile (ISO 21920), converted to Rq.'),
-        Sz: height('Maximum height of the surface (ISO 25178), converted to Rq.'),
-        instrument: text('Instrument with which the face was measured.').optional(),
-        filter: text('Filters (nesting indices) of the evaluation.').optional(),
-      })
-      .meta({
-        description: 'Texture of a copper face: exactly one of Rq, Sq, Ra, Sa, Rz, Sz.',
-        ...exactlyOne(...PARAMETERS),
-      }),
-    { what: 'a texture' },
-  );
 
 const conductivity = (what: string) =>
   figure(
@@ -150,7 +145,5 @@ export const finishesDocument = z
   .describe('A library of finishes.');
 
 export type LaminateDocument = z.infer<typeof laminate>;
-export type TextureDocument = z.infer<ReturnType<typeof textureDocument>>;
 export type FoilDocument = z.infer<typeof foil>;
 export type FinishDocument = z.infer<typeof finish>;
-export const TEXTURE_PARAMETERS = PARAMETERS;

@@ -83,8 +83,11 @@ export const packDocument = z
     analysis: z
       .strictObject({
         roughness_model: z
-          .enum(['hammerstad', 'groiss', 'gradient'])
-          .describe('Roughness model behind the nominal figures. The spread over all models is always evaluated.'),
+          .enum(['band', 'hammerstad', 'groiss', 'gradient'])
+          .describe(
+            'What stands behind the nominal figures: band (when left out), the middle estimate for what is known of each face, or a published model. The spread from low to high estimate is always evaluated.',
+          )
+          .optional(),
         frequency_step: quantity(
           'frequency',
           'Largest frequency step over the band.',

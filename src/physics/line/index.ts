@@ -43,7 +43,14 @@ export {
   spectralLine,
 } from './spectral-line.js';
 export type { CoverCoat, StripSection } from './strip-section.js';
-export { dispersedWeights, type StillStrip, type StripSolution, stillStrip, stripAt } from './strip-solution.js';
+export {
+  dispersedWeights,
+  type StillStrip,
+  type StripSolution,
+  stillStrip,
+  stripAt,
+  stripFlags,
+} from './strip-solution.js';
 export {
   type StriplineFace,
   type StriplineGeometry,

@@ -1,8 +1,10 @@
 import { SPEED_OF_LIGHT } from '../constants.js';
+import { ANNEALED_COPPER_CONDUCTIVITY, halfSpaceImpedance } from '../material/index.js';
 import type { ValidityFlag } from '../validity.js';
 import { type CrossSection, crossSection } from './cross-section.js';
+import { sheetSeries } from './sheet-strip.js';
 import { type SheetSquares, type SpectralLine, type SpectralProblem, spectralLine } from './spectral-line.js';
-import type { StripSection } from './strip-section.js';
+import { requireSection, type StripSection } from './strip-section.js';
 import type { FaceWeights } from './wheeler.js';
 
 /** A microstrip as solved at one frequency, before any loss: what faces and dielectrics are then set into. */
@@ -14,14 +16,18 @@ export interface StripSolution {
   readonly effectivePermittivity: number;
   /** Share of the capacitance that slab and cover store, for G = ωC Σ share·tan δ; with dispersion a little above 1 at the most. */
   readonly filling: { readonly slab: number; readonly cover: number };
+  /** Without thickness all of the strip's current is counted on the underside, as that of a sheet of smooth copper. */
   readonly weights: FaceWeights;
+  /** Squared currents of a strip without thickness, from which its loss follows for a sheet impedance of one's own. */
+  readonly sheet?: SheetSquares;
   readonly flags: readonly ValidityFlag[];
 }
 
 /** What does not depend on frequency, to be kept by whoever solves one section at several. */
 export interface StillStrip {
   readonly section: StripSection;
-  readonly thick: CrossSection;
+  /** Absent where the strip has no thickness. */
+  readonly thick?: CrossSection;
   /** The same strip without thickness, at a frequency low enough to be none. */
   readonly sheet: SpectralLine;
 }
@@ -29,10 +35,12 @@ export interface StillStrip {
 /** k0 h of the frequency that stands for zero: dispersion grows as its square. */
 const STILL = 1e-4;
 
-/** @throws RangeError on a geometry that is not physical, or a strip without thickness */
+/** @throws RangeError on a geometry that is not physical */
 export function stillStrip(section: StripSection): StillStrip {
+  requireSection(section);
   const frequency = (STILL * SPEED_OF_LIGHT) / (2 * Math.PI * section.height);
-  return { section, thick: crossSection(section), sheet: spectralLine(sheetOf(section), frequency) };
+  const sheet = spectralLine(sheetOf(section), frequency);
+  return section.thickness > 0 ? { section, thick: crossSection(section), sheet } : { section, sheet };
 }
 
 /**
@@ -49,6 +57,7 @@ export function stillStrip(section: StripSection): StillStrip {
  */
 export function stripAt({ section, thick, sheet }: StillStrip, frequency: number): StripSolution {
   const moving = spectralLine(sheetOf(section), frequency);
+  if (!thick) return sheetAt(section, moving);
   const gain = (per: (z: number, slowness: number) => number): number =>
     per(thick.impedance, Math.sqrt(thick.effectivePermittivity)) +
     per(moving.impedance, Math.sqrt(moving.effectivePermittivity)) -
@@ -64,7 +73,28 @@ export function stripAt({ section, thick, sheet }: StillStrip, frequency: number
     effectivePermittivity: inductance * capacitance,
     filling: { slab: grown('slab'), cover: grown('cover') },
     weights: dispersedWeights(thick.weights, sheet.squares, moving.squares),
-    flags: flagsOf(section, frequency),
+    flags: stripFlags(section, frequency),
+  };
+}
+
+/** A strip without thickness is the full wave alone. */
+function sheetAt(section: StripSection, moving: SpectralLine): StripSolution {
+  const { frequency, impedance, effectivePermittivity, squares } = moving;
+  const copper = halfSpaceImpedance(frequency, ANNEALED_COPPER_CONDUCTIVITY);
+  return {
+    section,
+    frequency,
+    impedance,
+    effectivePermittivity,
+    filling: moving.filling,
+    weights: {
+      underside: sheetSeries(squares, section.width, copper, frequency).re / copper.re,
+      top: 0,
+      edges: 0,
+      ground: squares.ground,
+    },
+    sheet: squares,
+    flags: stripFlags(section, frequency),
   };
 }
 
@@ -96,7 +126,11 @@ export function dispersedWeights(thick: FaceWeights, still: SheetSquares, moving
   };
 }
 
-function flagsOf(section: StripSection, frequency: number): ValidityFlag[] {
+/** k0 h up to which independent full-wave solutions were at hand. */
+const TALLEST = 0.41;
+
+/** Where a strip lies outside what its solution holds for. */
+export function stripFlags(section: StripSection, frequency: number): ValidityFlag[] {
   const model = 'microstrip, section and full wave';
   const flags: ValidityFlag[] = [];
   const flag = (code: string, severity: ValidityFlag['severity'], text: string): void => {
@@ -109,6 +143,27 @@ function flagsOf(section: StripSection, frequency: number): ValidityFlag[] {
       'strip.thickness-range',
       'outside',
       `The strip is ${ratio.toPrecision(2)} times as thick as the smaller of its width and its height; the change of loss with frequency is solved for strips up to half of it.`,
+    );
+  const shape = width / height;
+  if (shape < 0.2 || shape > 25)
+    flag(
+      'strip.width-range',
+      'outside',
+      `The strip is ${shape.toPrecision(2)} heights wide; sections are compared with finer ones from 0.2 to 25.`,
+    );
+  const dielectrics = Math.max(permittivity, cover?.permittivity ?? 1);
+  if (dielectrics > 12)
+    flag(
+      'strip.permittivity-range',
+      'outside',
+      `A dielectric of permittivity ${dielectrics}; sections are compared with finer ones up to 12.`,
+    );
+  const tall = (2 * Math.PI * frequency * height) / SPEED_OF_LIGHT;
+  if (tall > TALLEST)
+    flag(
+      'strip.height-range',
+      'outside',
+      `At ${(frequency * 1e-9).toPrecision(3)} GHz the laminate is ${tall.toPrecision(2)} of λ/2π high; lines are compared with independent full-wave solutions up to ${TALLEST} (0.25 mm at 77 GHz).`,
     );
   const slab = (frequency / SPEED_OF_LIGHT) * height * Math.sqrt(permittivity - 1);
   if (slab > 0.25)

@@ -1,4 +1,5 @@
 import { complex } from '../../numerics/complex.js';
+import { ASSUMED_RZ_OVER_RQ } from '../texture/conversion.js';
 import { BALL_PILE_HIGHEST_RATIO, ballPile } from './ball-pile.js';
 import { CANNONBALL_RADIUS_OVER_RZ, cannonball } from './cannonball.js';
 import { groissImpedance, hammerstadImpedance } from './causal-reactance.js';
@@ -8,7 +9,6 @@ import { GROISS_LOWEST_RATIO, groiss } from './groiss.js';
 import { CEILING, hammerstad, type LossFactor } from './hammerstad.js';
 import { HURAY_LOWEST_RADIUS } from './huray.js';
 import { sphereOverstatement } from './sphere.js';
-import { ASSUMED_RZ_OVER_RQ } from './texture.js';
 
 /** Rq above which a texture is known to slow the wave more than a loss factor can say, m. */
 const PHASE_MATTERS = 0.4e-6;

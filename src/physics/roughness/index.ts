@@ -1,5 +1,7 @@
+export { ASSUMED_RZ_OVER_RQ } from '../texture/conversion.js';
 export { ballPile } from './ball-pile.js';
 export { type BandEstimate, type BandEstimates, GENTLE_LENGTH_OVER_RQ, roughnessEstimates } from './band.js';
+export { areaRatiosOf } from './band-lateral.js';
 export { cannonball } from './cannonball.js';
 export { causalReactance, groissImpedance, hammerstadImpedance } from './causal-reactance.js';
 export type { FaceConditions, ReferencePlane, RoughFaceInput, RoughnessModel } from './face-model.js';
@@ -8,6 +10,7 @@ export { groiss } from './groiss.js';
 export { type HallFactor, hallHemispheres } from './hall.js';
 export { hammerstad, type LossFactor } from './hammerstad.js';
 export { type Balls, hurayImpedance, hurayLossFactor } from './huray.js';
+export { type LengthConversion, lengthConversion } from './length-conversion.js';
 export { type Narrowing, type RoughnessBand, roughnessBand } from './narrowing.js';
 export { type NoduleFace, noduleStacks } from './nodules.js';
 export {

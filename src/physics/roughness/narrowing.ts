@@ -77,7 +77,7 @@ function outcomes(texture: TextureKnowledge): Partial<Record<Narrowing['quantity
  *
  * @example
  * const band = roughnessBand({ rq: 0.4e-6 }, { frequency: 77e9, conductivity: 5.8e7, permittivity: 3 });
- * [band.low.lossFactor, band.middle.lossFactor, band.high.lossFactor]; // 1.11, 1.90, 2.59
+ * [band.low.lossFactor, band.middle.lossFactor, band.high.lossFactor]; // 1.10, 1.90, 2.59
  * band.narrowing[0].measurement; // what to ask the supplier for first
  */
 export function roughnessBand(texture: TextureKnowledge, conditions: FaceConditions): RoughnessBand {

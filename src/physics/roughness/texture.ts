@@ -27,12 +27,9 @@ export interface TextureKnowledge {
   /** Isotropic when left out. */
   readonly lay?: Lay;
   readonly nodule?: NoduleKnowledge;
-  /** Maximum height of the profile, m; 5.5 Rq is assumed when left out (cannonball stacking alone needs it). */
+  /** Maximum height of the profile, m; `ASSUMED_RZ_OVER_RQ` times Rq when left out (cannonball stacking alone needs it). */
   readonly rz?: number;
 }
-
-/** Rz over Rq that is assumed where Rz is not measured. Measured foils scatter from about 4 to 8. */
-export const ASSUMED_RZ_OVER_RQ = 5.5;
 
 function requirePositive(name: string, value: number): number {
   if (!(Number.isFinite(value) && value > 0)) throw new RangeError(`${name} must be positive and finite, got ${value}`);

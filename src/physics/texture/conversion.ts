@@ -40,10 +40,11 @@ export function normalRange(n: number): number {
 }
 
 /**
- * Independent heights in a section for which Rz over Rq is taken: 5.5 at 200. A quarter of Rq on both sides covers
- * sections with 45 (4.4) to some 4500 (7.3) of them.
+ * Rz over Rq that is taken where only one of them is measured: the mean range of some 200 independent normal heights.
+ * Measured foils scatter from about 4 to 8; a quarter of Rq on both sides covers sections with 45 (4.4) to some 4500 (7.3)
+ * heights.
  */
-const RZ_OVER_RQ = 5.5;
+export const ASSUMED_RZ_OVER_RQ = 5.5;
 const SPREAD_OF_RZ = 0.25;
 
 const fromMean = (other: string): RqConversion => ({
@@ -54,10 +55,10 @@ const fromMean = (other: string): RqConversion => ({
 });
 
 const fromRange = (other: string): RqConversion => ({
-  factor: 1 / RZ_OVER_RQ,
-  low: (1 - SPREAD_OF_RZ) / RZ_OVER_RQ,
-  high: (1 + SPREAD_OF_RZ) / RZ_OVER_RQ,
-  assumption: `Rq is the stated ${other} divided by 5.5, an assumption (the mean range of some 200 independent normal heights); 25 % of Rq is added to its spread on both sides.${other === 'Sz' ? ' A map holds more independent heights than a section, so Sz overstates Rq this way.' : ''}`,
+  factor: 1 / ASSUMED_RZ_OVER_RQ,
+  low: (1 - SPREAD_OF_RZ) / ASSUMED_RZ_OVER_RQ,
+  high: (1 + SPREAD_OF_RZ) / ASSUMED_RZ_OVER_RQ,
+  assumption: `Rq is the stated ${other} divided by ${ASSUMED_RZ_OVER_RQ}, an assumption (the mean range of some 200 independent normal heights); 25 % of Rq is added to its spread on both sides.${other === 'Sz' ? ' A map holds more independent heights than a section, so Sz overstates Rq this way.' : ''}`,
 });
 
 /** Rq from another height parameter of the same face and the same filters. */

@@ -4,7 +4,14 @@ export {
   type ProfileAutocorrelation,
   profileAutocorrelation,
 } from './autocorrelation.js';
-export { type HeightParameter, normalRange, RQ_CONVERSIONS, RQ_OVER_RA, type RqConversion } from './conversion.js';
+export {
+  ASSUMED_RZ_OVER_RQ,
+  type HeightParameter,
+  normalRange,
+  RQ_CONVERSIONS,
+  RQ_OVER_RA,
+  type RqConversion,
+} from './conversion.js';
 export { type MapDecay, mapDecayLengths, profileDecayLength, STANDARD_FALL } from './decay-length.js';
 export { type DefaultSettings, defaultSettings } from './default-settings.js';
 export {

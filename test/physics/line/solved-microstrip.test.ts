@@ -89,11 +89,11 @@ describe('what a solved line obeys', () => {
   it('at low frequency it is the quasi-static section', () => {
     const still = stillStrip(feed);
     const low = stripAt(still, 1e7);
-    expect(off(low.impedance, still.thick.impedance)).toBeLessThan(1e-6);
-    expect(off(low.effectivePermittivity, still.thick.effectivePermittivity)).toBeLessThan(1e-6);
+    expect(off(low.impedance, still.thick!.impedance)).toBeLessThan(1e-6);
+    expect(off(low.effectivePermittivity, still.thick!.effectivePermittivity)).toBeLessThan(1e-6);
     for (const face of ['underside', 'top', 'edges', 'ground'] as const)
-      expect(off(low.weights[face], still.thick.weights[face])).toBeLessThan(1e-5);
-    expect(low.filling.slab).toBeCloseTo(still.thick.filling.slab, 6);
+      expect(off(low.weights[face], still.thick!.weights[face])).toBeLessThan(1e-5);
+    expect(low.filling.slab).toBeCloseTo(still.thick!.filling.slab, 6);
   });
 
   it('a vanishing thickness leaves the full wave of the sheet', () => {
@@ -105,7 +105,7 @@ describe('what a solved line obeys', () => {
 
   it('with frequency current leaves the top for underside and ground', () => {
     const still = stillStrip(feed);
-    const [low, high] = [still.thick.weights, stripAt(still, 77e9).weights];
+    const [low, high] = [still.thick!.weights, stripAt(still, 77e9).weights];
     expect(high.top).toBeLessThan(low.top);
     expect(high.underside).toBeGreaterThan(low.underside);
     expect(high.ground).toBeGreaterThan(low.ground);
@@ -139,12 +139,17 @@ describe('a cover on a line at 77 GHz', () => {
 describe('flags and refusals', () => {
   const codes = (g: StripSection, frequency = 77e9) => line(g, frequency).flags.map((flag) => flag.code);
 
-  it('none on an ordinary feed line', () => {
-    expect(codes(feed)).toEqual([]);
+  it.each([24e9, 60e9, 77e9])('none on an ordinary feed line, bare or under a flat cover, at %d Hz', (frequency) => {
+    expect(codes(feed, frequency)).toEqual([]);
+    expect(codes({ ...feed, cover: mask('planar', 25e-6) }, frequency)).toEqual([]);
   });
 
   it.each([
     ['strip.thickness-range', strip(30, 127, 18, 3), 77e9],
+    ['strip.width-range', strip(20, 127, 2, 3), 77e9],
+    ['strip.width-range', strip(3300, 127, 18, 3), 77e9],
+    ['strip.permittivity-range', strip(60, 127, 5, 12.9), 24e9],
+    ['strip.height-range', strip(600, 254, 18, 3), 81e9],
     ['strip.slab-modes', strip(600, 1000, 18, 3), 77e9],
     ['strip.conformal-dispersion', { ...feed, cover: mask('conformal', 15e-6) }, 77e9],
     ['strip.skin-depths', strip(320, 127, 5, 3), 1e9],
@@ -155,6 +160,6 @@ describe('flags and refusals', () => {
   it('refuses what is not physical, quoting it', () => {
     expect(() => line(feed, -1)).toThrow(/frequency.*got -1/);
     expect(() => line(feed, 77e9, -0.1)).toThrow(/loss tangent.*got -0.1/);
-    expect(() => line({ ...feed, thickness: 0 })).toThrow(/thickness/);
+    expect(() => line({ ...feed, thickness: -1e-6 })).toThrow(/thickness.*got -0.000001/);
   });
 });

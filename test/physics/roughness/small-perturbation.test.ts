@@ -94,12 +94,41 @@ describe('integrals', () => {
 });
 
 describe('held to the area ratio', () => {
-  it.each(LAYS)('tends to the area ratio at high frequency, %s', (lay) => {
+  it.each(['isotropic', 'across'] as const)('tends to the area ratio at high frequency, %s', (lay) => {
     for (const l of [1, 2, 4]) {
       const p = areaLimitedPerturbation({ rq: 200, correlationLength: l * 200, lay }, 1);
       const area = lay === 'isotropic' ? isotropicAreaRatio(2 / l) : profileLengthRatio(Math.SQRT2 / l);
       expect(p.impedance.re - 1).toBeCloseTo(area, 2);
     }
+  });
+
+  it('along grooves stays below the area ratio: current does not reach the bottoms', () => {
+    for (const l of [1, 2, 4])
+      for (const r of [0.5, 2, 20, 200]) {
+        const loss = (lay: Lay) => areaLimitedPerturbation({ rq: r, correlationLength: l * r, lay }, 1).impedance.re;
+        expect(loss('along')).toBeLessThan(loss('across'));
+        expect(loss('along')).toBeGreaterThan(1);
+        // Grooves of unknown direction lie between.
+        const unknown = { rq: r, correlationLength: l * r, lay: 'across', fluxWeight: 0.5 } as const;
+        expect(areaLimitedPerturbation(unknown, 1).impedance.re).toBeGreaterThan(loss('along'));
+        expect(areaLimitedPerturbation(unknown, 1).impedance.re).toBeLessThan(loss('across'));
+      }
+  });
+
+  // Independently solved random profiles, mean of 4 seeds (scatter about 0.02 at this slope): current along, correlation
+  // length 1.41 Rq. They had no part in the constant for grooves along the current.
+  it.each([
+    [0.5, 1.134],
+    [0.7, 1.172],
+    [1, 1.207],
+    [1.5, 1.231],
+    [2, 1.276],
+    [3, 1.255],
+    [4, 1.274],
+    [6, 1.252],
+  ])('steep grooves along the current, Rq %d skin depths: K %d', (r, k) => {
+    const p = areaLimitedPerturbation({ rq: r, correlationLength: 1.41 * r, lay: 'along' }, 1);
+    expect(Math.abs(p.impedance.re - k)).toBeLessThan(0.035);
   });
 
   it('never exceeds the second order, and joins it on gentle texture', () => {

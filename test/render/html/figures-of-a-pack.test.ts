@@ -32,9 +32,8 @@ function axesOf({ content }: FigureBlock): string[] {
 
 function labelsOf({ content }: FigureBlock): string[] {
   if ('drawing' in content) {
-    return content.drawing === 'stack-up'
-      ? content.layers.map(({ label }) => label)
-      : content.columns.map((c) => c.label);
+    if (content.drawing === 'stack-up') return content.layers.map(({ label }) => label);
+    return content.drawing === 'array' ? content.columns.map((c) => c.label) : content.faces.map((f) => f.label);
   }
   if (content.chart === 'budget') return [content.start, ...content.losses, content.end].map(({ label }) => label);
   return content.series.map(({ label }) => label);
@@ -43,7 +42,7 @@ function labelsOf({ content }: FigureBlock): string[] {
 describe('pictures of a pack', () => {
   it('are of every kind', () => {
     const kinds = figures.map(([, , { content }]) => ('chart' in content ? content.chart : content.drawing));
-    expect(new Set(kinds)).toEqual(new Set(['stack-up', 'array', 'budget', 'cut', 'lines']));
+    expect(new Set(kinds)).toEqual(new Set(['stack-up', 'array', 'tooth', 'budget', 'cut', 'lines']));
   });
 
   it.each(figures)(
