@@ -152,7 +152,7 @@ if (executable === undefined) {
       await withPage('hostile/B/board/qb-1.html', { javaScriptEnabled: true }, async (page) => {
         expect(await page.evaluate('globalThis.broken')).toBeUndefined();
         expect(await page.evaluate("document.querySelectorAll('script, img, style').length")).toBe(0);
-        expect(await page.evaluate("document.querySelectorAll('main svg[role=img]').length")).toBe(8);
+        expect(await page.evaluate("document.querySelectorAll('main svg[role=img]').length")).toBe(9);
         expect(await page.evaluate("document.querySelector('h1').textContent")).toContain('<script>');
       });
     });
