@@ -67,10 +67,10 @@ export function evaluatedTexture(
       'A profile tells nothing of the developed area ratio',
     ];
     return {
-      rq,
-      rqStandardError: finite(rqStandardError),
-      ...(rz > 0 ? { rz } : {}),
-      ...(correlationLength === undefined ? {} : { correlationLength }),
+      rq: figured(rq),
+      rqStandardError: figured(finite(rqStandardError)),
+      ...(rz > 0 ? { rz: figured(rz) } : {}),
+      ...(correlationLength === undefined ? {} : { correlationLength: figured(correlationLength) }),
       measured: made(source, 'profile', conditions, interval, profile.heights.length * interval, profile, remarks),
       ...about,
     };
@@ -89,16 +89,19 @@ export function evaluatedTexture(
       : [`The texture has a direction (texture aspect ratio Str ${str.toPrecision(2)})`]),
   ];
   return {
-    rq: sq,
-    rqStandardError: finite(sqStandardError),
-    ...(correlationLength === undefined ? {} : { correlationLength }),
-    ...(sdr > 0 ? { developedAreaRatio: sdr } : {}),
+    rq: figured(sq),
+    rqStandardError: figured(finite(sqStandardError)),
+    ...(correlationLength === undefined ? {} : { correlationLength: figured(correlationLength) }),
+    ...(sdr > 0 ? { developedAreaRatio: figured(sdr) } : {}),
     measured: made(source, 'map', conditions, interval, extent, middleRow(map), remarks),
     ...about,
   };
 }
 
 const finite = (x: number): number => (Number.isFinite(x) ? x : 0);
+
+/** Four digits, far inside the standard error of any measured length: what is printed and asked for is what is calculated with. */
+const figured = (x: number): number => Number(x.toPrecision(4));
 
 function made(
   source: Pick<MeasuredTexture, 'file' | 'sha256'>,

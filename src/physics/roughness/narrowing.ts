@@ -23,9 +23,8 @@ export interface RoughnessBand extends BandEstimates {
 
 const WORDS: Readonly<Record<Narrowing['quantity'], string>> = {
   'correlation-length':
-    'autocorrelation length Sal (ISO 25178-2) of the face towards the laminate, with nesting index and lateral resolution',
-  'area-ratio':
-    'developed area ratio Sdr (ISO 25178-2) of the face towards the laminate, with lateral resolution below a skin depth',
+    'autocorrelation length Sal (ISO 25178-2) of the face, with nesting index and lateral resolution',
+  'area-ratio': 'developed area ratio Sdr (ISO 25178-2) of the face, with lateral resolution below a skin depth',
   nodules: 'radius, pitch and number of layers of the nodules, from a micrograph of face and section',
   lay: 'direction of the texture: isotropic, or grooves across or along the current (texture aspect ratio Str, ISO 25178-2)',
 };
