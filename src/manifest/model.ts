@@ -39,7 +39,7 @@ export interface Link {
   readonly length: number;
 }
 
-/** A series-fed column: along +x, fed at the small-x end, last patch open. */
+/** A series-fed column: along +x, fed at the small-x end, last patch open, unless it says otherwise. */
 export interface ColumnLayout {
   /** Centre line of the column, m; the array is centred on y = 0. */
   readonly y: number;
@@ -49,6 +49,66 @@ export interface ColumnLayout {
   readonly patches: readonly Patch[];
   /** One fewer than patches. */
   readonly links: readonly Link[];
+  /** See `ColumnGeometry` of physics/column for these five. */
+  readonly direction?: 1 | -1;
+  readonly matching?: readonly Link[];
+  readonly inset?: { readonly depth: number; readonly gap: number };
+  readonly termination?: { readonly width: number };
+  readonly sideFeed?: { readonly link: number; readonly side: 1 | -1 };
+  /** Never driven: its feed line ends in the reference impedance. */
+  readonly dummy?: true;
+}
+
+/** Amplitudes asked for along a column. */
+export type Taper =
+  | { readonly kind: 'uniform' }
+  /** Sidelobe level in dB, positive. */
+  | { readonly kind: 'dolph-chebyshev'; readonly sidelobeDb: number }
+  | { readonly kind: 'taylor'; readonly sidelobeDb: number; readonly nBar: number }
+  | { readonly kind: 'given'; readonly amplitudes: readonly number[] };
+
+/** A layout that is not given but worked out: every column alike. Lengths m. */
+export interface SizedFor {
+  readonly frequency: number;
+  readonly patches: number;
+  readonly taper: Taper;
+  /** What the board maker can hold. */
+  readonly leastWidth: number;
+  readonly leastGap: number;
+  readonly grid: number;
+}
+
+/** Outcome of sizing, or why there is none. */
+export type Sized =
+  | {
+      /** Where the dimensions come from: the network alone, or once corrected by the full wave. */
+      readonly by: 'network' | 'full wave';
+      /** Reflection at the frequency asked for, dB, by the network and, where it ran, by the full wave. */
+      readonly networkDb: number;
+      readonly fullWaveDb?: number;
+      readonly notes: readonly string[];
+    }
+  | { readonly reason: string };
+
+/** Two-port between the feed network and the radar's port, as measured or simulated elsewhere. */
+export interface Transition {
+  /** Path relative to the root folder, forward slashes. */
+  readonly file: string;
+  /** Ohm, real; both ports. */
+  readonly referenceImpedance: number;
+  /** Hz, ascending; S as [S11, S21, S12, S22], each re, im. Port 2 faces the antenna. */
+  readonly points: readonly { readonly frequency: number; readonly s: readonly (readonly [number, number])[] }[];
+}
+
+/** A corporate network from one input to all driven columns, drawn on the same laminate and foil. Lengths m. */
+export interface FeedNetwork {
+  readonly divider: 'tee' | 'wilkinson';
+  /** Width of every line that is not a quarter-wave step. */
+  readonly lineWidth: number;
+  /** From the input to the first divider, and from one level to the next. */
+  readonly trunkLength: number;
+  readonly levelLength: number;
+  readonly transition?: Transition;
 }
 
 export interface FeedPath {
@@ -107,8 +167,16 @@ export interface Board {
   /** Asked for by the manifest; done by the study before anything else, which then says so in `retuned`. */
   readonly retune?: 'length';
   readonly retuned?: Retuned;
+  /** Asked for by the manifest in place of dimensions; done by the study before anything else, which says so in `sized`. */
+  readonly sizedFor?: SizedFor;
+  readonly sized?: Sized;
   readonly pitch: number;
   readonly feed: readonly FeedPath[];
+  readonly feedNetwork?: FeedNetwork;
+  /** Columns (from 0) that belong together, such as transmit and receive. */
+  readonly groups?: readonly { readonly id: string; readonly columns: readonly number[] }[];
+  /** Beam directions in azimuth over which active reflection is shown, rad. */
+  readonly scan?: { readonly low: number; readonly high: number };
   /** `line`: reflections are referred to the feed line's own impedance; a number: ohm. */
   readonly referenceImpedance: 'line' | number;
   readonly band: { readonly low: number; readonly high: number };
@@ -183,6 +251,8 @@ export interface Analysis {
   readonly roughnessModel: RoughnessChoice;
   /** Largest frequency step over the band, Hz. */
   readonly frequencyStep: number;
+  /** Whether the full-wave engine confirms every board. Absent means no. */
+  readonly fullWave?: boolean;
 }
 
 export interface InputFile {

@@ -1,8 +1,8 @@
 import type { Board } from '../manifest/model.js';
 import { ZERO } from '../numerics/complex.js';
 import { arrayFigures, incidentWaves } from '../physics/array/index.js';
-import { edgeNetwork } from '../physics/column/index.js';
-import { farFieldPower, guidedWavePower } from '../physics/pattern/index.js';
+import { edgeNetwork, guidedWavePower } from '../physics/column/index.js';
+import { farFieldPower } from '../physics/pattern/index.js';
 import { bandCentre } from './conditions.js';
 import { columnGeometry } from './geometry.js';
 import { nominalValues } from './nominal-values.js';
@@ -24,5 +24,6 @@ export function losslessClosure(board: Board): number {
     faces: { underside: ZERO, top: ZERO, edges: ZERO, ground: ZERO },
   });
   const { excited } = arrayFigures(solution, incidentWaves(board.feed));
-  return (farFieldPower(excited.edges) + guidedWavePower(excited.edges)) / excited.power.accepted;
+  if (!excited.edges) throw new Error('losslessClosure: the edge network gives its edges');
+  return (farFieldPower(excited.field) + guidedWavePower(excited.edges)) / excited.power.accepted;
 }

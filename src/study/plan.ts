@@ -108,6 +108,7 @@ export function assembleStudy(board: Board, analysis: Analysis, results: readonl
     slowWave: slowWave(board),
     faces: faceStates(board),
     losslessClosure: ofColumns === undefined ? losslessClosure(board) : Number.NaN,
+    confirmation: { kind: 'network only', reason: 'not yet' },
   };
 }
 
@@ -123,6 +124,7 @@ const NOTHING = {
   slowWave: [],
   faces: [],
   losslessClosure: Number.NaN,
+  confirmation: { kind: 'network only', reason: 'the board was not evaluated' },
 } as const;
 
 function need(sweeps: ReadonlyMap<string, Sweep>, id: string): Sweep {

@@ -1,5 +1,6 @@
 import type { Board, Figure, QuantityName } from '../manifest/model.js';
 import type { Complex } from '../numerics/complex.js';
+import type { SolverEffort } from '../physics/column/index.js';
 import type { Narrowing, RoughnessModel } from '../physics/roughness/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import type { Dimension } from '../quantity/index.js';
@@ -18,6 +19,8 @@ export interface PowerShares {
   /** Extra over bare copper from plated finish on top and edges. */
   readonly finish: number;
   readonly dielectric: number;
+  /** Into the terminations of travelling-wave columns. */
+  readonly load: number;
 }
 
 export interface CutFigures {
@@ -64,7 +67,52 @@ export interface PointResult {
   /** (far-field power + guided wave) over power into the edges: 1 within 1 % on the lossless network; NaN where not evaluated. */
   readonly farFieldClosure: number;
   readonly cuts: { readonly elevation: Cut; readonly azimuth: Cut };
+  /** Between columns, nominal sweep only: row = leaving, column = driven. */
+  readonly scattering?: readonly (readonly Complex[])[];
 }
+
+/** What one engine says of the board at one frequency: nominal state, nominal temperature, feed's weights, no feed loss. */
+export interface EngineFigures {
+  /** Row = leaving, column = driven; referred to `referenceImpedance`. */
+  readonly scattering: readonly (readonly Complex[])[];
+  readonly referenceImpedance: readonly number[];
+  readonly activeReflection: readonly Complex[];
+  /** Linear. */
+  readonly directivity: number;
+  readonly radiationEfficiency: number;
+  readonly mismatch: number;
+  readonly elevation: CutFigures;
+  readonly azimuth: CutFigures;
+  readonly cuts: { readonly elevation: Cut; readonly azimuth: Cut };
+  /** Fractions of the accepted power; `metal` is strip and ground together. Sum with `powerResidual` to 1. */
+  readonly power: {
+    readonly radiated: number;
+    readonly surfaceWave: number;
+    readonly metal: number;
+    readonly dielectric: number;
+    readonly load: number;
+  };
+  readonly powerResidual: number;
+  /** Longitudinal current of every patch of every column over the largest of the board. */
+  readonly excitation: readonly (readonly Complex[])[];
+}
+
+/** Both engines at one frequency. */
+export interface EngineComparison {
+  readonly frequency: number;
+  readonly fullWave: EngineFigures;
+  readonly network: EngineFigures;
+  readonly effort: SolverEffort;
+}
+
+/** How the fast engine's figures of a board are confirmed. */
+export type Confirmation =
+  | {
+      readonly kind: 'full wave';
+      readonly points: readonly EngineComparison[];
+      readonly flags: readonly ValidityFlag[];
+    }
+  | { readonly kind: 'network only'; readonly reason: string };
 
 /** The feed line (first column's width) at one frequency and temperature: evaluated with cover layers too. */
 export interface LinePoint {
@@ -197,4 +245,5 @@ export interface BoardStudy {
   readonly notEvaluated: readonly { readonly quantities: readonly QuantityName[]; readonly reason: string }[];
   /** Lossless variant of the board at the centre frequency: (far field + guided wave) / power into the edges. */
   readonly losslessClosure: number;
+  readonly confirmation: Confirmation;
 }

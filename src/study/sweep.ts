@@ -2,8 +2,14 @@
 import type { Analysis, Board } from '../manifest/model.js';
 import { abs2 } from '../numerics/complex.js';
 import { arrayFigures, incidentWaves } from '../physics/array/index.js';
-import { type ColumnEngine, type ColumnProblem, edgeNetwork, type PowerBudget } from '../physics/column/index.js';
-import { type CutShape, farFieldPower, guidedWavePower } from '../physics/pattern/index.js';
+import {
+  type ColumnEngine,
+  type ColumnProblem,
+  edgeNetwork,
+  guidedWavePower,
+  type PowerBudget,
+} from '../physics/column/index.js';
+import { type CutShape, farFieldPower } from '../physics/pattern/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import { boardLine, columnLineFlags, feedWidth, linePoint, lossDbPerM } from './board-line.js';
 import { bandCentre, frequencies, temperatures } from './conditions.js';
@@ -128,10 +134,11 @@ function evaluate(
     elevation: cutFigures(figures.elevation),
     azimuth: cutFigures(figures.azimuth),
     powerResidual: figures.powerResidual,
-    farFieldClosure: closure
-      ? (farFieldPower(figures.excited.edges) + guidedWavePower(figures.excited.edges)) /
-        (power.radiated + power.surfaceWave)
-      : Number.NaN,
+    farFieldClosure:
+      closure && figures.excited.edges
+        ? (farFieldPower(figures.excited.field) + guidedWavePower(figures.excited.edges)) /
+          (power.radiated + power.surfaceWave)
+        : Number.NaN,
     cuts: { elevation: cut('elevation', figures.elevation), azimuth: cut('azimuth', figures.azimuth) },
   };
   return { point, found: solution.flags };
@@ -157,5 +164,6 @@ function powerShares(power: PowerBudget, state: Surfaces): PowerShares {
     roughness: faces.reduce((sum, face) => sum + of(face, 'texture'), 0),
     finish: faces.reduce((sum, face) => sum + of(face, 'finish'), 0),
     dielectric: power.dielectric / power.accepted,
+    load: power.load / power.accepted,
   };
 }

@@ -1,12 +1,12 @@
 /**
- * Figures of a driven array: directivity, gain, reflection and cuts from the solved edge voltages.
+ * Figures of a driven array: directivity, gain, reflection and cuts from the solved board, whichever engine solved it.
  *
  * Directivity is the peak power per solid angle over the power radiated (circuit); gain is directivity times the
  * circuit's efficiency: network and far field keep one normalisation, so the two agree within a thousandth.
  */
 import { abs2, type Complex, complex, div, ZERO } from '../../numerics/complex.js';
 import type { ColumnSolution, ExcitedArray } from '../column/index.js';
-import { type CutShape, cutIntensity, cutShape, radiationIntensity } from '../pattern/index.js';
+import { type CutShape, cutShape, intensity } from '../pattern/index.js';
 
 export interface ArrayFigures {
   /** Linear. */
@@ -31,11 +31,18 @@ export function arrayFigures(solution: ColumnSolution, incident: readonly Comple
   const excited = solution.excite(incident);
   const { power } = excited;
   if (!(power.incident > 0)) throw new RangeError('arrayFigures: no column is driven');
-  const elevation = cutShape(cutIntensity(excited.edges, 'elevation'));
-  const azimuth = cutShape(cutIntensity(excited.edges, 'azimuth'));
+  const elevation = cutShape(excited.field.cut('elevation'));
+  const azimuth = cutShape(excited.field.cut('azimuth'));
   const peak = peakIntensity(excited, Math.sin(elevation.beamDirection), Math.sin(azimuth.beamDirection));
   const sinks =
-    power.radiated + power.surfaceWave + power.underside + power.top + power.edges + power.ground + power.dielectric;
+    power.radiated +
+    power.surfaceWave +
+    power.underside +
+    power.top +
+    power.edges +
+    power.ground +
+    power.dielectric +
+    power.load;
   return {
     directivity: (4 * Math.PI * peak) / power.radiated,
     radiationEfficiency: power.radiated / power.accepted,
@@ -51,14 +58,14 @@ export function arrayFigures(solution: ColumnSolution, incident: readonly Comple
 
 /** Maximum over the half space by a shrinking pattern search from the maxima of the principal cuts, to 1e-5 in u and v. */
 function peakIntensity(excited: ExcitedArray, u0: number, v0: number): number {
-  const intensity = radiationIntensity(excited.edges);
+  const power = intensity(excited.field);
   let [u, v] = [u0, v0];
-  let best = intensity(u, v);
+  let best = power(u, v);
   for (const [a, b] of [
     [u0, 0],
     [0, v0],
   ]) {
-    const value = intensity(a, b);
+    const value = power(a, b);
     if (value > best) [best, u, v] = [value, a, b];
   }
   for (let step = 0.02; step > 1e-5; ) {
@@ -69,7 +76,7 @@ function peakIntensity(excited: ExcitedArray, u0: number, v0: number): number {
       [0, step],
       [0, -step],
     ]) {
-      const value = intensity(u + du, v + dv);
+      const value = power(u + du, v + dv);
       if (value > best) {
         [best, u, v] = [value, u + du, v + dv];
         moved = true;

@@ -16,14 +16,30 @@ export interface Slab {
   readonly height: number;
 }
 
+/** A straight piece of metal along the column, m. */
+export interface LineSection {
+  readonly width: number;
+  readonly length: number;
+}
+
 export interface ColumnGeometry {
   /** Near edge of the first patch and centre line, m. */
   readonly x: number;
   readonly y: number;
   readonly feedLineWidth: number;
-  readonly patches: readonly { readonly width: number; readonly length: number }[];
+  readonly patches: readonly LineSection[];
   /** From each patch to the next: one fewer than patches. */
-  readonly links: readonly { readonly width: number; readonly length: number }[];
+  readonly links: readonly LineSection[];
+  /** −1: the column runs from its first patch towards −x, and `x` is the large-x edge of that patch. Default +1. */
+  readonly direction?: 1 | -1;
+  /** Sections between feed line and first patch, from the feed line on (quarter-wave steps). The port is where they begin. */
+  readonly matching?: readonly LineSection[];
+  /** The line enters the first patch between two slots; the port stays at the patch's edge. */
+  readonly inset?: { readonly depth: number; readonly gap: number };
+  /** A line of this width after the last patch that ends without reflection. Absent: open edge. */
+  readonly termination?: { readonly width: number };
+  /** Fed in the middle of link number `link` by a feed line along y that comes from `side`·y; port at the link's edge. */
+  readonly sideFeed?: { readonly link: number; readonly side: 1 | -1 };
 }
 
 export interface ColumnProblem {
@@ -57,6 +73,22 @@ export interface PowerBudget {
   readonly edges: number;
   readonly ground: number;
   readonly dielectric: number;
+  /** Into the terminations of columns that have one. */
+  readonly load: number;
+}
+
+/** Far field of an excited board over the half space above it. */
+export interface FarField {
+  readonly frequency: number;
+  /** Of the sources, m: says how finely directions must be sampled. */
+  readonly extent: { readonly x: number; readonly y: number };
+  /**
+   * r e^{jk0r} E, V peak, at direction cosines u = sin θ cos φ, v = sin θ sin φ (u² + v² < 1).
+   * @param out [Re Eθ, Im Eθ, Re Eφ, Im Eφ]
+   */
+  at(u: number, v: number, out: Float64Array): void;
+  /** Power per solid angle over the signed angle (rad) of a principal cut, W/sr: many angles at little cost. */
+  cut(plane: 'azimuth' | 'elevation'): (angle: number) => number;
 }
 
 /** Radiating edges with their voltages: all that pattern and power need. */
@@ -84,7 +116,26 @@ export interface ExcitedArray {
   readonly power: PowerBudget;
   /** Waves leaving each port, √W peak. */
   readonly reflected: readonly Complex[];
-  readonly edges: ExcitedEdges;
+  readonly field: FarField;
+  /** Of the edge network only, for its power check. */
+  readonly edges?: ExcitedEdges;
+  /** Integral of the longitudinal current over each patch of each column, A m. */
+  readonly patchCurrents: readonly (readonly Complex[])[];
+}
+
+/** What it cost to solve, for print. */
+export interface SolverEffort {
+  readonly unknowns: number;
+  /** Most that any right-hand side took. */
+  readonly iterations: number;
+  /** Relative residual reached. */
+  readonly residual: number;
+  /** m */
+  readonly cellLength: number;
+  readonly cellWidth: number;
+  /** Largest difference of a length and of a width from what the grid can draw, m, before it is trimmed. */
+  readonly misfitLength: number;
+  readonly misfitWidth: number;
 }
 
 export interface ColumnSolution {
@@ -94,6 +145,7 @@ export interface ColumnSolution {
   /** Real reference impedance of each port, ohm. */
   readonly referenceImpedance: readonly number[];
   readonly flags: readonly ValidityFlag[];
+  readonly effort?: SolverEffort;
   /** @param incident wave into each port, √W peak */
   excite(incident: readonly Complex[]): ExcitedArray;
 }

@@ -1,3 +1,4 @@
+export { guidedWavePower } from './edge-power.js';
 export type {
   ColumnConditions,
   ColumnEngine,
@@ -6,9 +7,12 @@ export type {
   ColumnSolution,
   ExcitedArray,
   ExcitedEdges,
+  FarField,
+  LineSection,
   PowerBudget,
   RadiatingEdge,
   Slab,
+  SolverEffort,
 } from './engine.js';
 export { edgeNetwork } from './network.js';
 export { NETWORK_CONSTANTS } from './network-constants.js';

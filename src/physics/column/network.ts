@@ -19,6 +19,7 @@ import {
 } from '../line/index.js';
 import type { ValidityFlag } from '../validity.js';
 import { addTo, type EdgeAdmittance, edgeAdmittance, edgePlan, planReach, quadraticForm } from './edge-admittance.js';
+import { edgeField } from './edge-field.js';
 import type {
   ColumnConditions,
   ColumnEngine,
@@ -44,6 +45,8 @@ interface Section {
   readonly to: number;
   readonly line: MicrostripLine;
   readonly length: number;
+  /** Set where the section is a patch: its column. */
+  readonly column?: number;
   readonly reactanceFrom: number;
   readonly y11: Complex;
   readonly y12: Complex;
@@ -118,7 +121,7 @@ export function edgeNetwork(problem: ColumnProblem, maximumFrequency: number): C
       column.patches.forEach((patch, p) => {
         const node = base + 2 * p;
         const line = lines(patch.width);
-        sections.push(section(node, node + 1, line, patch.length, 0, 0));
+        sections.push({ ...section(node, node + 1, line, patch.length, 0, 0), column: c });
         const wide = geometryOf(slab, stripThickness, patch.width);
         const openEnd = openEndExtension({ ...wide, thickness: 0 }, frequency);
         const thick = thicknessEndExtension(wide);
@@ -172,6 +175,7 @@ export function edgeNetwork(problem: ColumnProblem, maximumFrequency: number): C
       if (incident.length !== ports.length)
         throw new RangeError(`excite: ${incident.length} waves for ${ports.length} columns`);
       const { re, im } = voltages(incident);
+      const excited = { frequency, slab, edges, re, im };
       const at = (node: number): Complex => complex(re[node], im[node]);
       const reflected = ports.map((port, c) =>
         sub(incident[c], scale(portCurrent(port, incident[c], at(port.node)), Math.sqrt(port.reference))),
@@ -179,7 +183,9 @@ export function edgeNetwork(problem: ColumnProblem, maximumFrequency: number): C
       return {
         reflected,
         power: powerBudget(sections, admittance, re, im, incident, reflected),
-        edges: { frequency, slab, edges, re, im },
+        field: edgeField(excited),
+        edges: excited,
+        patchCurrents: patchCurrents(sections, re, im),
       };
     }
 
@@ -278,5 +284,24 @@ function powerBudget(
   const surfaceWave = quadraticForm(admittance.guided, admittance.n, re, im);
   const sum = (waves: readonly Complex[]): number => waves.reduce((p, wave) => p + abs2(wave), 0) / 2;
   const power = sum(incident);
-  return { incident: power, accepted: power - sum(reflected), radiated: total - surfaceWave, surfaceWave, ...loss };
+  return {
+    incident: power,
+    accepted: power - sum(reflected),
+    radiated: total - surfaceWave,
+    surfaceWave,
+    ...loss,
+    load: 0,
+  };
+}
+
+/** ∫ I dx of each patch, A m: (V1 − V2 − …)/Z' per length, from the telegrapher's equation −dV/dx = Z' I. */
+function patchCurrents(sections: readonly Section[], re: Float64Array, im: Float64Array): Complex[][] {
+  const found: Complex[][] = [];
+  for (const { column, from, to, line } of sections) {
+    if (column === undefined) continue;
+    while (found.length <= column) found.push([]);
+    const drop = complex(re[from] - re[to], im[from] - im[to]);
+    found[column].push(div(drop, mul(line.gamma, line.characteristic)));
+  }
+  return found;
 }

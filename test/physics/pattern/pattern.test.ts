@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { edgeField } from '../../../src/physics/column/edge-field.js';
 import type { ExcitedEdges } from '../../../src/physics/column/index.js';
-import { cutIntensity, cutShape, radiationIntensity } from '../../../src/physics/pattern/index.js';
+import { cutShape, intensity } from '../../../src/physics/pattern/index.js';
 
 const edges: ExcitedEdges = {
   frequency: 77e9,
@@ -26,8 +27,8 @@ const edges: ExcitedEdges = {
 
 describe('pattern of edges', () => {
   it('is one function seen in two cuts', () => {
-    const whole = radiationIntensity(edges);
-    const [el, az] = [cutIntensity(edges, 'elevation'), cutIntensity(edges, 'azimuth')];
+    const whole = intensity(edgeField(edges));
+    const [el, az] = [edgeField(edges).cut('elevation'), edgeField(edges).cut('azimuth')];
     for (const angle of [-1.2, -0.4, 0, 0.3, 1.1]) {
       expect(el(angle)).toBeCloseTo(whole(Math.sin(angle), 0), 12);
       expect(az(angle)).toBeCloseTo(whole(0, Math.sin(angle)), 12);
@@ -35,7 +36,7 @@ describe('pattern of edges', () => {
   });
 
   it('vanishes at the horizon and beyond', () => {
-    const whole = radiationIntensity(edges);
+    const whole = intensity(edgeField(edges));
     expect(whole(1, 0)).toBe(0);
     expect(whole(0.8, 0.7)).toBe(0);
   });
@@ -48,8 +49,8 @@ describe('pattern of edges', () => {
       re: Float64Array.from([0, 1, 2, 3], (i) => Math.cos(-i * phase)),
       im: Float64Array.from([0, 1, 2, 3], (i) => Math.sin(-i * phase)),
     });
-    expect(cutShape(cutIntensity(lag(0.5), 'elevation')).beamDirection).toBeGreaterThan(0.05);
-    expect(cutShape(cutIntensity(lag(-0.5), 'elevation')).beamDirection).toBeLessThan(-0.05);
+    expect(cutShape(edgeField(lag(0.5)).cut('elevation')).beamDirection).toBeGreaterThan(0.05);
+    expect(cutShape(edgeField(lag(-0.5)).cut('elevation')).beamDirection).toBeLessThan(-0.05);
   });
 });
 

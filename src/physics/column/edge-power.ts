@@ -1,12 +1,6 @@
-/**
- * Power of the excited edges found again from their fields, as a check on the circuit: the space wave by integrating
- * the far field over the half space, the guided wave from the spectrum at the TM0 pole.
- */
-import { gaussLegendre } from '../../numerics/gauss-legendre.js';
-import type { ExcitedEdges } from '../column/engine.js';
-import { slabSpectrum } from '../column/slab-spectrum.js';
-import { SPEED_OF_LIGHT } from '../constants.js';
-import { radiationIntensity } from './edge-pattern.js';
+/** Power of the excited edges in the guided wave of the slab, from the spectrum at the TM0 pole: a check on the circuit. */
+import type { ExcitedEdges } from './engine.js';
+import { slabSpectrum } from './slab-spectrum.js';
 
 /** Largest extent of the edges, m: sets how finely the sphere must be sampled. */
 function extent(excited: ExcitedEdges): number {
@@ -14,26 +8,6 @@ function extent(excited: ExcitedEdges): number {
   const ys = excited.edges.map((e) => e.y);
   const width = Math.max(...excited.edges.flatMap((e) => e.pulses.map((p) => p.width)));
   return Math.hypot(Math.max(...xs) - Math.min(...xs), Math.max(...ys) - Math.min(...ys) + width);
-}
-
-/** ∫ U dΩ over z > 0, W; Gauss–Legendre in θ, equal steps in φ (exact for the band-limited field). */
-export function farFieldPower(excited: ExcitedEdges): number {
-  const k0 = (2 * Math.PI * excited.frequency) / SPEED_OF_LIGHT;
-  const bandwidth = Math.ceil(k0 * extent(excited));
-  const intensity = radiationIntensity(excited);
-  const rule = gaussLegendre(24 + Math.ceil(bandwidth / 2));
-  const steps = 4 * Math.ceil((16 + 2 * bandwidth) / 4);
-  let power = 0;
-  for (let i = 0; i < rule.nodes.length; i++) {
-    const theta = (Math.PI / 4) * (rule.nodes[i] + 1);
-    let ring = 0;
-    for (let p = 0; p < steps; p++) {
-      const phi = (2 * Math.PI * (p + 0.5)) / steps;
-      ring += intensity(Math.sin(theta) * Math.cos(phi), Math.sin(theta) * Math.sin(phi));
-    }
-    power += (Math.PI / 4) * rule.weights[i] * Math.sin(theta) * ring * ((2 * Math.PI) / steps);
-  }
-  return power;
 }
 
 /** Power in the TM0 wave of the slab, W: (ω R/16π) ∫ |M_φ(kp, φ)|² dφ with R the residue of F at the pole. */

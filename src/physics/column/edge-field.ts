@@ -8,11 +8,8 @@
  * Azimuth cut: φ = 90° (H plane, y–z), θ > 0 towards +y. Co-polarisation along x (Ludwig 1973, third definition).
  */
 
-import type { ExcitedEdges, RadiatingEdge } from '../column/engine.js';
 import { ETA0, SPEED_OF_LIGHT } from '../constants.js';
-
-/** Power per solid angle, W/sr, in direction cosines. */
-export type Intensity = (u: number, v: number) => number;
+import type { ExcitedEdges, FarField, RadiatingEdge } from './engine.js';
 
 /** Strength of an edge's spectrum across, V m per volt: Σ density · width · sinc(k0 v width/2). */
 function acrossFactor(edge: RadiatingEdge, k0v: number): number {
@@ -24,17 +21,18 @@ function acrossFactor(edge: RadiatingEdge, k0v: number): number {
   return sum;
 }
 
-/** |TM transfer|² and |TE transfer|² of the lossless slab at sin² θ. */
-function slabTransfer(excited: ExcitedEdges, sin2: number): { tm: number; te: number } {
+/** TM and TE transfer of the lossless slab at sin² θ: [Re TM, Im TM, Re TE, Im TE]. */
+function slabTransfer(excited: ExcitedEdges, sin2: number): readonly [number, number, number, number] {
   const k0 = (2 * Math.PI * excited.frequency) / SPEED_OF_LIGHT;
   const er = excited.slab.permittivity;
   const kz = Math.sqrt(Math.max(0, 1 - sin2));
   const k1z = Math.sqrt(er - sin2);
   const c = Math.cos(k0 * k1z * excited.slab.height);
   const s = Math.sin(k0 * k1z * excited.slab.height);
-  // Both vanish at grazing for TM (kz → 0) and stay finite for TE, where cos² θ takes the field to zero.
-  const tm = kz === 0 ? 0 : 1 / (c * c + ((k1z * s) / (er * kz)) ** 2);
-  return { tm, te: 1 / (c * c + ((kz * s) / k1z) ** 2) };
+  const over = (x: number): readonly [number, number] => [c / (c * c + x * x), -x / (c * c + x * x)];
+  // Both vanish at grazing for TM (kz → 0) and stay finite for TE, where cos θ takes the field to zero.
+  const tm = kz === 0 ? ([0, 0] as const) : over((k1z * s) / (er * kz));
+  return [...tm, ...over((kz * s) / k1z)] as const;
 }
 
 /** Spectrum of the magnetic current, V m: out = [re, im] at wavenumbers (kx, ky). */
@@ -57,24 +55,50 @@ function intensityOf(excited: ExcitedEdges, squared: number, u: number, v: numbe
   const sin2 = u * u + v * v;
   if (sin2 >= 1) return 0;
   const k0 = (2 * Math.PI * excited.frequency) / SPEED_OF_LIGHT;
-  const { tm, te } = slabTransfer(excited, sin2);
+  const [tmRe, tmIm, teRe, teIm] = slabTransfer(excited, sin2);
+  const [tm, te] = [tmRe * tmRe + tmIm * tmIm, teRe * teRe + teIm * teIm];
   const cos2Phi = sin2 === 0 ? 1 : (u * u) / sin2;
   const polar = cos2Phi * tm + (1 - sin2) * (1 - cos2Phi) * te;
   return ((k0 * k0) / (8 * Math.PI * Math.PI * ETA0)) * squared * polar;
 }
 
-export function radiationIntensity(excited: ExcitedEdges): Intensity {
+/**
+ * r e^{jk0r} E, V, of magnetic currents along y with the spectrum f on a conducting plane (image included), each part
+ * times its transfer of the slab: Eθ = −(jk0/2π) f cos φ TM, Eφ = (jk0/2π) f sin φ cos θ TE (Balanis, Antenna Theory,
+ * ch. 12; from memory).
+ */
+export function edgeField(excited: ExcitedEdges): FarField {
   const k0 = (2 * Math.PI * excited.frequency) / SPEED_OF_LIGHT;
-  const out = new Float64Array(2);
-  return (u, v) => {
-    if (u * u + v * v >= 1) return 0;
-    spectrum(excited, k0 * u, k0 * v, out);
-    return intensityOf(excited, out[0] * out[0] + out[1] * out[1], u, v);
+  const spectral = new Float64Array(2);
+  const xs = excited.edges.map((e) => e.x);
+  const lows = excited.edges.flatMap((e) => e.pulses.map((p) => e.y - p.width / 2));
+  const highs = excited.edges.flatMap((e) => e.pulses.map((p) => e.y + p.width / 2));
+  return {
+    frequency: excited.frequency,
+    extent: { x: Math.max(...xs) - Math.min(...xs), y: Math.max(...highs) - Math.min(...lows) },
+    at(u, v, out) {
+      const sin2 = u * u + v * v;
+      out.fill(0);
+      if (sin2 >= 1) return;
+      spectrum(excited, k0 * u, k0 * v, spectral);
+      const [tmRe, tmIm, teRe, teIm] = slabTransfer(excited, sin2);
+      const sine = Math.sqrt(sin2);
+      const [cosPhi, sinPhi] = sine === 0 ? [1, 0] : [u / sine, v / sine];
+      // −j·f = (f.im, −f.re); times k0/2π.
+      const k = k0 / (2 * Math.PI);
+      const [re, im] = [k * spectral[1], -k * spectral[0]];
+      out[0] = cosPhi * (re * tmRe - im * tmIm);
+      out[1] = cosPhi * (re * tmIm + im * tmRe);
+      const across = -sinPhi * Math.sqrt(1 - sin2);
+      out[2] = across * (re * teRe - im * teIm);
+      out[3] = across * (re * teIm + im * teRe);
+    },
+    cut: (plane) => cutIntensity(excited, plane),
   };
 }
 
 /** Intensity in a principal cut as a function of the signed angle in rad; edges at one place are gathered first. */
-export function cutIntensity(excited: ExcitedEdges, plane: 'azimuth' | 'elevation'): (angle: number) => number {
+function cutIntensity(excited: ExcitedEdges, plane: 'azimuth' | 'elevation'): (angle: number) => number {
   const k0 = (2 * Math.PI * excited.frequency) / SPEED_OF_LIGHT;
   const along = plane === 'elevation';
   // In elevation every pulse counts with its whole width; in azimuth pulses of one column and width share a factor.
