@@ -1,5 +1,6 @@
-import type { ArrayDrawing, DrawingData, StackUpDrawing, ToothDrawing } from '../dossier/document.js';
+import type { ArrayDrawing, DrawingData, MatrixDrawing, StackUpDrawing, ToothDrawing } from '../dossier/document.js';
 import { arrayShapes } from './array.js';
+import { matrixShapes } from './matrix.js';
 import type { Drawing } from './shapes.js';
 import { stackUpShapes } from './stack-up.js';
 import { theme as quiet, type Theme } from './theme.js';
@@ -35,6 +36,14 @@ export function drawTooth(
   return toothShapes(data, theme, words.title, words.desc);
 }
 
+export function drawMatrix(
+  data: MatrixDrawing,
+  words: Words = { title: 'Matrix', desc: `${data.rowTitle}; ${data.columnTitle}` },
+  theme: Theme = quiet,
+): Drawing {
+  return matrixShapes(data, theme, words.title, words.desc);
+}
+
 export function drawing(data: DrawingData, words?: Words, theme: Theme = quiet): Drawing {
   switch (data.drawing) {
     case 'stack-up':
@@ -43,5 +52,7 @@ export function drawing(data: DrawingData, words?: Words, theme: Theme = quiet):
       return drawArray(data, words, theme);
     case 'tooth':
       return drawTooth(data, words, theme);
+    case 'matrix':
+      return drawMatrix(data, words, theme);
   }
 }

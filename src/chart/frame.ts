@@ -1,4 +1,5 @@
 import type { TopLevelSpec } from 'vega-lite';
+import type { PointSymbol } from '../dossier/document.js';
 import { textWidth } from './font.js';
 import { type Box, type FlagLabel, shorten, spread, stackFlags } from './labels.js';
 import { decimalsOf, linearTicks, logTicks, makeScale, type Scale } from './scale.js';
@@ -20,6 +21,8 @@ export interface EndLabel {
   readonly style?: LineStyle;
   /** Ground of a band instead of a line. */
   readonly fill?: string;
+  /** Symbol instead of a line, in the colour of the style. */
+  readonly symbol?: PointSymbol;
   readonly bold?: boolean;
 }
 
@@ -160,6 +163,34 @@ export function polylines(pieces: readonly (readonly (readonly [number, number])
   };
 }
 
+const symbolShapes: Readonly<Record<PointSymbol, { readonly shape: string; readonly filled: boolean }>> = {
+  disc: { shape: 'circle', filled: true },
+  square: { shape: 'square', filled: false },
+  diamond: { shape: 'diamond', filled: false },
+};
+
+/** Single values on the axes of the frame, on paper so that a curve behind does not fill an open symbol. */
+export function symbols(
+  points: readonly (readonly [number, number])[],
+  symbol: PointSymbol,
+  style: LineStyle,
+  theme: Theme,
+): Layer {
+  const { shape, filled } = symbolShapes[symbol];
+  return {
+    data: { values: points.map(([x, y]) => ({ x, y })) },
+    mark: {
+      type: 'point',
+      shape,
+      size: 46,
+      fill: filled ? style.color : theme.figure.paper,
+      stroke: style.color,
+      strokeWidth: 1.6,
+      opacity: 1,
+    },
+  };
+}
+
 /** Labels in the right margin, each behind a stroke in the style of its line that starts where the line ends. */
 export function endLabels(frame: Frame, labels: readonly EndLabel[]): Layer[] {
   const size = frame.theme.chartFontSize;
@@ -182,7 +213,10 @@ export function endLabels(frame: Frame, labels: readonly EndLabel[]): Layer[] {
     const y = placed[i];
     const from = edge + 8;
     const to = edge + 8 + sampleWidth;
-    if (label.style !== undefined) layers.push(strokes(frame, [[from, y, to, y]], label.style));
+    if (label.symbol !== undefined && label.style !== undefined) {
+      const at = toData(frame, (from + to) / 2, y);
+      layers.push(symbols([[at.x, at.y]], label.symbol, label.style, frame.theme));
+    } else if (label.style !== undefined) layers.push(strokes(frame, [[from, y, to, y]], label.style));
     if (label.fill !== undefined)
       layers.push(strokes(frame, [[from, y, to, y]], { color: label.fill, dash: [], width: 9 }));
     const text = shorten(label.text, size, longestLabel);

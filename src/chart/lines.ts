@@ -13,6 +13,7 @@ import {
   makeFrame,
   polylines,
   strokes,
+  symbols,
   texts,
   toPixels,
   type VegaLiteSpec,
@@ -61,8 +62,13 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
       at: last === undefined ? frame.height : frame.y.toPixel(last[1]),
       style: stuck.length > 0 && plain.length === 0 ? dotted : style,
       bold: series.emphasis === true,
+      ...(series.symbol === undefined ? {} : { symbol: series.symbol }),
     });
     for (const piece of [...plain, ...stuck]) pixels.push(...alongLine(toPixels(frame, piece)));
+    if (series.symbol !== undefined) {
+      const shown = series.points.filter(([x, y]) => within(x, xDomain) && within(y, yDomain));
+      return { layers: [symbols(shown, series.symbol, style, theme)], emphasis: true };
+    }
     return {
       layers: [
         ...(plain.length === 0 && stuck.length > 0 ? [] : [polylines(plain, style)]),
@@ -117,6 +123,8 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
     { x: xStep, y: yStep },
   );
 }
+
+const within = (value: number, [low, high]: readonly [number, number]): boolean => value >= low && value <= high;
 
 /** The part of a curve whose model still tells something, and the part from its ceiling on. */
 function splitCurve(

@@ -24,14 +24,15 @@ import {
 } from '../publish/index.js';
 import { renderPack } from '../render/html/index.js';
 import { renderPdf } from '../render/pdf/index.js';
-import { assembleStudy, type BoardStudy, planBoard, type TaskResult } from '../study/index.js';
 import { type BoardVerdict, judgePack } from '../verdict/index.js';
 import { Fault } from './errors.js';
 import { findPrevious } from './previous.js';
 import type { Progress } from './progress.js';
 import { renderTop } from './render-top.js';
 import { resultsAttachment } from './results-attachment.js';
-import { boardsToRetune, retunePack, type StudyJob } from './study-job.js';
+import { studyFurther } from './study-further.js';
+import { boardsToReady, readyPack } from './study-job.js';
+import { confirmBoards, type Room, studyBoards } from './study-pack.js';
 import { studyProcurement } from './study-procurement.js';
 import { supplierFiles } from './supplier-files.js';
 import type { Workers } from './workers.js';
@@ -42,6 +43,8 @@ export interface BuildOptions {
   readonly programVersion: string;
   /** Builds the copy for this audience of the pack instead, as a pack of its own. */
   readonly audience?: string;
+  /** Leaves out the second round of the full wave, at the frequencies that verdicts hang on. */
+  readonly quick?: boolean;
 }
 
 /** All that a build touches of the world. */
@@ -86,11 +89,15 @@ export async function buildPack(options: BuildOptions, effects: BuildEffects): P
     output = effects.openOutput();
     const found = findPrevious(shown.pack, effects.files, output);
     if ('problem' in found) return { kind: 'bad input', problems: [found.problem] };
-    const pack = await readyPack(shown.pack, effects, enter);
-    const studies = await studyPack(pack, effects, enter);
+    const room = { ...effects, enter };
+    const pack = await workedOut(shown.pack, room);
+    const { boards, analysis, requirements } = pack;
+    const confirmations = await confirmBoards(boards, analysis, room);
+    const first = await studyBoards(boards, analysis, confirmations, 'calculating', room);
     enter('judging the boards');
-    const verdicts = judgePack(studies, pack.requirements);
-    const procurement = await studyProcurement(pack, studies, verdicts, effects, enter);
+    const studies = options.quick ? first : await studyFurther(first, requirements, analysis, room);
+    const verdicts = judgePack(studies, requirements);
+    const procurement = await studyProcurement(pack, studies, verdicts, room);
     enter('checking the engine against published values');
     const evidence = runChecks(allChecks);
     const accuracy = accuracyTable();
@@ -125,29 +132,11 @@ function shownPack(
   return 'hide' in found ? { pack: packFor(pack, found) } : { problem: found };
 }
 
-/** Boards that ask for it get their retuned layout here, once: all that follows speaks of the same copper. */
-async function readyPack(pack: Pack, { workers, progress }: BuildEffects, enter: Enter): Promise<Pack> {
-  const total = boardsToRetune(pack).length;
-  if (total > 0) enter('retuning layouts', total);
-  return retunePack(pack, workers, () => progress.step());
-}
-
-async function studyPack(pack: Pack, { workers, progress }: BuildEffects, enter: Enter): Promise<BoardStudy[]> {
-  const { analysis } = pack;
-  const plans = pack.boards.map((board) =>
-    planBoard(board, analysis).map((task): StudyJob => ({ board, analysis, task })),
-  );
-  const jobs = plans.flat();
-  enter('calculating', jobs.length);
-  const results = await workers.run<TaskResult>(jobs, () => progress.step());
-  const resultOf = new Map(jobs.map((job, i) => [job, results[i]]));
-  return plans.map((plan, i) =>
-    assembleStudy(
-      pack.boards[i],
-      analysis,
-      plan.map((job) => resultOf.get(job)!),
-    ),
-  );
+/** Boards that ask for it get their layout here, once: all that follows speaks of the same copper. */
+async function workedOut(pack: Pack, { workers, progress, enter }: Room): Promise<Pack> {
+  const total = boardsToReady(pack).length;
+  if (total > 0) enter('working out layouts', total);
+  return readyPack(pack, workers, () => progress.step());
 }
 
 async function drawPack(parts: PackInput, effects: BuildEffects, enter: Enter): Promise<Files> {

@@ -63,7 +63,9 @@ export async function preview(
           progress: io.terminal ? terminalProgress(io.terminal) : noProgress,
           workers: studyWorkers(),
         };
-        const next = await attempt(() => buildPack({ packPath, programVersion, audience: command.audience }, effects));
+        const next = await attempt(() =>
+          buildPack({ packPath, programVersion, audience: command.audience, quick: true }, effects),
+        );
         tell(typeof next === 'string' ? failedState(state, next) : goodState(state, next));
         if (state.failed) io.err(state.problems);
         io.out(state.standing);

@@ -1,6 +1,6 @@
 import { askedItems } from '../manifest/index.js';
-import type { Board, Pack } from '../manifest/model.js';
-import { assembleStudy, type BoardStudy, planBoard, type TaskResult } from '../study/index.js';
+import type { Analysis, Board, Pack } from '../manifest/model.js';
+import { type BoardStudy, type Confirmation, correctionIn, fullWaveObstacle } from '../study/index.js';
 import {
   type AllowanceResult,
   type BoardVerdict,
@@ -9,24 +9,29 @@ import {
   type ProcurementResults,
   planAllowances,
 } from '../verdict/index.js';
-import type { Progress } from './progress.js';
-import type { AllowanceJob, StudyJob } from './study-job.js';
-import type { Workers } from './workers.js';
+import type { AllowanceJob } from './study-job.js';
+import { type Room, studyBoards } from './study-pack.js';
 
 /** What is calculated for suppliers once the boards are judged; undefined where the pack asks nothing of any. */
 export async function studyProcurement(
   pack: Pack,
   studies: readonly BoardStudy[],
   verdicts: readonly BoardVerdict[],
-  { workers, progress }: { readonly workers: Workers; readonly progress: Progress },
-  enter: (stage: string, total?: number) => void,
+  room: Room,
 ): Promise<ProcurementResults | undefined> {
   const { procurement, analysis, requirements } = pack;
+  const { workers, progress, enter } = room;
   if (!procurement) return undefined;
   const items = procurement.recipients.flatMap((recipient) => askedItems(recipient, pack.boards, procurement));
   const searches = studies.flatMap((study, i) =>
     planAllowances(study, verdicts[i], requirements, items).map(
-      (allowance): AllowanceJob => ({ board: study.board, analysis, allowance }),
+      (allowance): AllowanceJob => ({
+        kind: 'allowance',
+        board: study.board,
+        analysis,
+        allowance,
+        correction: correctionIn(study.confirmation),
+      }),
     ),
   );
   enter('searching allowances', searches.length);
@@ -37,24 +42,12 @@ export async function studyProcurement(
   });
 
   const offers = procurement.recipients.map((recipient) => ({ recipient, boards: boardsOnOffer(pack, recipient) }));
-  const plans = offers.flatMap(({ boards }) =>
-    boards.map((board) => ({
-      board,
-      jobs: planBoard(board, analysis).map((task): StudyJob => ({ board, analysis, task })),
-    })),
-  );
-  const jobs = plans.flatMap((plan) => plan.jobs);
-  if (jobs.length > 0) enter('judging the boards on what was offered', jobs.length);
-  const results = jobs.length === 0 ? [] : await workers.run<TaskResult>(jobs, () => progress.step());
-  const resultOf = new Map(jobs.map((job, i) => [job, results[i]]));
+  const boards = offers.flatMap((offer) => offer.boards);
   const after = new Map<Board, BoardVerdict>();
-  for (const { board, jobs: own } of plans) {
-    const study = assembleStudy(
-      board,
-      analysis,
-      own.map((job) => resultOf.get(job)!),
-    );
-    after.set(board, judgeBoard(study, requirements));
+  if (boards.length > 0) {
+    const confirmations = boards.map((board) => carriedOver(board, analysis, studies));
+    const found = await studyBoards(boards, analysis, confirmations, 'judging the boards on what was offered', room);
+    for (const study of found) after.set(study.board, judgeBoard(study, requirements));
   }
   return {
     allowances,
@@ -72,4 +65,15 @@ export async function studyProcurement(
           ],
     ),
   };
+}
+
+/** What is offered moves materials by little: the full wave of the board as drawn is carried to it, and not run again. */
+function carriedOver(board: Board, analysis: Analysis, studies: readonly BoardStudy[]): Confirmation {
+  const reason = fullWaveObstacle(board, analysis);
+  if (reason !== undefined) return { kind: 'network only', reason };
+  const drawn = studies.find((study) => study.board.id === board.id)?.confirmation;
+  if (drawn === undefined) throw new Error(`studyProcurement: no study of board ${board.id}`);
+  return drawn.kind === 'full wave'
+    ? { ...drawn, carriedFrom: 'the board with what was assumed before the offer' }
+    : drawn;
 }

@@ -3,6 +3,7 @@ import { cell, chapter, facts, figureBlock, number, prose, table } from './block
 import { type BoardContext, bandPoints } from './context.js';
 import type { Chapter } from './document.js';
 import { gainBudget } from './gain-budget.js';
+import { engineTag } from './network-only.js';
 import { celsius, GAP, gigahertz } from './values.js';
 
 export const NO_RESULTS = 'Not evaluated for this board; the reason stands under Verdict.';
@@ -15,7 +16,7 @@ export function budgetChapter(context: BoardContext): Chapter {
   if (points === undefined) return chapter('budget', 'Gain budget', prose(NO_RESULTS));
   const { centre } = points;
   const { directivity, steps, realizedGain } = gainBudget(centre);
-  const place = `${gigahertz(centre.frequency)}, ${celsius(centre.temperatureC)}`;
+  const place = `${gigahertz(centre.frequency)}, ${celsius(centre.temperatureC)}${engineTag(context.study)}`;
   const largest = steps.reduce((a, b) => (b.change < a.change ? b : a));
   const gain = steps[steps.length - 2].level;
   return chapter(

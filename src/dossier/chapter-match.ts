@@ -5,12 +5,19 @@ import { cell, chapter, figureBlock, number, prose, table } from './blocks.js';
 import { referenceText } from './chapter-board.js';
 import { NO_RESULTS } from './chapter-budget.js';
 import type { BoardContext } from './context.js';
-import type { Block, Cell, Chapter } from './document.js';
+import type { Block, Cell, Chapter, LinesChart } from './document.js';
+import { COMPARED_FIGURES } from './engine-figures.js';
+import { engineTag } from './network-only.js';
 import { celsius, gigahertz, limitText, rounded, valueText } from './values.js';
 
 const KINDS = [
-  { quantity: 'reflection', id: 'match-passive', name: 'Passive reflection, worst column' },
-  { quantity: 'active_reflection', id: 'match-active', name: 'Active reflection, worst driven column' },
+  { quantity: 'reflection', id: 'match-passive', engine: 'reflection', name: 'Passive reflection, worst column' },
+  {
+    quantity: 'active_reflection',
+    id: 'match-active',
+    engine: 'active-reflection',
+    name: 'Active reflection, worst driven column',
+  },
 ] as const;
 
 interface Sample {
@@ -34,6 +41,45 @@ function byTemperature(found: readonly Sample[]): readonly (readonly [number, re
 
 const worstOf = (found: readonly Sample[]): Sample => found.reduce((a, b) => (b.db > a.db ? b : a));
 
+interface ComparedLevel {
+  readonly frequency: number;
+  readonly fullWave: number;
+  readonly network: number;
+}
+
+/** What both engines say at the compared frequencies, dB; nothing where the network stands alone. */
+function comparedLevels(
+  { board, study }: BoardContext,
+  id: (typeof KINDS)[number]['engine'],
+): readonly ComparedLevel[] {
+  const figure = COMPARED_FIGURES.find((entry) => entry.id === id);
+  if (study.confirmation.kind === 'network only' || figure === undefined) return [];
+  return study.confirmation.points
+    .map(({ frequency, fullWave, network }) => ({
+      frequency,
+      fullWave: figure.of(fullWave, board),
+      network: figure.of(network, board),
+    }))
+    .filter(({ fullWave, network }) => Number.isFinite(fullWave) && Number.isFinite(network));
+}
+
+function engineSeries(compared: readonly ComparedLevel[]): LinesChart['series'] {
+  if (compared.length === 0) return [];
+  const points = (of: (level: ComparedLevel) => number) =>
+    compared.map((level) => [rounded(level.frequency / 1e9, 4), rounded(of(level), 3)] as const);
+  return [
+    { label: 'Full wave', symbol: 'disc', points: points(({ fullWave }) => fullWave) },
+    { label: 'Network before correction', symbol: 'square', points: points(({ network }) => network) },
+  ];
+}
+
+function engineReading(compared: readonly ComparedLevel[], unit: string): string {
+  if (compared.length === 0) return '';
+  const off = ({ fullWave, network }: ComparedLevel) => Math.abs(fullWave - network);
+  const most = compared.reduce((a, b) => (off(b) > off(a) ? b : a));
+  return `; the engines differ most at ${gigahertz(most.frequency)}: ${valueText(most.fullWave, unit)} by the full wave, ${valueText(most.network, unit)} by the network before correction`;
+}
+
 function matchFigure(context: BoardContext, kind: (typeof KINDS)[number]): Block {
   const found = samples(context, kind.quantity);
   const unit = quantityOf(kind.quantity).unit;
@@ -49,20 +95,24 @@ function matchFigure(context: BoardContext, kind: (typeof KINDS)[number]): Block
     }));
   if (found.length === 0) return prose(`${kind.name}: no value at any point.`);
   const worst = worstOf(found);
+  const compared = comparedLevels(context, kind.engine);
   return figureBlock({
     id: kind.id,
-    title: `${kind.name}, over frequency at each temperature`,
-    reading: `The largest value is ${valueText(worst.db, unit)} at ${gigahertz(worst.point.frequency)} and ${celsius(worst.point.temperatureC)}.`,
-    alt: `Reflection in dB over frequency, one line per temperature${limits.length === 0 ? '; no requirement limits it' : `; limit lines ${limits.map((l) => l.label).join(', ')}`}.`,
+    title: `${kind.name}, over frequency at each temperature${engineTag(context.study)}`,
+    reading: `The largest value is ${valueText(worst.db, unit)} at ${gigahertz(worst.point.frequency)} and ${celsius(worst.point.temperatureC)}${engineReading(compared, unit)}.`,
+    alt: `Reflection in dB over frequency, one line per temperature${compared.length === 0 ? '' : '; single values of the full wave and of the network before correction as symbols'}${limits.length === 0 ? '; no requirement limits it' : `; limit lines ${limits.map((l) => l.label).join(', ')}`}.`,
     content: {
       chart: 'lines',
       xTitle: 'Frequency (GHz)',
       yTitle: 'Reflection (dB)',
-      series: byTemperature(found).map(([temperature, group]) => ({
-        label: celsius(temperature),
-        ...(temperature === context.board.temperature.nominalC ? { emphasis: true } : {}),
-        points: group.map((s) => [rounded(s.point.frequency / 1e9, 4), rounded(s.db, 3)] as const),
-      })),
+      series: [
+        ...byTemperature(found).map(([temperature, group]) => ({
+          label: celsius(temperature),
+          ...(temperature === context.board.temperature.nominalC ? { emphasis: true } : {}),
+          points: group.map((s) => [rounded(s.point.frequency / 1e9, 4), rounded(s.db, 3)] as const),
+        })),
+        ...engineSeries(compared),
+      ],
       limits,
     },
   });
@@ -95,7 +145,7 @@ export function matchChapter(context: BoardContext): Chapter {
     ...KINDS.map((kind) => matchFigure(context, kind)),
     table(
       'match-table',
-      'Reflection at the band edges, the band centre and where it is largest',
+      `Reflection at the band edges, the band centre and where it is largest${engineTag(context.study)}`,
       ['Reflection|2', '#Temperature', '#Lower edge', '#Centre', '#Upper edge', '#Largest', '#At'],
       matchRows(context),
     ),

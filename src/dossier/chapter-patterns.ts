@@ -5,10 +5,11 @@ import { cell, chapter, figureBlock, number, prose, table } from './blocks.js';
 import { NO_RESULTS } from './chapter-budget.js';
 import { type BandPoints, type BoardContext, bandPoints } from './context.js';
 import type { Block, Chapter, CutChart } from './document.js';
+import { engineTag } from './network-only.js';
 import { changeText, gigahertz, rounded, statedNumber, valueText } from './values.js';
 
 const DEGREES = 180 / Math.PI;
-const FLOOR_DB = -40;
+export const FLOOR_DB = -40;
 
 type Plane = Cut['plane'];
 const CUTS: readonly {
@@ -24,7 +25,7 @@ const CUTS: readonly {
 const maximumOf = (cut: Cut): number => cut.gainDbi.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY);
 
 /** Curve relative to its own maximum, clipped at the floor of the chart; about one point per half degree. */
-function curve(cut: Cut): readonly (readonly [number, number])[] {
+export function curve(cut: Cut): readonly (readonly [number, number])[] {
   const maximum = maximumOf(cut);
   const stride = Math.max(1, Math.round((cut.angle.length - 1) / 360));
   return Array.from(cut.angle, (angle, i) => [angle, cut.gainDbi[i]] as const)
@@ -91,7 +92,7 @@ function cutFigure(context: BoardContext, points: BandPoints, cut: (typeof CUTS)
   const chosen = [...new Map([points.low, points.centre, points.high].map((p) => [p.frequency, p])).values()];
   return figureBlock({
     id: `cut-${cut.plane}`,
-    title: `${cut.name} cut (${cut.axes}) at the band edges and centre, nominal temperature`,
+    title: `${cut.name} cut (${cut.axes}) at the band edges and centre, nominal temperature${engineTag(context.study)}`,
     reading: reading(points, cut.plane),
     alt: `Level over angle from −90° to 90°, relative to the maximum of each curve, at ${chosen.map((p) => gigahertz(p.frequency)).join(', ')}${drawn.length === 0 ? '; no requirement limits this cut' : `; drawn in: ${drawn.map((m) => m.label).join(', ')}`}.`,
     content: {
@@ -112,9 +113,9 @@ const figuresOfCut = (point: PointResult, plane: Plane) => [
   number(levelText(point[plane].sidelobeDb)),
 ];
 
-function beamTables({ nominal, low, high }: BandPoints): readonly Block[] {
+function beamTables({ nominal, low, high }: BandPoints, tag: string): readonly Block[] {
   const step = nominal.length > 1 ? (high.frequency - low.frequency) / (nominal.length - 1) : 0;
-  const over = `over frequency at nominal temperature, in steps of ${formatNumber(step / 1e6, 0)} MHz`;
+  const over = `over frequency at nominal temperature, in steps of ${formatNumber(step / 1e6, 0)} MHz${tag}`;
   return [
     table(
       'gain-table',
@@ -146,7 +147,7 @@ export function patternsChapter(context: BoardContext): Chapter {
     'patterns',
     'Patterns',
     ...CUTS.map((cut) => cutFigure(context, points, cut)),
-    ...beamTables(points),
+    ...beamTables(points, engineTag(context.study)),
     prose(
       'Each curve is relative to its own maximum. A sidelobe limit is drawn outside the main lobe only, that is beyond the minima next to it over the three frequencies.',
     ),

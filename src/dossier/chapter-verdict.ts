@@ -1,3 +1,4 @@
+import type { BoardStudy } from '../study/results.js';
 import { quantityOf, quantityTitle } from '../verdict/index.js';
 import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
 import { concessionsFor, expiryText, WITHOUT_PURPOSE } from './concessions.js';
@@ -5,17 +6,26 @@ import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter, Inline } from './document.js';
 import { concernsOf, figureText } from './figures.js';
 import { boardPage, DEFINITIONS, link, requirementPage } from './links.js';
+import { judgedTag, networkOnlyCaution } from './network-only.js';
 import { retunedNotice } from './retuning.js';
+import { sizedNotice } from './sizing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
 import { limitText, marginText, placeText, uncertaintyText, valueText } from './values.js';
 
-/** Worst value, or why there is none. */
-export function valueCell({ requirement, verdict }: Judged): Cell {
+/** Worst value, or why there is none; with what stands behind a value that no full wave confirms. */
+export function valueCell({ requirement, verdict }: Judged, study: BoardStudy): Cell {
   if (verdict.value === undefined) return cell(verdict.reason ?? '–');
   const kind = requirement.quantity === 'pattern_mask' ? 'excess ' : '';
-  const value = kind + valueText(verdict.value, verdict.unit);
+  const value = kind + valueText(verdict.value, verdict.unit) + judgedTag(study, requirement);
   const reason = verdict.reason === undefined ? '' : ` (${verdict.reason})`;
   return { content: [value + reason], numeric: typeof verdict.value === 'number' && reason === '' };
+}
+
+/** A reason that holds for much of the board stands once, under the table; a row then only points there. */
+function resultCell(entry: Judged, study: BoardStudy): Cell {
+  const { value, reason } = entry.verdict;
+  const shared = study.notEvaluated.some((gap) => gap.reason === reason && gap.quantities.length > 1);
+  return value === undefined && shared ? cell('none: reason below') : valueCell(entry, study);
 }
 
 export const marginCell = ({ verdict }: Judged): Cell =>
@@ -42,7 +52,7 @@ const requirementCell = ({ requirement }: Judged): Cell => {
   return cell(link(requirement.id, requirementPage(requirement.id)), `${target}: ${requirement.text}`);
 };
 
-function results({ judged }: BoardContext): Block {
+function results({ judged, study }: BoardContext): Block {
   return table(
     'results',
     'Worst value of every requirement over its band and temperature range, against its limit',
@@ -60,7 +70,7 @@ function results({ judged }: BoardContext): Block {
       return [
         requirementCell(entry),
         cell(limitText(entry.requirement, unit)),
-        valueCell(entry),
+        resultCell(entry, study),
         whereCell(entry),
         marginCell(entry),
         uncertaintyCell(entry),
@@ -149,6 +159,8 @@ export function verdictChapter(context: BoardContext): Chapter {
     'Verdict',
     { kind: 'verdict', status: verdict.overall, content: [verdict.reason] },
     ...retunedNotice(board),
+    ...sizedNotice(board),
+    ...networkOnlyCaution(context),
     results(context),
     facts(
       'reading',

@@ -9,6 +9,7 @@ import { differencesBetween } from './differences.js';
 import type { Block, Cell, Chapter, DocumentPage, Inline } from './document.js';
 import { gainBudget } from './gain-budget.js';
 import { boardPage, boardTitle, comparePage, link, requirementPage } from './links.js';
+import { engineTag } from './network-only.js';
 import { celsius, changeText, count, GAP, gigahertz, limitText, rounded, valueText } from './values.js';
 
 type Pair = readonly [BoardContext, BoardContext];
@@ -98,8 +99,8 @@ function verdictsChapter(pair: Pair): Chapter {
             requirement.weight === 'target' ? ' (target)' : '',
           ),
           cell(limitText(requirement, entry.verdict.unit)),
-          valueCell(entry),
-          valueCell(other),
+          valueCell(entry, a.study),
+          valueCell(other, b.study),
           marginCell(entry),
           marginCell(other),
           marginChange(entry, other),
@@ -126,7 +127,11 @@ function budgetChapter(pair: Pair): Chapter {
     return chapter('budget', 'Gain budget side by side', prose(`Nothing was computed for ${without.join(' and ')}.`));
   }
   const [from, to] = [gainBudget(one), gainBudget(two)];
-  const steps = from.steps.map((step, i) => ({ label: step.label, from: step.change, to: to.steps[i].change }));
+  // Only columns with terminations have a step of their loads: the other board loses nothing there.
+  const changeOf = (budget: typeof from, label: string): number =>
+    budget.steps.find((step) => step.label === label)?.change ?? 0;
+  const longest = from.steps.length < to.steps.length ? to : from;
+  const steps = longest.steps.map(({ label }) => ({ label, from: changeOf(from, label), to: changeOf(to, label) }));
   const largest = steps.reduce((x, y) => (Math.abs(y.to - y.from) > Math.abs(x.to - x.from) ? y : x));
   const gained = to.realizedGain - from.realizedGain;
   const row = (label: string, print: (value: number) => string, x: number, y: number): readonly Cell[] => [
@@ -180,7 +185,7 @@ function curvesFigure(pair: Pair, kind: (typeof CURVES)[number]): readonly Block
   if (found.some(({ points }) => points.length === 0)) return [];
   const worst = found.map(({ context, points }) => {
     const point = points.reduce((x, y) => ((kind.worst === 'lowest') === y.value < x.value ? y : x));
-    return `${valueText(point.value, unit)} at ${gigahertz(point.frequency)} for ${context.board.id}`;
+    return `${valueText(point.value, unit)} at ${gigahertz(point.frequency)} for ${context.board.id}${engineTag(context.study)}`;
   });
   const [{ judged, board }] = pair;
   const limits = judged
@@ -204,7 +209,7 @@ function curvesFigure(pair: Pair, kind: (typeof CURVES)[number]): readonly Block
         xTitle: 'Frequency (GHz)',
         yTitle: kind.axis,
         series: found.map(({ context, points }, i) => ({
-          label: context.board.id,
+          label: `${context.board.id}${engineTag(context.study)}`,
           ...(i === 0 ? { emphasis: true } : {}),
           points: points.map((p) => [rounded(p.frequency / 1e9, 4), rounded(p.value, 3)] as const),
         })),

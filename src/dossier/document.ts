@@ -148,6 +148,9 @@ export interface CutChart {
   }[];
 }
 
+/** Symbols differ in shape and filling, so that they are told apart without colour. */
+export type PointSymbol = 'disc' | 'square' | 'diamond';
+
 /** Lines over a common axis: match over frequency, line loss over frequency, loss factor over roughness. */
 export interface LinesChart {
   readonly chart: 'lines';
@@ -160,6 +163,8 @@ export interface LinesChart {
   readonly series: readonly {
     readonly label: string;
     readonly emphasis?: boolean;
+    /** Single values, not joined by a line: each point gets this symbol. */
+    readonly symbol?: PointSymbol;
     /** From here on the curve is dotted: its model has reached its ceiling and tells nothing apart. */
     readonly saturatedFrom?: number;
     readonly points: readonly (readonly [number, number])[];
@@ -180,7 +185,22 @@ export interface LinesChart {
 
 // ---------------------------------------------------------------- drawings to scale: data, not shapes
 
-export type DrawingData = StackUpDrawing | ArrayDrawing | ToothDrawing;
+export type DrawingData = StackUpDrawing | ArrayDrawing | ToothDrawing | MatrixDrawing;
+
+/** A square table of numbers whose cells are shaded by level; every cell carries its number. */
+export interface MatrixDrawing {
+  readonly drawing: 'matrix';
+  readonly rowTitle: string;
+  readonly columnTitle: string;
+  readonly unit: string;
+  readonly labels: readonly string[];
+  /** By row and column from 0; a cell without an entry stays empty. */
+  readonly cells: readonly { readonly row: number; readonly column: number; readonly value: number }[];
+  /** Levels shaded from palest to darkest. */
+  readonly range: readonly [number, number];
+  /** Pairs of cells outlined: between groups. */
+  readonly outlined?: readonly (readonly [number, number])[];
+}
 
 /** Sections through copper faces, µm, one true scale in both directions and for all faces; copper is drawn below. */
 export interface ToothDrawing {
@@ -219,13 +239,28 @@ export interface ArrayDrawing {
   readonly columns: readonly {
     readonly label: string;
     readonly rectangles: readonly {
-      readonly kind: 'patch' | 'line';
+      /** `slot`: laminate bare of copper inside a patch. */
+      readonly kind: 'patch' | 'line' | 'slot';
       readonly x: number;
       readonly y: number;
       readonly length: number;
       readonly width: number;
+      /** Amplitude of the current of a patch over the largest of the board, 0…1, as text of two digits. */
+      readonly amplitude?: { readonly share: number; readonly text: string };
     }[];
+    /** Where the wave enters and which way it goes. */
+    readonly feed: {
+      readonly x: number;
+      readonly y: number;
+      readonly towards: '+x' | '-x' | '+y' | '-y';
+      /** The port ends in the reference impedance. */
+      readonly terminated?: boolean;
+    };
+    /** End of a travelling-wave column. */
+    readonly load?: { readonly x: number; readonly y: number };
   }[];
+  /** Drawn beside the feeds, not to scale. */
+  readonly network?: { readonly label: string; readonly driven: readonly number[] };
   readonly extent: { readonly x: readonly [number, number]; readonly y: readonly [number, number] };
   /** Labels for the axes, cuts, the sign of tilt and the polarisation, printed on the drawing. */
   readonly axisNotes: {
@@ -234,5 +269,7 @@ export interface ArrayDrawing {
     readonly tilt: string;
     readonly polarisation: string;
     readonly cuts: string;
+    /** What the numbers in the patches are, where there are any. */
+    readonly amplitude?: string;
   };
 }

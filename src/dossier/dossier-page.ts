@@ -2,6 +2,8 @@ import { boardChapter } from './chapter-board.js';
 import { budgetChapter } from './chapter-budget.js';
 import { conditionsChapter } from './chapter-conditions.js';
 import { copperChapter } from './chapter-copper.js';
+import { couplingChapter } from './chapter-coupling.js';
+import { enginesChapter } from './chapter-engines.js';
 import { matchChapter } from './chapter-match.js';
 import { materialsChapter } from './chapter-materials.js';
 import { patternsChapter } from './chapter-patterns.js';
@@ -27,6 +29,8 @@ export function dossierPage(context: BoardContext): DocumentPage {
       budgetChapter(context),
       patternsChapter(context),
       matchChapter(context),
+      ...couplingChapter(context),
+      enginesChapter(context),
       copperChapter(context),
       conditionsChapter(context),
       uncertaintyChapter(context),

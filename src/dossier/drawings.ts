@@ -1,10 +1,10 @@
-import type { Board, ColumnLayout, Texture } from '../manifest/model.js';
+import type { Board, Texture } from '../manifest/model.js';
+import { drawnColumn } from './array-outline.js';
 import type { ArrayDrawing, StackUpDrawing } from './document.js';
 import { micrometres } from './figures.js';
 import { rounded, statedNumber } from './values.js';
 
 const um = (metres: number): number => rounded(metres * 1e6, 3);
-const mm = (metres: number): number => rounded(metres * 1e3, 4);
 
 const textureText = (texture: Texture): string => `Rq ${micrometres(texture.rq.value)}`;
 
@@ -60,40 +60,30 @@ export function stackUpDrawing(board: Board): StackUpDrawing {
 
 type Rectangle = ArrayDrawing['columns'][number]['rectangles'][number];
 
-/** Rectangles of a column from the feed line to the last patch; x and y of a rectangle are its lower corner, mm. */
-function rectanglesOf(column: ColumnLayout): readonly Rectangle[] {
-  const rectangle = (kind: Rectangle['kind'], x: number, length: number, width: number): Rectangle => ({
-    kind,
-    x: mm(x),
-    y: mm(column.y - width / 2),
-    length: mm(length),
-    width: mm(width),
-  });
-  const { feedLine, patches, links } = column;
-  const rectangles = [rectangle('line', column.x - feedLine.length, feedLine.length, feedLine.width)];
-  let x = column.x;
-  patches.forEach((patch, i) => {
-    rectangles.push(rectangle('patch', x, patch.length, patch.width));
-    x += patch.length;
-    const link = links[i];
-    if (link !== undefined) {
-      rectangles.push(rectangle('line', x, link.length, link.width));
-      x += link.length;
-    }
-  });
-  return rectangles;
-}
-
-export function arrayDrawing(board: Board): ArrayDrawing {
-  const columns = board.columns.map((column, i) => ({ label: `Column ${i + 1}`, rectangles: rectanglesOf(column) }));
+/** @param excitation amplitude of every patch of every column over the largest of the board, with where it was computed */
+export function arrayDrawing(
+  board: Board,
+  excitation?: { readonly shares: readonly (readonly number[])[]; readonly note: string },
+): ArrayDrawing {
+  const columns = board.columns.map((column, i) => drawnColumn(column, i, excitation?.shares[i]));
   const all = columns.flatMap((c) => c.rectangles);
   const span = (low: (r: Rectangle) => number, high: (r: Rectangle) => number): readonly [number, number] => [
     Math.min(...all.map(low)),
     rounded(Math.max(...all.map(high)), 4),
   ];
+  const { feedNetwork } = board;
+  const driven = board.columns.flatMap(({ dummy }, i) => (dummy === true || board.feed[i]?.amplitude === 0 ? [] : [i]));
   return {
     drawing: 'array',
     columns,
+    ...(feedNetwork === undefined
+      ? {}
+      : {
+          network: {
+            label: `Feed network (${feedNetwork.divider === 'tee' ? 'T-junctions' : 'Wilkinson dividers'}): schematic, not to scale`,
+            driven,
+          },
+        }),
     extent: {
       x: span(
         (r) => r.x,
@@ -105,11 +95,14 @@ export function arrayDrawing(board: Board): ArrayDrawing {
       ),
     },
     axisNotes: {
-      x: 'x: along the columns, away from the feed',
+      x: board.columns.some(({ direction }) => direction === -1)
+        ? 'x: along the columns'
+        : 'x: along the columns, away from the feed',
       y: 'y: across the columns',
       tilt: 'Tilt is positive towards +x',
       polarisation: 'Electric field along x (linear)',
       cuts: 'Elevation cut: x-z (E plane). Azimuth cut: y-z (H plane)',
+      ...(excitation === undefined ? {} : { amplitude: excitation.note }),
     },
   };
 }

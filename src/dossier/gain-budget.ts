@@ -27,6 +27,9 @@ const SHARES: readonly (readonly [keyof PointResult['shares'], string])[] = [
   ['finish', 'Plated finish'],
 ];
 
+/** Only columns that end in a termination have this line. */
+const LOAD = ['load', 'Termination loads'] as const;
+
 /**
  * Gain budget of one point, from directivity down to realized gain with every loss named.
  *
@@ -53,7 +56,7 @@ export function gainBudget(point: PointResult): GainBudget {
     before = level;
   };
   let left = 1;
-  for (const [key, label] of SHARES) {
+  for (const [key, label] of point.shares.load > 0 ? [...SHARES, LOAD] : SHARES) {
     left -= point.shares[key];
     step(label, point.directivity * left, point.shares[key]);
   }

@@ -99,7 +99,7 @@ export function requirementPageOf(
           ['Board|1.4', '#Worst value|1.2', 'Where|1.2', '#Margin', '#Uncertainty (against / for)|1.3', 'Status|1.3'],
           rows.map(({ context, entry }) => [
             cell(link(boardTitle(context.board), boardPage(context.board.id))),
-            valueCell(entry),
+            valueCell(entry, context.study),
             whereCell(entry),
             marginCell(entry),
             uncertaintyCell(entry),

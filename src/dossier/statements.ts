@@ -14,6 +14,15 @@ export const NOT_MODELLED: readonly string[] = [
   'Edges of the board: laminate and ground are taken as infinite, and the power of the surface wave as lost.',
 ];
 
+/** Of full wave and network alike. */
+export const ENGINE_LIMITS: readonly string[] = [
+  'Laminate and ground are infinite: the power of the surface wave counts as lost, its return from the edges of the board is not computed.',
+  'No vias, and no transition between layers: all metal of the columns lies in one plane.',
+  'The full wave takes metal as a sheet. Thickness enters through the lines: each width carries the quantities that the section solver finds for the thick strip.',
+  'The feed: lines up to the first patch radiate in the full wave, not in the network; the feed network itself radiates in neither.',
+  'Permittivity in the plane of the laminate, where it differs, enters both engines through lines and edges, not as a property of the slab.',
+];
+
 export const COMPARED_WITH =
   'The figures are compared with calculations by other methods and with published values. No board of this build has been measured.';
 

@@ -14,6 +14,8 @@ export interface ColumnReference {
   readonly patchWidthMm: number;
   readonly patchLengthMm: number;
   readonly linkLengthsMm: readonly number[];
+  /** Reflection with smooth copper from 74 to 82 GHz every half gigahertz, re and im in turn: fine enough to interpolate. */
+  readonly smoothReflection: readonly number[];
   readonly rows: readonly {
     readonly copper: 'smooth' | 'rough';
     readonly fGHz: number;
@@ -35,6 +37,14 @@ export const COLUMN_REFERENCES: readonly ColumnReference[] = [
     patchWidthMm: 0.99507,
     patchLengthMm: 1.06086,
     linkLengthsMm: [1.23822, 1.27927, 1.23822, 1.23822, 1.27927, 1.23822, 1.23822],
+    smoothReflection: [
+      -0.77939, 0.47929, -0.70148, 0.57554, -0.60823, 0.65307, -0.49834, 0.71198, -0.36959, 0.74753, -0.22172, 0.74822,
+      -0.063845,
+      // biome-ignore lint/suspicious/noApproximativeNumericConstant: a computed reflection that happens to lie near ln 2
+      0.69315,
+      0.065159, 0.55779, 0.075297, 0.37059, -0.042079, 0.30754, -0.035322, 0.40347, 0.14312, 0.39406, 0.28452, 0.1888,
+      0.23367, -0.095684, -0.0067434, -0.27115, -0.28612, -0.23034, -0.43869, -0.018163,
+    ],
     rows: [
       {
         copper: 'smooth',
@@ -138,6 +148,11 @@ export const COLUMN_REFERENCES: readonly ColumnReference[] = [
     patchWidthMm: 1.04549,
     patchLengthMm: 1.04095,
     linkLengthsMm: [1.21498, 1.21498, 1.21498, 1.21498, 1.21498, 1.25526, 1.21498],
+    smoothReflection: [
+      -0.69255, 0.59849, -0.61278, 0.66393, -0.51971, 0.71624, -0.41068, 0.75245, -0.28335, 0.7647, -0.1399, 0.73726,
+      -0.00052397, 0.64556, 0.067701, 0.48552, 0.01097, 0.38001, 0.024192, 0.41195, 0.17265, 0.34348, 0.23751, 0.10525,
+      0.090621, -0.13576, -0.18048, -0.18817, -0.37208, -0.031466, -0.35786, 0.19465, -0.15046, 0.30547,
+    ],
     rows: [
       {
         copper: 'smooth',

@@ -1,9 +1,10 @@
 import { formatQuantity } from '../quantity/index.js';
+import { arrayRules } from './array-rules.js';
 import type { BoardDocument } from './documents/board-document.js';
+import { feedRules } from './feed-rules.js';
 import { si } from './figures.js';
-import { expandPieces, patchCount, piecesRules } from './pieces.js';
 import type { Path, Problem } from './problem.js';
-import { ascending, exactlyOneOf, RuleReport } from './rules.js';
+import { ascending, RuleReport } from './rules.js';
 import { textureRules } from './texture-rules.js';
 import type { Node } from './tree.js';
 
@@ -61,42 +62,6 @@ function stackUpRules(report: RuleReport, { stack_up: stack }: BoardDocument): v
     );
   }
   if (texture) textureRules(report, [...outer, 'texture'], texture);
-}
-
-function arrayRules(report: RuleReport, { array }: BoardDocument): void {
-  const patches = patchCount(array.patches);
-  const why = 'one per patch';
-  const whole = piecesRules(report, ['array', 'patches'], array.patches, patches, why);
-  if (array.links === undefined) {
-    if (patches > 1)
-      report.at(['array', 'links'], 'no links', `${patches} patches have ${patches - 1} links between them`);
-  } else piecesRules(report, ['array', 'links'], array.links, patches - 1, `one fewer than the ${patches} patches`);
-  perColumn(report, ['array', 'offset_x'], array.offset_x, array.columns);
-  if (!whole || array.columns === 1) return;
-  const widest = Math.max(...expandPieces(array.patches, patches).map((p) => p.width));
-  if (si(array.pitch, 'length') <= widest) {
-    const allowed = `columns of patches ${formatQuantity(widest, 'length')} wide overlap at this pitch`;
-    report.at(['array', 'pitch'], report.written(['array', 'pitch']), allowed);
-  }
-}
-
-function feedRules(report: RuleReport, { feed, array }: BoardDocument): void {
-  perColumn(report, ['feed', 'amplitude'], feed.amplitude, array.columns);
-  perColumn(report, ['feed', 'phase'], feed.phase, array.columns);
-  if (feed.amplitude.every((a) => a === 0)) {
-    report.at(['feed', 'amplitude'], 'nothing but 0', 'at least one column is driven');
-  }
-  if (Array.isArray(feed.path)) {
-    perColumn(report, ['feed', 'path'], feed.path, array.columns);
-    feed.path.forEach((path, i) => {
-      exactlyOneOf(report, ['feed', 'path', i], path, ['loss', 'line']);
-    });
-  } else exactlyOneOf(report, ['feed', 'path'], feed.path, ['loss', 'line']);
-}
-
-function perColumn(report: RuleReport, path: Path, list: readonly unknown[] | undefined, columns: number): void {
-  if (list === undefined || list.length === columns) return;
-  report.at(path, `${list.length} ${list.length === 1 ? 'entry' : 'entries'}`, `one per column, ${columns} here`);
 }
 
 export function uniqueDeclared(

@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { audienceRules } from './audience-rules.js';
-import { type BoardFile, chainBoards, idOf } from './board-chain.js';
+import { chainBoards } from './board-chain.js';
 import { boardRules } from './board-rules.js';
 import { checkDocument } from './check.js';
 import { type BoardDocument, boardDocument } from './documents/board-document.js';
@@ -15,26 +15,26 @@ import {
 import { type PackDocument, packDocument } from './documents/pack-document.js';
 import { type RequirementsDocument, requirementsDocument } from './documents/requirement-document.js';
 import { type ReviewDocument, reviewDocument } from './documents/review-document.js';
-import { variantDocument } from './documents/variant-document.js';
 import { si } from './figures.js';
 import type { PackFiles } from './files.js';
 import { finishRules, foilRules, laminateRules } from './library-rules.js';
 import { materialReferences } from './material-references.js';
 import { MeasuredTextures } from './measured-textures.js';
 import type { Board, Pack, PreviousRevision, Review } from './model.js';
+import { openBoards, uniqueId } from './open-boards.js';
 import { type OpenFile, Reader } from './open-files.js';
 import { openProcurement, procurementFor } from './open-procurement.js';
-import { boardNameRules, packRules } from './pack-rules.js';
+import { packRules } from './pack-rules.js';
 import { type Path, type Problem, sortProblems } from './problem.js';
-import { requirementRules } from './requirement-rules.js';
+import { groupReferences, requirementRules } from './requirement-rules.js';
 import { boardOf, type Libraries } from './resolve-board.js';
 import { finishOf, foilOf, laminateOf } from './resolve-library.js';
 import { requirementsOf } from './resolve-requirements.js';
 import { reviewOf } from './resolve-review.js';
 import { type ReviewContext, reviewRules } from './review-rules.js';
 import type { KnownIds } from './rules.js';
+import { TransitionFiles } from './transitions.js';
 import { child, type Node, nodeAt, problemAt, toData } from './tree.js';
-import { inTable, readVariantTable } from './variant-table.js';
 
 export type LoadResult = { readonly pack: Pack } | { readonly problems: readonly Problem[] };
 
@@ -96,16 +96,23 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   const context = {
     ...(pack ? { frequencyStep: si(pack.doc.analysis.frequency_step, 'frequency') } : {}),
   };
+  const transitions = new TransitionFiles(reader);
   const complete = chained.flatMap((board) => {
     const merged = checked<BoardDocument>(boardDocument, { path: board.file.path, root: board.root }, problems);
     if (!merged) return [];
     problems.push(...boardRules(board.root, merged.doc, context));
+    transitions.read(board.root, merged.doc.feed.network?.transition, bandOf(merged.doc));
     const outer = merged.doc.stack_up.strip.outer_face.texture;
     measured.read(board.root, ['stack_up', 'strip', 'outer_face', 'texture'], outer);
     return [{ doc: merged.doc, board }];
   });
 
   const set = sets[0];
+  const groups = complete.flatMap(({ doc }) => doc.array.groups ?? []).map(({ id }) => id);
+  if (set) {
+    const known = { ids: new Set(groups), complete: boards.complete && complete.length === boards.files.length };
+    problems.push(...groupReferences(set.file.root, set.doc, known));
+  }
   const boardIds = boards.files.flatMap((file) => file.id ?? []);
   const requirementIds = set?.doc.requirements.map((requirement) => requirement.id) ?? [];
   const review = openReview(reader, packFile, {
@@ -125,6 +132,7 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
     ),
     finishes: byId(finishes.checked, (d) => d.finishes, finishOf),
     measurements: measured.all,
+    transitions: transitions.all,
   };
   const resolved = complete.map(({ doc, board }) => boardOf(doc, { ...board, file: board.file.path }, libraries));
   const parts = { boards: resolved, requirements: requirementsOf(set.doc, set.file.path), review, previous };
@@ -136,6 +144,11 @@ export function loadPack(files: PackFiles, packPath: string): LoadResult {
   if ('problems' in asked) return { problems: sortProblems(asked.problems) };
   return { pack: { ...made, procurement: asked.procurement } };
 }
+
+const bandOf = ({ band }: BoardDocument): Board['band'] => ({
+  low: si(band.low, 'frequency'),
+  high: si(band.high, 'frequency'),
+});
 
 function checked<D>(schema: z.ZodType, file: OpenFile, problems: Problem[]): Checked<D> | undefined {
   const found = checkDocument(schema, file.root);
@@ -193,55 +206,6 @@ function previousOf(
   return file === undefined ? undefined : { file };
 }
 
-function openBoards(
-  reader: Reader,
-  packFile: OpenFile,
-): { readonly files: readonly BoardFile[]; readonly complete: boolean } {
-  const listed = reader.openReferences(packFile, ['boards']);
-  const tables = reader.openReferences(packFile, ['variants'], readVariantTable);
-  const rows = tables.files.flatMap(({ path, root }) =>
-    root.kind === 'list' ? root.items.map((item): OpenFile => ({ path, root: item })) : [],
-  );
-  const complete = listed.complete && (tables.complete || nodeAt(packFile.root, ['variants']) === undefined);
-  const ids = new Map<string, string>();
-  const boards = [...listed.files, ...rows].map((file): BoardFile => {
-    const isRow = rows.includes(file);
-    const isVariant = isRow || (file.root.kind === 'map' && file.root.entries.has('based_on'));
-    const found = checkDocument(isVariant ? variantDocument : boardDocument, file.root).map((p) =>
-      isRow ? inTable(p) : p,
-    );
-    reader.problems.push(...found, ...boardNameRules(file.root));
-    uniqueId(file.root, 'id', file.path, ids, 'the boards of a pack have one id each', reader.problems);
-    const id = idOf(file.root, 'id');
-    const basedOn = idOf(file.root, 'based_on');
-    return { ...file, sound: found.length === 0, ...(id ? { id } : {}), ...(basedOn ? { basedOn } : {}) };
-  });
-  return { files: boards, complete };
-}
-
-function uniqueId(
-  node: Node,
-  path: string,
-  file: string,
-  ids: Map<string, string>,
-  allowed: string,
-  problems: Problem[],
-): void {
-  const id = idOf(node, 'id');
-  if (id === undefined) return;
-  const first = ids.get(id);
-  if (first === undefined) ids.set(id, file);
-  else
-    problems.push(
-      problemAt(
-        (child(node, 'id') ?? node).mark,
-        path,
-        `"${id}" a second time`,
-        `${allowed}; the first is in ${first}`,
-      ),
-    );
-}
-
 function byId<D, I, M>(
   documents: readonly Checked<D>[],
   items: (doc: D) => readonly (I & { readonly id: string })[],
@@ -287,6 +251,7 @@ function packOf(doc: PackDocument, { boards, requirements, review, previous }: P
     analysis: {
       roughnessModel: doc.analysis.roughness_model ?? 'band',
       frequencyStep: si(doc.analysis.frequency_step, 'frequency'),
+      fullWave: doc.analysis.full_wave !== 'off',
     },
     inputs: reader.inputs(),
   };

@@ -198,6 +198,7 @@ export type QuantityName =
   | 'sidelobe_level'
   | 'beam_direction'
   | 'pattern_mask'
+  | 'isolation'
   | 'line_loss'
   | 'declared';
 
@@ -214,6 +215,8 @@ export interface Requirement {
   readonly text: string;
   readonly quantity: QuantityName;
   readonly cut?: 'azimuth' | 'elevation';
+  /** For `isolation`: ids of the two groups of columns. Absent: between any two different groups of the board. */
+  readonly between?: readonly [string, string];
   /** Absent for masks (the pieces are the limit) and for declared text. Value in the catalogue unit of the quantity (dBi, dB, deg, dB/cm, 1). */
   readonly limit?: { readonly direction: 'at_least' | 'at_most'; readonly value: number };
   /** For `declared` with a numeric limit: the unit it is written with, which the property must carry too. */

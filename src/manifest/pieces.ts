@@ -1,17 +1,18 @@
-import type { BoardDocument } from './documents/board-document.js';
+import type { ArrayDocument } from './documents/array-document.js';
 import { si } from './figures.js';
 import type { Path } from './problem.js';
 import { exactlyOneOf, type RuleReport } from './rules.js';
 
 /** Patches or links of a column as written: each one, or a short form. */
-type Pieces = BoardDocument['array']['patches'] | NonNullable<BoardDocument['array']['links']>;
+type Patches = NonNullable<ArrayDocument['patches']>;
+type Pieces = Patches | NonNullable<ArrayDocument['links']>;
 type Row = Exclude<Pieces, readonly unknown[]>;
 export interface Piece {
   readonly width: number;
   readonly length: number;
 }
 
-export function patchCount(patches: BoardDocument['array']['patches']): number {
+export function patchCount(patches: Patches): number {
   return Array.isArray(patches) ? patches.length : (patches as { count: number }).count;
 }
 

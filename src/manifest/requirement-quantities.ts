@@ -11,6 +11,8 @@ export interface QuantityRule {
     readonly range: PlausibleRange;
   };
   readonly cut: boolean;
+  /** Where only one side of the limit has a meaning. */
+  readonly direction?: 'at_least' | 'at_most';
 }
 
 const limit = (
@@ -35,6 +37,7 @@ export const REQUIREMENT_QUANTITIES: Readonly<Record<QuantityName, QuantityRule>
   sidelobe_level: { limit: limit('level', 'dB', -80, 0, 'a sidelobe level'), cut: true },
   beam_direction: { limit: limit('angle', 'deg', -HALF_TURN / 2, HALF_TURN / 2, 'a beam direction'), cut: true },
   pattern_mask: { cut: true },
+  isolation: { limit: limit('level', 'dB', 0, 120, 'an isolation'), cut: false, direction: 'at_least' },
   line_loss: { limit: limit('loss_per_length', 'dB/cm', 0, 10000, 'a line loss'), cut: false },
   declared: { cut: false },
 };

@@ -1,9 +1,9 @@
-import { parseQuantity, splitQuantity } from '../quantity/index.js';
+import { parseQuantity, quoted, splitQuantity } from '../quantity/index.js';
 import type { RequirementDocument, RequirementsDocument } from './documents/requirement-document.js';
 import { si } from './figures.js';
 import type { Path, Problem } from './problem.js';
 import { REQUIREMENT_QUANTITIES } from './requirement-quantities.js';
-import { ascending, exactlyOneOf, RuleReport } from './rules.js';
+import { ascending, exactlyOneOf, type KnownIds, knownId, RuleReport } from './rules.js';
 import type { Node } from './tree.js';
 
 /** Number and unit of a limit on a declared property, which brings its own unit: `20 ppm/K`. */
@@ -29,6 +29,18 @@ export function requirementRules(root: Node, doc: RequirementsDocument): readonl
   return report.problems;
 }
 
+/** Groups that requirements name, against those of all boards; boards without any leave such a requirement unevaluated. */
+export function groupReferences(root: Node, doc: RequirementsDocument, groups: KnownIds): readonly Problem[] {
+  const report = new RuleReport(root);
+  if (groups.ids.size === 0) return [];
+  doc.requirements.forEach(({ between = [] }, i) => {
+    between.forEach((id, k) => {
+      knownId(report, ['requirements', i, 'between', k], id, 'group', groups);
+    });
+  });
+  return report.problems;
+}
+
 function oneRequirement(report: RuleReport, path: Path, r: RequirementDocument): void {
   const rule = REQUIREMENT_QUANTITIES[r.quantity];
   const unfit = (key: keyof RequirementDocument, allowed: string) => {
@@ -47,6 +59,9 @@ function oneRequirement(report: RuleReport, path: Path, r: RequirementDocument):
     missing('mask', 'a pattern mask has pieces: mask: [{ from, to, level }]');
     unfit('limit', 'the pieces of the mask are the limit');
   } else unfit('mask', 'only pattern_mask has a mask');
+  if (r.quantity !== 'isolation') unfit('between', 'only isolation is between two groups');
+  else if (r.between && r.between[0] === r.between[1])
+    report.at([...path, 'between', 1], `${quoted(r.between[1])} a second time`, 'two different groups');
   if (r.quantity === 'declared') declaredRules(report, path, r);
   else if (rule.limit) {
     missing('limit', `${r.quantity} has a limit: at_least or at_most`);
@@ -75,6 +90,12 @@ function declaredRules(report: RuleReport, path: Path, r: RequirementDocument): 
 function limitRules(report: RuleReport, path: Path, r: RequirementDocument): void {
   const rule = REQUIREMENT_QUANTITIES[r.quantity].limit;
   if (!r.limit || !rule) return;
+  const { direction } = REQUIREMENT_QUANTITIES[r.quantity];
+  const other = direction === 'at_least' ? 'at_most' : 'at_least';
+  if (direction && r.limit[other] !== undefined) {
+    const where: Path = [...path, 'limit', other];
+    return void report.atKey(where, `${other} for ${r.quantity}`, `${r.quantity} has a limit ${direction}`);
+  }
   exactlyOneOf(report, [...path, 'limit'], r.limit, ['at_least', 'at_most']);
   for (const key of ['at_least', 'at_most'] as const) {
     if (r.limit[key] === undefined) continue;

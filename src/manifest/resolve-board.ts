@@ -3,11 +3,14 @@ import type { BoardDocument } from './documents/board-document.js';
 import type { FigureDocument } from './documents/fields.js';
 import type { Measurements } from './evaluated-texture.js';
 import { figureOf, si } from './figures.js';
-import type { Board, ColumnLayout, FeedPath, Figure, Finish, Foil, Laminate, Link, StackUp, Texture } from './model.js';
-import { expandPieces, patchCount } from './pieces.js';
+import { guessedColumns } from './guessed-columns.js';
+import type { Board, Figure, Finish, Foil, Laminate, StackUp, Texture } from './model.js';
 import { dotted, type Path } from './problem.js';
+import { drawnColumns, groupsOf, scanOf, sizedForOf } from './resolve-array.js';
+import { feedOf, networkOf } from './resolve-feed.js';
 import { declaredOf } from './resolve-library.js';
 import { textureOf } from './resolve-texture.js';
+import type { Transitions } from './transitions.js';
 import { type Node, nodeAt } from './tree.js';
 
 export interface Libraries {
@@ -16,6 +19,8 @@ export interface Libraries {
   readonly finishes: ReadonlyMap<string, Finish>;
   /** Measured files of textures of their own. */
   readonly measurements: Measurements;
+  /** Two-port files of feed networks. */
+  readonly transitions: Transitions;
 }
 
 /** A complete board as read: its own keys over those of the boards it is based on. */
@@ -39,6 +44,8 @@ export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Librar
   const where = (path: Path) => `${nodeAt(input.root, path)?.mark.source.path ?? input.file}: ${dotted(path)}`;
   const figure = (figureDoc: FigureDocument, dimension: Dimension | 'number', path: Path) =>
     figureOf(figureDoc, dimension, where(path));
+  const stackUp = stackUpOf(doc.stack_up, libraries, figure, where);
+  const sizedFor = doc.array.sized_for && sizedForOf(doc.array.sized_for);
   return {
     id: doc.id,
     title: doc.title,
@@ -47,11 +54,15 @@ export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Librar
     file: input.file,
     overrides: input.overrides,
     lineage: input.lineage,
-    stackUp: stackUpOf(doc.stack_up, libraries, figure, where),
-    columns: columnsOf(doc.array),
+    stackUp,
+    columns: sizedFor === undefined ? drawnColumns(doc.array) : guessedColumns(doc.array, sizedFor, stackUp),
     ...(doc.array.retune === undefined ? {} : { retune: doc.array.retune }),
+    ...(sizedFor === undefined ? {} : { sizedFor }),
     pitch: si(doc.array.pitch, 'length'),
     feed: feedOf(doc.feed, doc.array.columns, figure),
+    ...(doc.feed.network === undefined ? {} : { feedNetwork: networkOf(doc.feed.network, libraries.transitions) }),
+    ...(doc.array.groups === undefined ? {} : { groups: groupsOf(doc.array.groups) }),
+    ...(doc.array.scan === undefined ? {} : { scan: scanOf(doc.array.scan) }),
     referenceImpedance: doc.reference_impedance === 'line' ? 'line' : si(doc.reference_impedance, 'resistance'),
     band: { low: si(doc.band.low, 'frequency'), high: si(doc.band.high, 'frequency') },
     temperature: {
@@ -65,7 +76,7 @@ export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Librar
   };
 }
 
-type MakeFigure = (doc: FigureDocument, dimension: Dimension | 'number', path: Path) => Figure;
+export type MakeFigure = (doc: FigureDocument, dimension: Dimension | 'number', path: Path) => Figure;
 
 function stackUpOf(
   doc: BoardDocument['stack_up'],
@@ -114,36 +125,4 @@ function stackUpOf(
     },
     below: (doc.below ?? []).map(({ name, thickness: t }) => ({ name, thickness: si(t, 'length') })),
   };
-}
-
-const lineOf = (doc: { readonly width: string; readonly length: string }): Link => ({
-  width: si(doc.width, 'length'),
-  length: si(doc.length, 'length'),
-});
-
-function columnsOf(doc: BoardDocument['array']): readonly ColumnLayout[] {
-  const count = patchCount(doc.patches);
-  const pitch = si(doc.pitch, 'length');
-  const patches = expandPieces(doc.patches, count);
-  const links = doc.links === undefined ? [] : expandPieces(doc.links, count - 1);
-  return Array.from({ length: doc.columns }, (_, i) => ({
-    y: (i - (doc.columns - 1) / 2) * pitch,
-    x: doc.offset_x ? si(doc.offset_x[i]!, 'length') : 0,
-    feedLine: lineOf(doc.feed_line),
-    patches,
-    links,
-  }));
-}
-
-function feedOf(doc: BoardDocument['feed'], columns: number, figure: MakeFigure): readonly FeedPath[] {
-  return Array.from({ length: columns }, (_, i) => {
-    const path = Array.isArray(doc.path) ? doc.path[i]! : doc.path;
-    const place: Path = Array.isArray(doc.path) ? ['feed', 'path', i, 'loss'] : ['feed', 'path', 'loss'];
-    return {
-      amplitude: doc.amplitude[i]!,
-      phase: doc.phase ? si(doc.phase[i]!, 'angle') : 0,
-      ...(path.loss ? { lossDb: figure(path.loss, 'level', place) } : {}),
-      ...(path.line ? { line: lineOf(path.line) } : {}),
-    };
-  });
 }

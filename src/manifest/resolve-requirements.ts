@@ -39,6 +39,7 @@ function requirementOf(doc: RequirementDocument): Requirement {
     text: doc.text,
     quantity: doc.quantity,
     ...(doc.cut ? { cut: doc.cut } : {}),
+    ...(doc.between ? { between: [doc.between[0]!, doc.between[1]!] as const } : {}),
     ...limitOf(doc),
     ...(doc.mask
       ? {

@@ -27,6 +27,15 @@ export class RuleReport {
     this.problems.push(problemAt(entry?.keyMark ?? markAt(this.root, path), dotted(path), found, allowed, fix));
   }
 
+  /** Keys of one map that exclude each other: at the last of them that the document itself gives, not one it inherits. */
+  clash(path: Path, keys: readonly string[], allowed: string, fix?: string): void {
+    const map = nodeAt(this.root, path);
+    const own = keys.filter(
+      (key) => map?.kind === 'map' && map.entries.get(key)?.keyMark.source.path === this.root.mark.source.path,
+    );
+    this.atKey([...path, own.at(-1) ?? keys.at(-1)!], `${keys.join(' and ')} together`, allowed, fix);
+  }
+
   /** As written at a path, quoted. */
   written(path: Path): string {
     const node = nodeAt(this.root, path);
@@ -70,4 +79,10 @@ export function knownId(report: RuleReport, path: Path, id: string, what: string
     `the ${what} ids of the pack are: ${listed}`,
     close && `Did you mean ${close}?`,
   );
+}
+
+/** A list with one entry per column, where it is given. */
+export function perColumn(report: RuleReport, path: Path, list: readonly unknown[] | undefined, columns: number): void {
+  if (list === undefined || list.length === columns) return;
+  report.at(path, `${list.length} ${list.length === 1 ? 'entry' : 'entries'}`, `one per column, ${columns} here`);
 }

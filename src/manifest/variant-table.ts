@@ -23,6 +23,8 @@ interface Column {
   readonly schema: z.ZodType;
   /** True when a cell holds a list of plain values. */
   readonly list: boolean;
+  /** A cell without semicolon is then no list of one entry but a plain value: so many, in place of which. */
+  readonly orOne?: boolean;
 }
 
 /** Manifest path → what a cell of that column holds. Lists of maps have no column. */
@@ -34,9 +36,11 @@ function columnsOf(schema: z.ZodType, path: string, columns: Map<string, Column>
     for (const [key, inner] of Object.entries(shape)) columnsOf(inner, path === '' ? key : `${path}.${key}`, columns);
   } else if (options) {
     for (const option of options) columnsOf(option, path, columns);
-    if (options.every((option) => shapeOf(option) === undefined && elementOf(option) === undefined)) {
+    if (options.every(isPlain)) {
       columns.set(path, { schema: plain, list: false });
     }
+    const column = columns.get(path);
+    if (column?.list && options.some(isPlain)) columns.set(path, { ...column, orOne: true });
   } else {
     const element = leaves.get(plain) ? undefined : elementOf(plain);
     const nested = element !== undefined && (shapeOf(element) || elementOf(element) || optionsOf(element));
@@ -44,6 +48,8 @@ function columnsOf(schema: z.ZodType, path: string, columns: Map<string, Column>
   }
   return columns;
 }
+
+const isPlain = (schema: z.ZodType): boolean => shapeOf(schema) === undefined && elementOf(schema) === undefined;
 
 let known: ReadonlyMap<string, Column> | undefined;
 const knownColumns = () => (known ??= columnsOf(variantDocument, '', new Map()));
@@ -141,10 +147,10 @@ function clash(cell: Field, name: string, problems: Problem[]): void {
   problems.push(problemAt(cell.mark, name, quoted(cell.text), allowed));
 }
 
-function cellNode(cell: Field, { schema, list }: Column): Node {
+function cellNode(cell: Field, { schema, list, orOne = false }: Column): Node {
   const text = cell.text.trim();
   if (text === DROP) return { kind: 'scalar', mark: cell.mark, text, value: null };
-  if (!list) return scalarNode(cell, text, schema);
+  if (!list || (orOne && !text.includes(BETWEEN_ENTRIES))) return scalarNode(cell, text, schema);
   const items = text.split(BETWEEN_ENTRIES).map((item) => scalarNode(cell, item.trim(), schema));
   return { kind: 'list', mark: cell.mark, items };
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { statements } from './documents/fields.js';
+import { replacements, statements } from './documents/fields.js';
 import { dotted, type Path } from './problem.js';
 import { bare, shapeOf } from './schema-walk.js';
 import { type Entry, type MapNode, type Node, toData } from './tree.js';
@@ -25,7 +25,8 @@ const OWN = ['id', 'title', 'based_on', 'description'];
 
 /**
  * A variant over the board it is based on: maps merge, everything else replaces, an empty value drops the inherited
- * key (as in JSON Merge Patch, RFC 7396). Nodes keep the place where they were written.
+ * key (as in JSON Merge Patch, RFC 7396), and so does a key that takes its place. Nodes keep the place where they were
+ * written.
  *
  * @param overrides  receives the dotted paths whose value now differs, in the order of the variant's file
  */
@@ -39,6 +40,7 @@ export function mergeBoards(schema: z.ZodType, parent: MapNode, variant: MapNode
 
 function mergeMaps(schema: z.ZodType, parent: MapNode, variant: MapNode, path: Path, overrides: string[]): MapNode {
   const entries = new Map<string, Entry>(parent.entries);
+  for (const key of replaced(schema, variant)) entries.delete(key);
   for (const [key, entry] of variant.entries) {
     const here = [...path, key];
     const former = parent.entries.get(key)?.value;
@@ -57,6 +59,14 @@ function mergeMaps(schema: z.ZodType, parent: MapNode, variant: MapNode, path: P
     entries.set(key, entry);
   }
   return { kind: 'map', mark: variant.mark, entries };
+}
+
+/** Keys that are not inherited, because the variant gives what takes their place. */
+function replaced(schema: z.ZodType, { entries }: MapNode): readonly string[] {
+  return Object.entries(replacements.get(bare(schema)) ?? {}).flatMap(([key, others]) => {
+    const given = entries.get(key)?.value;
+    return given === undefined || (given.kind === 'scalar' && given.value === null) ? [] : others;
+  });
 }
 
 /** Deep equality of checked, hence small, nodes; key order does not matter. */

@@ -2,6 +2,7 @@
 import type { Board } from '../manifest/model.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import { laminateAssumptions } from './laminate.js';
+import type { Confirmation } from './results.js';
 import { FACE_WORDS, type FacePlace } from './surfaces.js';
 import type { TaskResult } from './task.js';
 
@@ -9,12 +10,13 @@ import type { TaskResult } from './task.js';
  * Of the board as drawn, under every view that stands behind a figure; a tolerance limit just outside a range would only
  * repeat it. What had to be left out of a texture at such a limit is said all the same.
  */
-export function boardFlags(board: Board, results: readonly TaskResult[]): ValidityFlag[] {
+export function boardFlags(board: Board, results: readonly TaskResult[], confirmation: Confirmation): ValidityFlag[] {
   const drawn = results.filter(({ sweep }) => !sweep.id.startsWith('tolerance-'));
   const found = [
     ...laminateAssumptions(board),
     ...coverAssumptions(board),
     ...drawn.flatMap(({ flags }) => flags),
+    ...(confirmation.kind === 'full wave' ? confirmation.flags : []),
     ...results.flatMap(({ flags }) => flags.filter(({ code }) => code.startsWith('texture.'))),
   ];
   const first = new Map<string, ValidityFlag>();

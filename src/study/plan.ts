@@ -11,7 +11,7 @@ import { lineLossByFace } from './line-loss-by-face.js';
 import { losslessClosure } from './lossless-closure.js';
 import { effectivePermittivityCurves, lineLossCurves, lossFactorCurves } from './model-curves.js';
 import { columnObstacle, lineObstacle } from './obstacle.js';
-import type { BoardStudy, ModelCurves, Sweep, ToleranceStudy } from './results.js';
+import type { BoardStudy, Confirmation, ModelCurves, Sweep, ToleranceStudy } from './results.js';
 import { slowWave } from './slow-wave.js';
 import type { RunTask, TaskResult } from './task.js';
 import { tolerances } from './tolerances.js';
@@ -28,6 +28,7 @@ const ON_COLUMNS: readonly QuantityName[] = [
   'sidelobe_level',
   'beam_direction',
   'pattern_mask',
+  'isolation',
 ];
 const ON_LINES: readonly QuantityName[] = ['line_loss'];
 
@@ -67,8 +68,16 @@ export function planBoard(board: Board, analysis: Analysis): RunTask[] {
   return tasks;
 }
 
-/** @param results of `planBoard`'s tasks, in its order */
-export function assembleStudy(board: Board, analysis: Analysis, results: readonly TaskResult[]): BoardStudy {
+/**
+ * @param confirmation of the board (`confirmBoard`), whose correction the tasks were run with
+ * @param results      of `planBoard`'s tasks, in its order
+ */
+export function assembleStudy(
+  board: Board,
+  analysis: Analysis,
+  confirmation: Confirmation,
+  results: readonly TaskResult[],
+): BoardStudy {
   const ofColumns = columnObstacle(board);
   const ofLines = lineObstacle(board);
   const head = {
@@ -76,13 +85,13 @@ export function assembleStudy(board: Board, analysis: Analysis, results: readonl
     hash: createHash('sha256')
       .update(JSON.stringify([board, analysis]))
       .digest('hex'),
-    flags: boardFlags(board, results),
+    flags: boardFlags(board, results, confirmation),
     notEvaluated: [
       ...(ofLines === undefined ? [] : [{ quantities: [...ON_COLUMNS, ...ON_LINES], reason: ofLines }]),
       ...(ofLines !== undefined || ofColumns === undefined ? [] : [{ quantities: ON_COLUMNS, reason: ofColumns }]),
     ],
   };
-  if (ofLines !== undefined) return { ...head, ...NOTHING };
+  if (ofLines !== undefined) return { ...head, ...NOTHING, confirmation };
   const byId = new Map(results.map((result) => [result.sweep.id, result.sweep]));
   const nominal = nominalView(analysis.roughnessModel);
   return {
@@ -108,7 +117,7 @@ export function assembleStudy(board: Board, analysis: Analysis, results: readonl
     slowWave: slowWave(board),
     faces: faceStates(board),
     losslessClosure: ofColumns === undefined ? losslessClosure(board) : Number.NaN,
-    confirmation: { kind: 'network only', reason: 'not yet' },
+    confirmation,
   };
 }
 
@@ -124,7 +133,6 @@ const NOTHING = {
   slowWave: [],
   faces: [],
   losslessClosure: Number.NaN,
-  confirmation: { kind: 'network only', reason: 'the board was not evaluated' },
 } as const;
 
 function need(sweeps: ReadonlyMap<string, Sweep>, id: string): Sweep {

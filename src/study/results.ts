@@ -4,6 +4,7 @@ import type { SolverEffort } from '../physics/column/index.js';
 import type { Narrowing, RoughnessModel } from '../physics/roughness/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import type { Dimension } from '../quantity/index.js';
+import type { Correction } from './correction-model.js';
 
 /** Where the accepted power of the whole array goes, as fractions of the power accepted at the column ports; they sum to 1. */
 export interface PowerShares {
@@ -67,8 +68,19 @@ export interface PointResult {
   /** (far-field power + guided wave) over power into the edges: 1 within 1 % on the lossless network; NaN where not evaluated. */
   readonly farFieldClosure: number;
   readonly cuts: { readonly elevation: Cut; readonly azimuth: Cut };
-  /** Between columns, nominal sweep only: row = leaving, column = driven. */
+  /** Between columns, row = leaving, column = driven: in the nominal sweep, and in every one where the board has groups. */
   readonly scattering?: readonly (readonly Complex[])[];
+  /** Where the board has a feed network: what it does at its input, in shares of the power there. */
+  readonly feed?: FeedFigures;
+}
+
+export interface FeedFigures {
+  /** With the columns behind it. */
+  readonly inputReflection: Complex;
+  /** Power into the columns over power accepted at the input. */
+  readonly transmission: number;
+  /** Power burnt in isolation resistors over power accepted at the input. */
+  readonly burnt: number;
 }
 
 /** What one engine says of the board at one frequency: nominal state, nominal temperature, feed's weights, no feed loss. */
@@ -79,6 +91,7 @@ export interface EngineFigures {
   readonly activeReflection: readonly Complex[];
   /** Linear. */
   readonly directivity: number;
+  /** Radiated power over the accepted power that the engine accounts for: all but `powerResidual`. */
   readonly radiationEfficiency: number;
   readonly mismatch: number;
   readonly elevation: CutFigures;
@@ -111,6 +124,15 @@ export type Confirmation =
       readonly kind: 'full wave';
       readonly points: readonly EngineComparison[];
       readonly flags: readonly ValidityFlag[];
+      /**
+       * Reflections agree best when the network is solved `shift` below each frequency, Hz; what then remains of them, root
+       * mean square over columns and frequencies as complex numbers.
+       */
+      readonly alignment?: { readonly shift: number; readonly remaining: number };
+      /** What the network's figures were moved by; `network` of the points is the network as it is. */
+      readonly correction?: Correction;
+      /** Set where the full wave ran on another state of the board: which one, in words. */
+      readonly carriedFrom?: string;
     }
   | { readonly kind: 'network only'; readonly reason: string };
 

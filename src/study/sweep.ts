@@ -1,21 +1,25 @@
 /** One sweep of a board over band and temperature under one set of assumptions. */
 import type { Analysis, Board } from '../manifest/model.js';
-import { abs2 } from '../numerics/complex.js';
-import { arrayFigures, incidentWaves } from '../physics/array/index.js';
+import { abs2, type Complex, div, ZERO } from '../numerics/complex.js';
+import { type ArrayFigures, arrayFigures, incidentWaves } from '../physics/array/index.js';
 import {
   type ColumnEngine,
-  type ColumnProblem,
+  type ColumnSolution,
   edgeNetwork,
   guidedWavePower,
   type PowerBudget,
 } from '../physics/column/index.js';
-import { type CutShape, farFieldPower } from '../physics/pattern/index.js';
+import { farFieldPower } from '../physics/pattern/index.js';
 import type { ValidityFlag } from '../physics/validity.js';
 import { boardLine, columnLineFlags, feedWidth, linePoint, lossDbPerM } from './board-line.js';
+import { columnProblem, highestSolved } from './column-problem.js';
 import { bandCentre, frequencies, temperatures } from './conditions.js';
-import { columnGeometry } from './geometry.js';
+import { correctedCut } from './corrected-cut.js';
+import { correctedScattering, correctedShares, differenceAt, wavesLeaving } from './correction.js';
+import type { Correction, EngineDifference } from './correction-model.js';
+import { cutFigures, gainCut } from './engine-figures.js';
 import { columnObstacle } from './obstacle.js';
-import type { Cut, CutFigures, LinePoint, PointResult, PowerShares, Sweep } from './results.js';
+import type { LinePoint, PointResult, PowerShares, Sweep } from './results.js';
 import { type Surfaces, surfaces } from './surfaces.js';
 import type { BoardValues } from './values.js';
 import type { RoughnessView } from './views.js';
@@ -25,7 +29,11 @@ export interface SweepResult {
   readonly flags: readonly ValidityFlag[];
 }
 
-/** The feed line at every point, and the columns where nothing stands in their way. */
+/**
+ * The feed line at every point, and the columns where nothing stands in their way.
+ *
+ * @param correction what the network's figures are brought to those of the full wave by; without it they stay as they are
+ */
 export function runSweep(
   board: Board,
   analysis: Analysis,
@@ -33,9 +41,12 @@ export function runSweep(
   label: string,
   values: BoardValues,
   view: RoughnessView,
+  correction?: Correction,
 ): SweepResult {
   const list = frequencies(board, analysis);
+  const shift = correction?.shift ?? 0;
   const engine = columnObstacle(board) === undefined ? engineFor(board, values) : undefined;
+  const differences = correction && list.map((frequency) => differenceAt(correction, frequency));
   const width = feedWidth(board);
   const flags = new Map<string, ValidityFlag>();
   const keep = (found: readonly ValidityFlag[]): void => {
@@ -44,19 +55,23 @@ export function runSweep(
   const points: PointResult[] = [];
   const line: LinePoint[] = [];
   for (const temperatureC of temperatures(board))
-    for (const frequency of list) {
+    list.forEach((frequency, f) => {
       const state = surfaces(board, values, view, frequency, temperatureC);
       const feed = boardLine(board, state, values, width, frequency);
       line.push(linePoint(feed, frequency, temperatureC));
       keep(state.flags);
       keep(feed.flags);
-      if (!engine) continue;
-      const centre = id === 'nominal' && temperatureC === board.temperature.nominalC && isCentre(board, frequency);
+      if (!engine) return;
+      const nominal = id === 'nominal';
+      const centre = nominal && temperatureC === board.temperature.nominalC && isCentre(board, frequency);
       if (centre) keep(columnLineFlags(state, width + values.etch, feed, frequency));
-      const { point, found } = evaluate(board, values, engine, state, frequency, temperatureC, centre);
-      points.push(point);
-      keep(found);
-    }
+      const solution = engine.solve({ frequency: frequency - shift, ...state });
+      keep(solution.flags);
+      const place = { board, values, state, frequency, temperatureC };
+      points.push(
+        evaluate(place, solution, { closure: centre, coupling: nominal || !!board.groups }, differences?.[f]),
+      );
+    });
   return { sweep: { id, label, points, line }, flags: [...flags.values()] };
 }
 
@@ -67,36 +82,75 @@ const engines = new Map<string, ColumnEngine>();
 const ENGINES_KEPT = 3;
 
 function engineFor(board: Board, values: BoardValues): ColumnEngine {
-  // Loss is a condition of each solve, not of the preparation.
-  const problem: ColumnProblem = {
-    slab: { permittivity: values.permittivity, lossTangent: 0, height: values.height },
-    stripThickness: values.stripThickness,
-    columns: columnGeometry(board, values.etch),
-    referenceImpedance: board.referenceImpedance,
-  };
-  const key = JSON.stringify([problem, board.band.high]);
-  const engine = engines.get(key) ?? edgeNetwork(problem, board.band.high);
+  const problem = columnProblem(board, values);
+  const highest = highestSolved(board);
+  const key = JSON.stringify([problem, highest]);
+  const engine = engines.get(key) ?? edgeNetwork(problem, highest);
   engines.delete(key);
   engines.set(key, engine);
   for (const old of [...engines.keys()].slice(0, -ENGINES_KEPT)) engines.delete(old);
   return engine;
 }
 
+interface At {
+  readonly board: Board;
+  readonly values: BoardValues;
+  readonly state: Surfaces;
+  readonly frequency: number;
+  readonly temperatureC: number;
+}
+
 function evaluate(
-  board: Board,
-  values: BoardValues,
-  engine: ColumnEngine,
-  state: Surfaces,
-  frequency: number,
-  temperatureC: number,
-  closure: boolean,
-): { point: PointResult; found: readonly ValidityFlag[] } {
-  const solution = engine.solve({ frequency, ...state });
+  at: At,
+  solution: ColumnSolution,
+  wanted: { readonly closure: boolean; readonly coupling: boolean },
+  difference: EngineDifference | undefined,
+): PointResult {
+  const { board, state, frequency, temperatureC } = at;
   const waves = incidentWaves(board.feed);
   const figures = arrayFigures(solution, waves);
-  const lossAt = (width: number): number => lossDbPerM(boardLine(board, state, values, width, frequency));
+  const { power } = figures.excited;
+  const feedTransmission = feedPaths(at, waves);
+  const scattering = difference ? correctedScattering(solution.scattering, difference) : solution.scattering;
+  const reflected = wavesLeaving(scattering, waves);
+  const drawn = powerShares(power, state);
+  const shares = difference ? correctedShares(drawn, difference.shares) : drawn;
+  const directivity = figures.directivity * 10 ** ((difference?.directivityDb ?? 0) / 10);
+  const radiationEfficiency = shares.radiated;
+  const gain = directivity * radiationEfficiency * feedTransmission;
+  const mismatch = 1 - sum(reflected.map(abs2)) / sum(waves.map(abs2));
+  const cuts = cutsOf(figures, feedTransmission, difference, gain);
+  return {
+    frequency,
+    temperatureC,
+    directivity,
+    gain,
+    realizedGain: gain * mismatch,
+    radiationEfficiency,
+    feedTransmission,
+    mismatch,
+    shares,
+    columnReflection: scattering.map((row, c) => row[c]),
+    activeReflection: waves.map((wave, c) => (abs2(wave) > 0 ? div(reflected[c], wave) : ZERO)),
+    referenceImpedance: solution.referenceImpedance,
+    elevation: cuts.elevation.figures,
+    azimuth: cuts.azimuth.figures,
+    powerResidual: figures.powerResidual,
+    farFieldClosure:
+      wanted.closure && figures.excited.edges
+        ? (farFieldPower(figures.excited.field) + guidedWavePower(figures.excited.edges)) /
+          (power.radiated + power.surfaceWave)
+        : Number.NaN,
+    cuts: { elevation: cuts.elevation.cut, azimuth: cuts.azimuth.cut },
+    ...(wanted.coupling ? { scattering } : {}),
+  };
+}
 
-  // Power needed at the feed's input for the waves at the columns, each path with its own loss.
+const sum = (parts: readonly number[]): number => parts.reduce((a, b) => a + b, 0);
+
+/** Power into the columns over power needed at the feed's input, each path with its own loss. */
+function feedPaths({ board, values, state, frequency }: At, waves: readonly Complex[]): number {
+  const lossAt = (width: number): number => lossDbPerM(boardLine(board, state, values, width, frequency));
   let [delivered, supplied] = [0, 0];
   board.feed.forEach((path, c) => {
     const { feedLine } = board.columns[c];
@@ -106,47 +160,19 @@ function evaluate(
     delivered += power;
     supplied += power * 10 ** ((own + given) / 10);
   });
-  const feedTransmission = delivered / supplied;
-  const gain = figures.directivity * figures.radiationEfficiency * feedTransmission;
-  const { power } = figures.excited;
-  const cut = (plane: Cut['plane'], shape: CutShape): Cut => ({
-    plane,
-    angle: shape.angle,
-    gainDbi: shape.intensity.map(
-      (u) =>
-        10 *
-        Math.log10(Math.max(1e-6, (4 * Math.PI * u * figures.radiationEfficiency * feedTransmission) / power.radiated)),
-    ),
-  });
-  const point: PointResult = {
-    frequency,
-    temperatureC,
-    directivity: figures.directivity,
-    gain,
-    realizedGain: gain * figures.mismatch,
-    radiationEfficiency: figures.radiationEfficiency,
-    feedTransmission,
-    mismatch: figures.mismatch,
-    shares: powerShares(power, state),
-    columnReflection: figures.passiveReflection,
-    activeReflection: figures.activeReflection,
-    referenceImpedance: solution.referenceImpedance,
-    elevation: cutFigures(figures.elevation),
-    azimuth: cutFigures(figures.azimuth),
-    powerResidual: figures.powerResidual,
-    farFieldClosure:
-      closure && figures.excited.edges
-        ? (farFieldPower(figures.excited.field) + guidedWavePower(figures.excited.edges)) /
-          (power.radiated + power.surfaceWave)
-        : Number.NaN,
-    cuts: { elevation: cut('elevation', figures.elevation), azimuth: cut('azimuth', figures.azimuth) },
-  };
-  return { point, found: solution.flags };
+  return delivered / supplied;
 }
 
-function cutFigures(shape: CutShape): CutFigures {
-  const { beamDirection, halfPowerBeamwidth, sidelobeDb } = shape;
-  return { beamDirection, halfPowerBeamwidth, sidelobeDb };
+/** Cuts of gain at the feed's input, whose maximum moves as `gain` does. */
+function cutsOf(figures: ArrayFigures, feedTransmission: number, by: EngineDifference | undefined, gain: number) {
+  const drawn = figures.radiationEfficiency * feedTransmission;
+  const rise = 10 * Math.log10(gain / (figures.directivity * drawn));
+  const of = (plane: 'elevation' | 'azimuth') => {
+    const shape = figures[plane];
+    const cut = gainCut(plane, shape, drawn / figures.excited.power.radiated);
+    return by ? correctedCut(cut, cutFigures(shape), by[plane], rise) : { cut, figures: cutFigures(shape) };
+  };
+  return { elevation: of('elevation'), azimuth: of('azimuth') };
 }
 
 /** Fractions of the accepted power; each face's loss split as its resistance is: smooth copper, finish, texture. */

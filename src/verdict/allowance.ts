@@ -18,7 +18,14 @@ import type { HeldParameter } from '../manifest/procurement-model.js';
 import { bracketedRoot } from '../numerics/brent.js';
 import { conductivityAt } from '../physics/material/index.js';
 import { saturationRq } from '../physics/roughness/index.js';
-import { type BoardValues, movables, ROUGHNESS_SIDES, type RoughnessSide, runSweep } from '../study/index.js';
+import {
+  type BoardValues,
+  type Correction,
+  movables,
+  ROUGHNESS_SIDES,
+  type RoughnessSide,
+  runSweep,
+} from '../study/index.js';
 import { limitOf, marginOf } from './quantities.js';
 import { worstValue } from './worst.js';
 
@@ -87,14 +94,21 @@ interface Standing {
  * Evaluated at both band edges and the centre, at the lowest, nominal and highest temperature. From nominal outward in
  * growing steps until a requirement stops meeting, then between the last two points; a requirement that fails and
  * recovers between two steps is not seen.
+ *
+ * @param correction of the board by the full wave, where there is one: every sweep is corrected as those of the verdict are
  */
-export function searchAllowance(board: Board, analysis: Analysis, task: AllowanceTask): AllowanceResult {
+export function searchAllowance(
+  board: Board,
+  analysis: Analysis,
+  task: AllowanceTask,
+  correction?: Correction,
+): AllowanceResult {
   const item = movables(board).find(({ figure }) => figure.path === task.path);
   if (!item) throw new RangeError(`board ${board.id} has no figure ${task.path}`);
   const coarse = { ...analysis, frequencyStep: COARSE_STEP };
   const known = new Map<number, BySide>();
   const evaluate = (value: number): BySide => {
-    const found = known.get(value) ?? margins(board, coarse, item.move(value), task.requirements);
+    const found = known.get(value) ?? margins(board, coarse, item.move(value), task.requirements, correction);
     known.set(value, found);
     return found;
   };
@@ -112,9 +126,15 @@ export function searchAllowance(board: Board, analysis: Analysis, task: Allowanc
   };
 }
 
-function margins(board: Board, analysis: Analysis, values: BoardValues, requirements: readonly Guarded[]): BySide {
+function margins(
+  board: Board,
+  analysis: Analysis,
+  values: BoardValues,
+  requirements: readonly Guarded[],
+  correction: Correction | undefined,
+): BySide {
   const of = (side: RoughnessSide): Margins => {
-    const { sweep } = runSweep(board, analysis, 'allowance', 'allowance', values, side);
+    const { sweep } = runSweep(board, analysis, 'allowance', 'allowance', values, side, correction);
     return requirements.map(({ requirement }) => {
       const worst = worstValue(sweep, requirement, board);
       return 'notEvaluated' in worst ? -Infinity : marginOf(limitOf(requirement), worst.value);

@@ -1,4 +1,12 @@
 import type { QuantityName } from '../manifest/model.js';
+import {
+  both,
+  ratioSpread,
+  realizedGainSpread,
+  reflectionSpread,
+  type Spread,
+  sidelobeSpread,
+} from './accuracy-spread.js';
 
 /**
  * How far the column network and the line solver may be from the truth, by quantity. One file, so that a reader can check every number of
@@ -16,11 +24,6 @@ export interface EngineAccuracy {
   readonly source: string;
   /** How far the true value may lie above and below the value found, in the unit of the quantity, both ≥ 0. */
   readonly spread: (value: number, context: AccuracyContext) => Spread;
-}
-
-export interface Spread {
-  readonly up: number;
-  readonly down: number;
 }
 
 export interface AccuracyContext {
@@ -42,34 +45,6 @@ export const DIRECTION_ERROR = (0.5 * Math.PI) / 180;
 const GAIN_ERROR_DB = 0.35;
 /** Of a line's loss, as a share. */
 const LINE_ERROR = 0.03;
-/** Lower bounds of a reflection go down to a perfect match; −60 dB stands for it, to keep numbers finite. */
-const PERFECT_MATCH = 1e-3;
-
-const both = (amount: number): Spread => ({ up: amount, down: amount });
-
-/** A complex error of fixed magnitude turned into dB at the value found: larger downwards than upwards. */
-export function reflectionSpread(valueDb: number, error: number): Spread {
-  const magnitude = 10 ** (valueDb / 20);
-  const lowest = Math.min(magnitude, Math.max(magnitude - error, PERFECT_MATCH));
-  return {
-    up: 20 * Math.log10((magnitude + error) / magnitude),
-    down: 20 * Math.log10(magnitude / lowest),
-  };
-}
-
-/** 1.0 dB down to −20 dB, 2.0 dB at −25 dB, linear between and below: about a constant error of the far field. */
-export const sidelobeSpread = (valueDb: number): Spread => both(1 + Math.max(0, -20 - valueDb) / 5);
-
-/** Gain's own figure and what an error of the reflection does to the mismatch, root sum of squares. */
-function realizedGainSpread(reflection: number): Spread {
-  const mismatchDb = (magnitude: number) => 10 * Math.log10(1 - Math.min(magnitude, 0.99) ** 2);
-  const here = mismatchDb(reflection);
-  return {
-    up: Math.hypot(GAIN_ERROR_DB, mismatchDb(Math.max(0, reflection - REFLECTION_ERROR)) - here),
-    down: Math.hypot(GAIN_ERROR_DB, here - mismatchDb(reflection + REFLECTION_ERROR)),
-  };
-}
-
 export const ENGINE_ACCURACY: readonly EngineAccuracy[] = [
   {
     quantity: 'reflection',
@@ -135,17 +110,21 @@ export const ENGINE_ACCURACY: readonly EngineAccuracy[] = [
     statement: '±0.35 dB of gain with the effect of ±0.10 of reflection on the mismatch, root sum of squares',
     ground: 'argued',
     source: 'figures of gain and reflection',
-    spread: (_, { reflection }) => realizedGainSpread(reflection),
+    spread: (_, { reflection }) => realizedGainSpread(reflection, GAIN_ERROR_DB, REFLECTION_ERROR),
   },
   {
     quantity: 'radiation_efficiency',
     statement: '±0.35 dB of the value, that is +8.4 % and −7.7 %',
     ground: 'argued',
     source: 'figure of gain, which is directivity times efficiency; directivity is the better known of the two',
-    spread: (value) => ({
-      up: Math.abs(value) * (10 ** (GAIN_ERROR_DB / 10) - 1),
-      down: Math.abs(value) * (1 - 10 ** (-GAIN_ERROR_DB / 10)),
-    }),
+    spread: (value) => ratioSpread(value, GAIN_ERROR_DB),
+  },
+  {
+    quantity: 'isolation',
+    statement: '±4 dB',
+    ground: 'compared',
+    source: `${FULL_WAVE}: coupling of neighbouring columns overstated by up to 4 dB`,
+    spread: () => both(4),
   },
   {
     quantity: 'line_loss',
@@ -156,6 +135,12 @@ export const ENGINE_ACCURACY: readonly EngineAccuracy[] = [
     spread: (value, { outside = false }) => both((outside ? 2 : 1) * LINE_ERROR * Math.abs(value)),
   },
 ];
+
+/**
+ * A board that the full wave has not confirmed may lie further from those compared than they do from each other: the figures
+ * count half as much again there.
+ */
+export const UNCONFIRMED_FACTOR = 1.5;
 
 /** @throws RangeError for a quantity that is not computed */
 export function engineAccuracyOf(quantity: QuantityName): EngineAccuracy {

@@ -4,7 +4,8 @@ import { type BoardStatus, overallOf } from './board-status.js';
 import { decide, type RequirementStatus } from './decision.js';
 import { judgeDeclared } from './declared.js';
 import { limitOf, marginOf, quantityOf } from './quantities.js';
-import { type SideWorst, type UncertaintyPart, uncertaintyOf } from './uncertainty.js';
+import { type SideWorst, uncertaintyOf } from './uncertainty.js';
+import type { UncertaintyPart } from './uncertainty-part.js';
 import { type Place, worstValue } from './worst.js';
 
 export interface RequirementVerdict {

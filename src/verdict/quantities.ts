@@ -1,6 +1,7 @@
 import type { Board, QuantityName, Requirement } from '../manifest/model.js';
 import { abs } from '../numerics/complex.js';
 import type { Cut, CutFigures, LinePoint, PointResult } from '../study/results.js';
+import { columnPairs } from './column-pairs.js';
 import { highestExcess } from './mask.js';
 
 /** Unit in which limits, values and margins of a quantity are given. `1` is a plain ratio; empty for declared text. */
@@ -8,7 +9,7 @@ export type QuantityUnit = 'dBi' | 'dB' | 'deg' | 'dB/cm' | '1' | '';
 
 export interface PointContext {
   /** Only what changes the value: the cut, the mask, and whether a limit applies to a signed angle or its magnitude. */
-  readonly requirement: Pick<Requirement, 'cut' | 'mask' | 'limit'>;
+  readonly requirement: Pick<Requirement, 'cut' | 'mask' | 'limit' | 'between'>;
   readonly board: Board;
   /** Moves the pattern of the cut by this angle (rad) before it is compared with a mask; 0 where absent. */
   readonly patternShift?: number;
@@ -95,7 +96,10 @@ const CATALOGUE: Readonly<Record<QuantityName, Omit<Quantity, 'name'>>> = {
     cut: 'none',
     definition:
       'Largest magnitude of the reflection coefficient over the columns, each driven alone with the others terminated in the reference impedance, at the true edge of the first patch.',
-    at: (point) => largestReflection(point.columnReflection.map(abs), 'reflection'),
+    at: (point, { board }) => {
+      const own = point.columnReflection.filter((_, i) => !board.columns[i]?.dummy);
+      return largestReflection(own.map(abs), 'reflection');
+    },
   },
   active_reflection: {
     title: 'Reflection, active',
@@ -156,6 +160,23 @@ const CATALOGUE: Readonly<Record<QuantityName, Omit<Quantity, 'name'>>> = {
           'a piece of the mask lies outside the evaluated cut',
         );
       }),
+  },
+  isolation: {
+    title: 'Isolation of groups',
+    unit: 'dB',
+    cut: 'none',
+    definition:
+      'Least ratio of the wave into a column of one group to the wave that leaves a column of the other, all other columns terminated in the reference impedance, at the true edge of the first patch.',
+    at: ({ scattering }, { board, requirement }) => {
+      if (!scattering) return { missing: 'the coupling of columns was not evaluated there' };
+      const pairs = columnPairs(board, requirement.between);
+      if (pairs.length === 0) return { missing: 'the board has no two groups of columns to be isolated' };
+      const largest = Math.max(...pairs.map(([m, n]) => Math.max(abs(scattering[m][n]), abs(scattering[n][m]))));
+      return finite(
+        -20 * Math.log10(Math.max(largest, SMALLEST_REFLECTION)),
+        'the coupling of columns was not evaluated there',
+      );
+    },
   },
   line_loss: {
     title: 'Line loss',

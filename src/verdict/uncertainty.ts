@@ -1,24 +1,9 @@
 import type { Requirement } from '../manifest/model.js';
 import type { BoardStudy, FaceState, RoughnessSide, Sweep, ToleranceStudy } from '../study/results.js';
-import { DIRECTION_ERROR, engineAccuracyOf } from './engine-accuracy.js';
-import { lineOutside } from './line-range.js';
+import { carriedOver, directionPart, engineLevel } from './engine-parts.js';
 import { limitOf, marginOf } from './quantities.js';
+import type { UncertaintyPart } from './uncertainty-part.js';
 import { type WorstValue, worstValue } from './worst.js';
-
-/** One part of the uncertainty of a worst value, in the unit of the quantity. One-sided: for and against the limit. */
-export interface UncertaintyPart {
-  readonly id: string;
-  readonly kind: 'engine' | 'roughness' | 'tolerance';
-  readonly label: string;
-  /** What was done and where the figure comes from. */
-  readonly detail: string;
-  /** How far the margin may be smaller than the nominal one, ≥ 0; for roughness see `combine`. */
-  readonly adverse: number;
-  /** How far the margin may be larger than the nominal one, ≥ 0; for roughness see `combine`. */
-  readonly favourable: number;
-  /** Worst values with the tolerance at its lower and upper limit, nominal view of the texture. */
-  readonly atLimits?: { readonly low: number; readonly high: number };
-}
 
 /** Worst value under one estimate of the roughness band. */
 export interface SideWorst {
@@ -78,16 +63,19 @@ function combine(study: BoardStudy, requirement: Requirement, nominal: WorstValu
   const all = sides.length > 0 ? sides : [{ sweep: study.nominal, worst: nominal, margin: nominalMargin }];
   const lowest = all.reduce((a, b) => (b.margin < a.margin ? b : a));
   const highest = all.reduce((a, b) => (b.margin > a.margin ? b : a));
-  const moved = (sweep: Sweep) =>
-    [-DIRECTION_ERROR, DIRECTION_ERROR].map((shift) => margin(under(sweep, 'with the pattern moved', shift).value));
   const engine = [
     engineLevel(study, requirement, lowest.worst, highest.worst),
+    ...carriedOver(study, requirement, lowest.worst, highest.worst),
     ...(requirement.quantity === 'pattern_mask'
       ? [
-          engineDirection(
-            lowest.margin - Math.min(...moved(lowest.sweep)),
-            Math.max(...moved(highest.sweep)) - highest.margin,
-          ),
+          directionPart(study, requirement, [lowest.worst, highest.worst], (shift) => {
+            const moved = (sweep: Sweep) =>
+              [-shift, shift].map((by) => margin(under(sweep, 'with the pattern moved', by).value));
+            return {
+              adverse: lowest.margin - Math.min(...moved(lowest.sweep)),
+              favourable: Math.max(...moved(highest.sweep)) - highest.margin,
+            };
+          }),
         ]
       : []),
   ];
@@ -124,42 +112,6 @@ function roughnessDetail(faces: readonly FaceState[], outside: boolean): string 
     ...(outside ? ['. The named model puts the nominal value outside the band, which decides'] : []),
   ].join('');
 }
-
-/** Engine accuracy at the least favourable value over the estimates (adverse) and at the most favourable (favourable). */
-function engineLevel(
-  { board }: BoardStudy,
-  requirement: Requirement,
-  lowest: WorstValue,
-  highest: WorstValue,
-): UncertaintyPart {
-  const accuracy = engineAccuracyOf(requirement.quantity);
-  const lowestPiece = Math.min(...(requirement.mask ?? []).map((piece) => piece.levelDb));
-  const outside = requirement.quantity === 'line_loss' ? lineOutside(board) : [];
-  const spread = (worst: WorstValue) =>
-    accuracy.spread(requirement.quantity === 'pattern_mask' ? lowestPiece : worst.value, {
-      reflection: Math.sqrt(Math.max(0, 1 - worst.mismatch)),
-      outside: outside.length > 0,
-    });
-  const [against, forIt] = [spread(lowest), spread(highest)];
-  const rising = limitOf(requirement).direction === 'at_most';
-  return {
-    id: 'engine',
-    kind: 'engine',
-    label: 'Engine accuracy',
-    detail: `${accuracy.statement} (${accuracy.source})${outside.length === 0 ? '' : `; outside here: ${outside.join('; ')}`}`,
-    adverse: rising ? against.up : against.down,
-    favourable: rising ? forIt.down : forIt.up,
-  };
-}
-
-const engineDirection = (adverse: number, favourable: number): UncertaintyPart => ({
-  id: 'engine-direction',
-  kind: 'engine',
-  label: 'Engine accuracy, direction',
-  detail: 'pattern moved by ±0.5 deg against the mask (engine accuracy of the beam direction)',
-  adverse: Math.max(0, adverse),
-  favourable: Math.max(0, favourable),
-});
 
 function tolerancePart(
   tolerance: ToleranceStudy,

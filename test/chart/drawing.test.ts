@@ -75,6 +75,7 @@ describe('array', () => {
   it('stays readable with eight narrow columns', () => {
     const columns = Array.from({ length: 8 }, (_, i) => ({
       label: `Column ${i + 1}`,
+      feed: { x: -1, y: -4.3 + i * 1.9, towards: '+x' as const },
       rectangles: fixture.array.columns[0].rectangles.map((r) => ({ ...r, y: r.y + i * 1.9 })),
     }));
     expectReadable(drawArray({ ...fixture.array, columns, extent: { x: [-1, 24], y: [-6, 11] } }));

@@ -22,6 +22,8 @@ describe('dossier', () => {
       'budget',
       'patterns',
       'match',
+      'coupling',
+      'engines',
       'copper',
       'conditions',
       'uncertainty',

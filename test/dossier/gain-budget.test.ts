@@ -10,7 +10,7 @@ const template = pointOf(board('qb-1'), 76.5e9, 25);
 /** A point with any split of the accepted power, feed loss and mismatch; closed by construction. */
 const points: fc.Arbitrary<PointResult> = fc
   .record({
-    weights: fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 8, maxLength: 8 }),
+    weights: fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 9, maxLength: 9 }),
     lost: fc.double({ min: 0, max: 0.9, noNaN: true }),
     directivity: fc.double({ min: 5, max: 500, noNaN: true }),
     feed: fc.double({ min: 0.3, max: 1, noNaN: true }),
@@ -18,10 +18,9 @@ const points: fc.Arbitrary<PointResult> = fc
   })
   .map(({ weights, lost, directivity, feed, mismatch }) => {
     const total = weights.reduce((a, b) => a + b, 0) || 1;
-    const [surfaceWave, stripUnderside, stripTop, stripEdges, ground, roughness, finish, dielectric] = weights.map(
-      (w) => (w / total) * lost,
-    );
-    const parts = { surfaceWave, stripUnderside, stripTop, stripEdges, ground, roughness, finish, dielectric };
+    const [surfaceWave, stripUnderside, stripTop, stripEdges, ground, roughness, finish, dielectric, load] =
+      weights.map((w) => (w / total) * lost);
+    const parts = { surfaceWave, stripUnderside, stripTop, stripEdges, ground, roughness, finish, dielectric, load };
     const radiated = 1 - Object.values(parts).reduce((a, b) => a + b, 0);
     const gain = directivity * radiated * feed;
     return {
@@ -65,9 +64,14 @@ describe('gain budget', () => {
     );
   });
 
-  it('names every share of the study', () => {
-    const shares = Object.keys(template.shares).filter((name) => name !== 'radiated');
-    expect(gainBudget(template).steps.filter((s) => s.share !== undefined)).toHaveLength(shares.length);
+  it('names every share of the study, that of loads only where columns are terminated', () => {
+    const names = Object.keys(template.shares).filter((name) => name !== 'radiated');
+    const named = (point: PointResult) => gainBudget(point).steps.filter((s) => s.share !== undefined);
+    expect(named(template)).toHaveLength(names.length - 1);
+    const { shares } = template;
+    const loaded = named({ ...template, shares: { ...shares, load: 0.01, dielectric: shares.dielectric - 0.01 } });
+    expect(loaded).toHaveLength(names.length);
+    expect(loaded.at(-1)).toMatchObject({ label: 'Termination loads', share: 0.01 });
   });
 
   it('takes a finish that conducts better than copper as a gain', () => {

@@ -2,7 +2,7 @@ import type { Block, DocumentPage, Inline, PackDocument } from '../../src/dossie
 import type { PackInput } from '../../src/dossier/index.js';
 import type { Accuracy, EvidenceResult } from '../../src/evidence/index.js';
 import { methods } from '../../src/evidence/methods.js';
-import type { Pack } from '../../src/manifest/model.js';
+import type { Board, Pack } from '../../src/manifest/model.js';
 import type { BoardStudy, Sweep } from '../../src/study/results.js';
 import { judgePack } from '../../src/verdict/index.js';
 import { board, pack } from './board-fixture.js';
@@ -101,6 +101,7 @@ export function notEvaluated(study: BoardStudy, reason = 'the board has a cover 
     })),
     flags: [],
     losslessClosure: Number.NaN,
+    confirmation: { kind: 'network only', reason },
     notEvaluated: [
       {
         quantities: [
@@ -121,12 +122,17 @@ export function notEvaluated(study: BoardStudy, reason = 'the board has a cover 
   };
 }
 
+export const networkOnly = (subject: Board): BoardStudy => ({
+  ...studyOf(subject),
+  confirmation: { kind: 'network only', reason: 'the pack switched the full wave off' },
+});
+
 let made: readonly BoardStudy[] | undefined;
 /** A smooth board, a rough one on another laminate, and one that cannot be evaluated. */
 export function studies(): readonly BoardStudy[] {
   made ??= [
     studyOf(board('qb-1')),
-    studyOf(
+    networkOnly(
       board('qb-2', {
         rq: 1.6e-6,
         permittivity: 3.3,

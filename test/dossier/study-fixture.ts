@@ -26,6 +26,7 @@ import type {
   RoughnessSide,
   Sweep,
 } from '../../src/study/results.js';
+import { confirmedOf, scatteringOf } from './engine-fixture.js';
 
 /**
  * A study that behaves like one, from a few textbook relations: a resonator for the match, array factors for the cuts,
@@ -146,7 +147,7 @@ function sharesOf(lossFactor: number, temperatureC: number): PowerShares {
     dielectric: 0.045 * (1 + 0.0005 * (temperatureC - 25)),
     surfaceWave: 0.03,
   };
-  return { ...scaled, radiated: 1 - Object.values(scaled).reduce((a, b) => a + b, 0) };
+  return { ...scaled, load: 0, radiated: 1 - Object.values(scaled).reduce((a, b) => a + b, 0) };
 }
 
 function match(board: Board, frequency: number, temperatureC: number, permittivity: number, offset: number): Complex {
@@ -189,6 +190,7 @@ export function pointOf(
     (a) => Math.cos(a) * arrayFactor(taper, k0 * spacing * Math.sin(a) - lag),
   );
   const azimuth = cutOf('azimuth', gainDbi, (a) => Math.cos(a) * arrayFactor(weights, k0 * board.pitch * Math.sin(a)));
+  const scattering = scatteringOf(columnReflection);
   return {
     frequency,
     temperatureC,
@@ -207,6 +209,7 @@ export function pointOf(
     powerResidual: 3.1e-13,
     farFieldClosure: 0.9981,
     cuts: { elevation, azimuth },
+    scattering,
   };
 }
 
@@ -345,5 +348,6 @@ export function studyOf(board: Board, nominal: RoughnessSide = 'middle'): BoardS
     ],
     notEvaluated: [],
     losslessClosure: 0.9987,
+    confirmation: confirmedOf(board, pointOf),
   };
 }

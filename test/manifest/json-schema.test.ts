@@ -13,6 +13,10 @@ const schemaFor = (file: string) =>
   file.startsWith('boards/') ? 'board.schema.json' : `${file.replace('.yaml', '')}.schema.json`;
 const accepts = (file: string, text: string) => validators.get(schemaFor(file))!(parse(text, { schema: CORE_SCHEMA }));
 
+const SIZED_FOR =
+  'sized_for: { frequency: 76.5 GHz, patches: 6, taper: uniform, least_width: 75 um, least_gap: 100 um, grid: 1 um }';
+const NETWORK = 'network: { divider: tee, line_width: 0.15 mm, trunk_length: 3 mm, level_length: 4 mm }';
+
 describe('manifestSchemas', () => {
   it.each(Object.keys(schemas))('%s is committed as it is generated', (name) => {
     const committed = readFileSync(new URL(`../../manifests/schema/${name}`, import.meta.url), 'utf8');
@@ -67,6 +71,24 @@ describe('manifestSchemas', () => {
     ['pack.yaml', 'status: for_review', 'status: for review'],
     ['pack.yaml', 'date: 2026-11-02', 'date: 2.11.2026'],
     ['pack.yaml', 'revision: A', 'revision: 1'],
+    ['pack.yaml', '  frequency_step', '  full_wave: yes\n  frequency_step'],
+    ['boards/qs-1.yaml', 'feed:\n', '  direction: backwards\nfeed:\n'],
+    ['boards/qs-1.yaml', 'feed:\n', '  dummy_columns: [0]\nfeed:\n'],
+    ['boards/qs-1.yaml', 'feed:\n', '  side_feed: { link: 1 }\nfeed:\n'],
+    ['boards/qs-1.yaml', 'feed:\n', '  inset: { depth: 0.2 mm }\nfeed:\n'],
+    ['boards/qs-1.yaml', 'feed:\n', '  groups: [{ id: tx, columns: [] }]\nfeed:\n'],
+    ['boards/qs-1.yaml', 'feed:\n', `  ${SIZED_FOR}\nfeed:\n`],
+    ['boards/qs-1.yaml', / {2}patches:.*\n/, ''],
+    ['boards/qs-1.yaml', / {2}patches:.*\n/, `  ${SIZED_FOR.replace('uniform', 'triangular')}\n`],
+    [
+      'boards/qs-1.yaml',
+      / {2}patches:.*\n/,
+      `  ${SIZED_FOR.replace('uniform', '{ dolph_chebyshev: 25 dB, given: [1, 2] }')}\n`,
+    ],
+    ['boards/qs-1.yaml', '  path:\n', `  ${NETWORK}\n  path:\n`],
+    ['boards/qs-1.yaml', / {2}path:\n.*\n/, ''],
+    ['boards/qs-1.yaml', / {2}path:\n.*\n/, `  ${NETWORK.replace('tee', 'tea')}\n`],
+    ['requirements.yaml', 'at_most: -12 dB }', 'at_most: -12 dB }\n    between: [tx]'],
     ['requirements.yaml', 'at_least: 13 dBi', 'at_least: 13 dB'],
     ['requirements.yaml', 'at_least: 13 dBi', 'at_least: 13 dBi, at_most: 14 dBi'],
     ['requirements.yaml', '    cut: azimuth\n', ''],
@@ -74,7 +96,7 @@ describe('manifestSchemas', () => {
     ['requirements.yaml', '    property: flammability\n', ''],
   ])('refuses %s with %j as %j', (file, from, to) => {
     const text = fixtureText(file);
-    expect(text).toContain(from);
+    expect(text).toMatch(typeof from === 'string' ? from.replace(/[[\]{}().*+?^$|\\]/g, '\\$&') : from);
     expect(accepts(file, text.replace(from, to))).toBe(false);
   });
 
@@ -102,6 +124,38 @@ describe('manifestSchemas', () => {
     expect(more('laminates.yaml', 'declared:', water)).toBe(true);
     expect(more('pack.yaml', '  roughness_model: gradient\n', '')).toBe(true);
     expect(more('pack.yaml', 'gradient', 'band')).toBe(true);
+  });
+
+  it('accepts all that an array and a feed may state', () => {
+    const board = fixtureText('boards/qs-1.yaml');
+    const form = `  direction: alternate
+  stagger: 0.4 mm
+  dummy_columns: [1, 3]
+  matching: [{ width: 0.3 mm, length: 0.6 mm }]
+  inset: { depth: 0.2 mm, gap: 0.1 mm }
+  termination: { width: 0.15 mm }
+  side_feed: { link: 2, side: outward }
+  groups: [{ id: tx, columns: [1, 2] }, { id: rx, columns: [3] }]
+  scan: { low: -30 deg, high: 30 deg }
+feed:
+`;
+    expect(accepts('boards/qs-1.yaml', board.replace('feed:\n', form))).toBe(true);
+    for (const taper of [
+      'uniform',
+      '{ dolph_chebyshev: 25 dB }',
+      '{ taylor: { sidelobe: 25 dB, n_bar: 4 } }',
+      '{ given: [1, 2, 1] }',
+    ]) {
+      const sized = board.replace(/ {2}patches:.*\n {2}links:.*\n/, `  ${SIZED_FOR.replace('uniform', taper)}\n`);
+      expect(accepts('boards/qs-1.yaml', sized), taper).toBe(true);
+    }
+    const transition = NETWORK.replace(' }', ', transition: { file: x.s2p } }');
+    expect(accepts('boards/qs-1.yaml', board.replace(/ {2}path:\n.*\n/, `  ${transition}\n`))).toBe(true);
+    const isolation = fixtureText('requirements.yaml').replace(
+      /quantity: reflection\n.*\n/,
+      'quantity: isolation\n    between: [tx, rx]\n    limit: { at_least: 25 dB }\n',
+    );
+    expect(accepts('requirements.yaml', isolation)).toBe(true);
   });
 
   it('takes an empty value in a variant only', () => {

@@ -16,8 +16,15 @@ describe('loadPack', () => {
       date: '2026-11-02',
       status: 'for review',
       authors: ['M. Ellery', 'S. Oduya'],
-      analysis: { roughnessModel: 'gradient', frequencyStep: 100e6 },
+      analysis: { roughnessModel: 'gradient', frequencyStep: 100e6, fullWave: true },
     });
+  });
+
+  it('leaves the full wave to the pack: on, unless it says off', () => {
+    const fullWave = (written: string) =>
+      packOf(load(edited('pack.yaml', '  frequency_step', `  full_wave: ${written}\n  frequency_step`))).analysis
+        .fullWave;
+    expect([fullWave('on'), fullWave('off')]).toEqual([true, false]);
   });
 
   it('gives SI numbers and says where each figure stands', () => {

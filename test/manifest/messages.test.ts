@@ -189,6 +189,13 @@ const CASES: readonly (readonly [name: string, file: string, from: string, to: s
     /one of band, hammerstad, groiss, gradient\. Did you mean gradient\?$/,
   ],
   [
+    'a full wave that is neither on nor off',
+    'pack.yaml',
+    '  frequency_step',
+    '  full_wave: yes\n  frequency_step',
+    /analysis\.full_wave\n {2}found "yes"; one of on, off\.$/,
+  ],
+  [
     'two height parameters',
     'foils.yaml',
     'Ra: { value: 0.25 um',

@@ -51,6 +51,22 @@ cost: { amount: 2.5 }
     expect(third).toMatchObject({ title: '7', cost: { basis: '12' } });
   });
 
+  it('tells how many dummy columns from which', () => {
+    const header = 'id,title,based_on,array.dummy_columns,array.direction,feed.amplitude\n';
+    const [, , many, some] = boardsOf(`${header}qs-3,a,qs-1,1,alternate,0;1;0\nqs-4,b,qs-1,2;3,,1;0;0\n`);
+    const dummies = (board: typeof many) => board!.columns.map((column) => column.dummy ?? false);
+    expect(dummies(many)).toEqual([true, false, true]);
+    expect(dummies(some)).toEqual([false, true, true]);
+    expect(many!.columns[1]!.direction).toBe(-1);
+  });
+
+  it('states what a column is sized for', () => {
+    const keys = ['frequency', 'patches', 'taper', 'least_width', 'least_gap', 'grid'];
+    const header = `id,title,based_on,${keys.map((key) => `array.sized_for.${key}`)}`;
+    const [, , third] = boardsOf(`${header}\nqs-3,a,qs-1,76.5 GHz,6,uniform,75 um,100 um,1 um\n`);
+    expect(third!.sizedFor).toMatchObject({ patches: 6, taper: { kind: 'uniform' } });
+  });
+
   it('tells each link of the chain with what it overrides', () => {
     const [, , third] = boardsOf('id,title,based_on,stack_up.strip.foil,cost.basis\nqs-3,a,qs-2,kf-04,~\n');
     expect(third!.lineage).toEqual([

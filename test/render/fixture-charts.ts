@@ -240,6 +240,7 @@ export const array: ArrayDrawing = {
     const centre = round((column - 3) * 2.15, 3);
     return {
       label: `Column ${column}`,
+      feed: { x: -1, y: centre, towards: '+x' as const },
       rectangles: [
         { kind: 'line' as const, x: -1, y: round(centre - 0.1, 3), length: 2, width: 0.2 },
         ...patchX.flatMap((x, i) => [

@@ -21,6 +21,8 @@ const ours = new Set([
   'yScale',
   'language',
   'forbidden',
+  'towards',
+  'symbol',
 ]);
 
 function poison(value: unknown, key: string): unknown {

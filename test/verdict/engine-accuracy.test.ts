@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { engineAccuracyOf, reflectionSpread, sidelobeSpread } from '../../src/verdict/engine-accuracy.js';
+import { reflectionSpread, sidelobeSpread } from '../../src/verdict/accuracy-spread.js';
+import { ENGINE_ACCURACY, engineAccuracyOf } from '../../src/verdict/engine-accuracy.js';
+import { fullWaveAccuracyOf } from '../../src/verdict/full-wave-accuracy.js';
 import { lineOutside } from '../../src/verdict/line-range.js';
 import { figure, fixtureBoard } from '../study/fixture-board.js';
 
@@ -31,6 +33,25 @@ describe('engine accuracy', () => {
     expect(good).toBeGreaterThanOrEqual(0.35);
     expect(poor).toBeGreaterThan(good);
     expect(engineAccuracyOf('gain').spread(12, { reflection: 0.5 })).toEqual({ up: 0.35, down: 0.35 });
+  });
+
+  it('is better by the full wave than by the network, for every quantity of the columns', () => {
+    const values = { sidelobe_level: -23, pattern_mask: -23, reflection: -15, active_reflection: -15, isolation: 30 };
+    for (const { quantity, spread } of ENGINE_ACCURACY) {
+      if (quantity === 'line_loss') expect(fullWaveAccuracyOf(quantity)).toBeUndefined();
+      else {
+        const value = values[quantity as keyof typeof values] ?? 10;
+        const [network, better] = [spread, fullWaveAccuracyOf(quantity)!.spread].map((of) =>
+          of(value, { reflection: 0.2 }),
+        );
+        // The direction is known to 0.5 deg by both.
+        if (quantity === 'beam_direction') expect(better).toEqual(network);
+        else {
+          expect(better!.up).toBeLessThan(network!.up);
+          expect(better!.down).toBeLessThan(network!.down);
+        }
+      }
+    }
   });
 
   it('doubles that of a line outside what it was compared on, and names the respect', () => {

@@ -4,14 +4,14 @@ import { requirement } from '../dossier/board-fixture.js';
 import { gainRequirement, sweepWith, tinyStudy } from './tiny-study.js';
 
 describe('uncertainty', () => {
-  // 14.0, 13.6 (nominal) and 12.9 dBi; one tolerance ∓0.1 dB times 1, 2, 3 by estimate; 0.35 dB engine.
+  // 14.0, 13.6 (nominal) and 12.9 dBi; one tolerance ∓0.1 dB times 1, 2, 3 by estimate; network only, 1.5 × 0.35 dB.
   const study = tinyStudy({ sides: [14, 13.6, 12.9], tolerances: [[-0.1, 0.05]] });
   const verdict = judgeRequirement(study, gainRequirement('at_least', 12));
 
   it('adds the spread over the estimates linearly to the root sum of squares of the rest', () => {
     expect(verdict.margin).toBeCloseTo(1.6, 9);
-    expect(verdict.adverse).toBeCloseTo(0.7 + Math.hypot(0.35, 0.3), 9);
-    expect(verdict.favourable).toBeCloseTo(0.4 + Math.hypot(0.35, 0.15), 9);
+    expect(verdict.adverse).toBeCloseTo(0.7 + Math.hypot(0.525, 0.3), 9);
+    expect(verdict.favourable).toBeCloseTo(0.4 + Math.hypot(0.525, 0.15), 9);
   });
 
   it('spans the estimates alone: a named model outside them moves the nominal value and no bound', () => {

@@ -1,9 +1,8 @@
 import { z } from 'zod';
-import { declared, exactlyOne, figure, id, numberFigure, quantity, range, statement, text } from './fields.js';
+import { arrayDocument } from './array-document.js';
+import { feedDocument } from './feed-document.js';
+import { declared, figure, id, numberFigure, quantity, range, statement, text } from './fields.js';
 import { textureDocument } from './texture-document.js';
-
-const MOST_COLUMNS = 64;
-const MOST_PATCHES = 64;
 
 const copperThickness = () =>
   figure('length', 'Finished thickness of the copper.', range(1e-6, 200e-6, 'the thickness of copper', 'um'), {
@@ -82,125 +81,6 @@ const stackUp = z
   })
   .describe('Layers from the radiating side downward.');
 
-const width = (of: string) =>
-  quantity('length', `Width of ${of}, across the column.`, range(20e-6, 20e-3, `the width of ${of}`, 'mm'));
-const length = (of: string) =>
-  quantity('length', `Length of ${of}, along the column.`, range(20e-6, 20e-3, `the length of ${of}`, 'mm'));
-const lineLength = (of: string) => quantity('length', `Length of ${of}.`, range(0, 0.5, `the length of ${of}`, 'mm'));
-
-/** A regular or mirrored row of like pieces. */
-function row<X extends z.ZodRawShape>(of: string, extra: X, description: string) {
-  const list = (item: z.ZodString, what: string) =>
-    z
-      .array(item)
-      .min(1)
-      .max(MOST_PATCHES)
-      .describe(`${what} in order from the feed; the first half and the middle when mirrored.`)
-      .optional();
-  return z
-    .strictObject({
-      ...extra,
-      width: width(of).optional(),
-      widths: list(width(of), 'Widths'),
-      length: length(of).optional(),
-      lengths: list(length(of), 'Lengths'),
-      mirrored: z
-        .boolean()
-        .describe('true: the lists give the half next to the feed (with the middle), the rest mirrors it.')
-        .optional(),
-    })
-    .meta({ description, allOf: [exactlyOne('width', 'widths'), exactlyOne('length', 'lengths')] });
-}
-const piece = (of: string) => z.strictObject({ width: width(of), length: length(of) }).describe(`One of ${of}s.`);
-
-const array = z
-  .strictObject({
-    columns: z.int().min(1).max(MOST_COLUMNS).describe('Number of columns.'),
-    pitch: quantity(
-      'length',
-      'Distance between the centre lines of neighbouring columns.',
-      range(0.1e-3, 0.2, 'the pitch of columns', 'mm'),
-    ),
-    feed_line: z
-      .strictObject({ width: width('a line'), length: lineLength('the feed line') })
-      .describe('Line that feeds the first patch of each column.'),
-    patches: statement(
-      z
-        .union([
-          z.array(piece('a patch')).min(1).max(MOST_PATCHES).describe('Every patch, from the feed.'),
-          row(
-            'a patch',
-            { count: z.int().min(1).max(MOST_PATCHES).describe('Number of patches in a column.') },
-            'Patches in short form.',
-          ),
-        ])
-        .describe('Patches of a column from the feed to the open end: a list of each, or a short form.'),
-      { what: 'the patches' },
-    ),
-    links: statement(
-      z
-        .union([
-          z.array(piece('a link')).max(MOST_PATCHES).describe('Every link, from the feed: one fewer than patches.'),
-          row('a link', {}, 'Links in short form; there is one fewer than patches.'),
-        ])
-        .describe('Lines between neighbouring patches. Left out when a column has one patch.'),
-      { what: 'the links' },
-    ).optional(),
-    offset_x: z
-      .array(quantity('length', 'Offset of a column.', range(-0.1, 0.1, 'the offset of a column', 'mm')))
-      .min(1)
-      .max(MOST_COLUMNS)
-      .describe('Offset of each column along its own direction, for staggered columns. All 0 when left out.')
-      .optional(),
-    retune: z
-      .enum(['length'])
-      .describe(
-        'length: patch and link lengths are scaled by one factor, found and printed by the program, so that the match is best at the band centre. For comparing laminates before the layout is redone.',
-      )
-      .optional(),
-  })
-  .describe('Series-fed columns of patches; a column runs along +x and is fed at the small-x end.');
-
-const path = z
-  .strictObject({
-    loss: figure(
-      'level',
-      'Loss from the gain reference plane to the column.',
-      range(0, 30, 'the loss of a feed path', 'dB'),
-      { floor: 0 },
-    ).optional(),
-    line: z
-      .strictObject({ width: width('a line'), length: lineLength('a feed path') })
-      .describe('Microstrip on this stack-up; its loss is computed.')
-      .optional(),
-  })
-  .meta({
-    description: 'Path from the gain reference plane to a column: a loss, or a line.',
-    ...exactlyOne('loss', 'line'),
-  });
-
-const feed = z
-  .strictObject({
-    amplitude: z
-      .array(z.number().min(0).max(1e6).describe('Amplitude at a column, at least 0.'))
-      .min(1)
-      .max(MOST_COLUMNS)
-      .describe('Relative amplitude of the incident wave at each column; not all 0.'),
-    phase: z
-      .array(quantity('angle', 'Phase at a column.', range(-100, 100, 'a phase', 'deg')))
-      .min(1)
-      .max(MOST_COLUMNS)
-      .describe('Phase of the incident wave at each column. All 0 when left out.')
-      .optional(),
-    path: statement(
-      z
-        .union([path, z.array(path).min(1).max(MOST_COLUMNS).describe('One path per column.')])
-        .describe('Path from the gain reference plane to the columns: one for all, or a list.'),
-      { what: 'the feed path' },
-    ),
-  })
-  .describe('How the columns are driven.');
-
 const frequency = (what: string) => quantity('frequency', what, range(1e9, 300e9, 'the frequency of a board', 'GHz'));
 const temperature = (what: string) =>
   quantity('temperature', what, range(-100, 250, 'the temperature of a board', 'degC'));
@@ -225,8 +105,8 @@ export const boardDocument = z
       ])
       .describe('What reflections refer to: line, or a resistance.'),
     stack_up: stackUp,
-    array,
-    feed,
+    array: arrayDocument,
+    feed: feedDocument,
     tolerances: z
       .strictObject({
         etch: figure(

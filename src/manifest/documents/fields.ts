@@ -24,12 +24,23 @@ export interface Statement {
 }
 export const statements = z.registry<Statement>();
 
+/** Keys of a map that take the place of others: a variant that gives one does not inherit those it names. */
+export const replacements = z.registry<Readonly<Record<string, readonly string[]>>>();
+
 function leaf<S extends z.ZodType>(schema: S, info: Leaf): S {
   leaves.add(schema, info);
   return schema;
 }
 export function statement<S extends z.ZodType>(schema: S, info: Statement): S {
   statements.add(schema, info);
+  return schema;
+}
+
+export function replacing<S extends z.ZodType>(
+  schema: S,
+  keys: Readonly<Record<string, readonly (keyof z.infer<S> & string)[]>>,
+): S {
+  replacements.add(schema, keys);
   return schema;
 }
 

@@ -93,6 +93,12 @@ export const packDocument = z
           'Largest frequency step over the band.',
           range(1e6, 5e9, 'the frequency step', 'MHz'),
         ),
+        full_wave: z
+          .enum(['on', 'off'])
+          .describe(
+            'on (when left out): the full-wave engine solves every board at some frequencies of its band, and the figures of the network are corrected by it. off: the network alone, and wider uncertainty.',
+          )
+          .optional(),
       })
       .describe('How the boards are analysed.'),
   })

@@ -49,6 +49,11 @@ const requirement = z
       .enum(QUANTITY_NAMES as [(typeof QUANTITY_NAMES)[number], ...typeof QUANTITY_NAMES])
       .describe('What is compared with the limit.'),
     cut: z.enum(['azimuth', 'elevation']).describe('Principal cut, for quantities of the pattern.').optional(),
+    between: z
+      .array(id('A group of columns.'))
+      .length(2)
+      .describe('For isolation: two groups of columns by their ids. Any two different groups when left out.')
+      .optional(),
     limit: z
       .strictObject({ at_least: side('Lower limit.'), at_most: side('Upper limit.') })
       .meta({ description: 'Exactly one of at_least and at_most.', ...exactlyOne('at_least', 'at_most') })

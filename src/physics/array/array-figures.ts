@@ -6,7 +6,7 @@
  */
 import { abs2, type Complex, complex, div, ZERO } from '../../numerics/complex.js';
 import type { ColumnSolution, ExcitedArray } from '../column/index.js';
-import { type CutShape, cutShape, intensity } from '../pattern/index.js';
+import { type CutShape, climb, cutShape, intensity } from '../pattern/index.js';
 
 export interface ArrayFigures {
   /** Linear. */
@@ -56,7 +56,7 @@ export function arrayFigures(solution: ColumnSolution, incident: readonly Comple
   };
 }
 
-/** Maximum over the half space by a shrinking pattern search from the maxima of the principal cuts, to 1e-5 in u and v. */
+/** Maximum over the half space by a shrinking pattern search from the maxima of the principal cuts, to 1e-4 in u and v: 1e-5 of a wide board's intensity. */
 function peakIntensity(excited: ExcitedArray, u0: number, v0: number): number {
   const power = intensity(excited.field);
   let [u, v] = [u0, v0];
@@ -68,23 +68,7 @@ function peakIntensity(excited: ExcitedArray, u0: number, v0: number): number {
     const value = power(a, b);
     if (value > best) [best, u, v] = [value, a, b];
   }
-  for (let step = 0.02; step > 1e-5; ) {
-    let moved = false;
-    for (const [du, dv] of [
-      [step, 0],
-      [-step, 0],
-      [0, step],
-      [0, -step],
-    ]) {
-      const value = power(u + du, v + dv);
-      if (value > best) {
-        [best, u, v] = [value, u + du, v + dv];
-        moved = true;
-      }
-    }
-    if (!moved) step /= 2;
-  }
-  return best;
+  return climb(power, u, v, 0.02, 1e-4)[0];
 }
 
 /** Waves from amplitudes and phases (rad), scaled to one watt in all. */

@@ -1,196 +1,133 @@
 /**
- * Self and mutual admittances of all patch edges through the slab: uniform magnetic currents along y, each pair a line
- * integral of the potentials,
+ * Self and mutual admittances of the two edges of one patch through the slab: uniform magnetic currents along y, each
+ * pair a line integral of the potentials,
  *   Y = s_m s_n { jω ∫ C(v) F(r) dv + (1/jω) Σ ± M(r) },
  * C the overlap of the two widths, the sum over the charges at their ends. Of an edge on itself only the conductance is
- * taken: its susceptance is the open-end length of the line. Which distances occur depends on the layout alone and is
- * found once (`edgePlan`).
+ * taken: its susceptance is the open-end length of the line. Which distances occur depends on the layout alone, so each
+ * pair of pulses is a row of weights on the table of the potentials.
  */
-import type { ComplexMatrix } from '../../numerics/complex-lu.js';
 import { gaussLegendre } from '../../numerics/gauss-legendre.js';
 import type { RadiatingEdge } from './engine.js';
-import type { SlabKernel } from './slab-kernel.js';
-
-/** One combination of two pulse widths at an offset: quadrature distances with weights, and end-charge distances. */
-interface PulsePair {
-  readonly r: Float64Array;
-  readonly weight: Float64Array;
-  readonly chargeR: Float64Array;
-  readonly chargeSign: Float64Array;
-  readonly self: boolean;
-}
+import type { SlabIntegrals } from './slab-integrals.js';
+import { addWeight, type SlabPotentials } from './slab-potentials.js';
 
 export interface EdgePlan {
-  /** Distinct pulse pairs of the layout. */
-  readonly pairs: readonly PulsePair[];
-  /** For edges m ≥ n: indices into `pairs` for pulses (m0,n0), (m0,n1), (m1,n0), (m1,n1), −1 where a pulse is absent. */
+  /** Weights on r·F and r·M of the distinct pulse pairs. */
+  readonly pairs: readonly { readonly vector: Float64Array; readonly charge: Float64Array }[];
+  /** For each patch, edges (near, near), (near, far), (far, far): indices into `pairs` for pulses 00, 01, 10, 11; −1 where absent. */
   readonly index: Int32Array;
-  readonly count: number;
 }
 
 /** Positions closer than this are the same, m. */
 const GRAIN = 1e-10;
 
-export function edgePlan(edges: readonly RadiatingEdge[]): EdgePlan {
-  const count = edges.length;
-  const pairs: PulsePair[] = [];
+const EDGE_PAIRS = [
+  [0, 0],
+  [0, 1],
+  [1, 1],
+] as const;
+
+/** Largest distance between points of one patch's edges, m. */
+export function edgeReach(edges: readonly RadiatingEdge[]): number {
+  let reach = 0;
+  for (let m = 0; m < edges.length; m += 2)
+    reach = Math.max(
+      reach,
+      Math.hypot(edges[m].x - edges[m + 1].x, Math.max(...edges[m].pulses.map((p) => p.width), ...edges[m + 1].pulses.map((p) => p.width))),
+    );
+  return reach;
+}
+
+/** @param edges near and far edge of every patch in turn */
+export function edgePlan(edges: readonly RadiatingEdge[], integrals: SlabIntegrals): EdgePlan {
+  const pairs: EdgePlan['pairs'][number][] = [];
   const known = new Map<string, number>();
-  const index = new Int32Array(((count * (count + 1)) / 2) * 4).fill(-1);
-  for (let m = 0, q = 0; m < count; m++) {
-    for (let n = 0; n <= m; n++, q += 4) {
-      const dx = Math.round(Math.abs(edges[m].x - edges[n].x) / GRAIN);
-      const dy = Math.round(Math.abs(edges[m].y - edges[n].y) / GRAIN);
-      edges[m].pulses.forEach((a, i) => {
-        edges[n].pulses.forEach((b, k) => {
-          const [p, s] = [Math.round(a.width / GRAIN), Math.round(b.width / GRAIN)];
-          const key = `${Math.min(p, s)} ${Math.max(p, s)} ${dx} ${dy}`;
+  const index = new Int32Array(6 * edges.length).fill(-1);
+  for (let m = 0; m < edges.length; m += 2) {
+    const dx = Math.round(Math.abs(edges[m].x - edges[m + 1].x) / GRAIN);
+    EDGE_PAIRS.forEach(([i, j], which) => {
+      edges[m + i].pulses.forEach((a, s) => {
+        edges[m + j].pulses.forEach((b, t) => {
+          const apart = i === j ? 0 : dx;
+          const widths = [Math.round(a.width / GRAIN), Math.round(b.width / GRAIN)];
+          const key = `${Math.min(...widths)} ${Math.max(...widths)} ${apart}`;
           let found = known.get(key);
           if (found === undefined) {
             found = pairs.length;
             known.set(key, found);
-            pairs.push(pulsePair(a.width, b.width, dx * GRAIN, dy * GRAIN));
+            pairs.push(pulsePair(a.width, b.width, apart * GRAIN, integrals.distance));
           }
-          index[q + 2 * i + k] = found;
+          index[6 * m + 4 * which + 2 * s + t] = found;
         });
       });
-    }
+    });
   }
-  return { pairs, index, count };
+  return { pairs, index };
 }
 
-function pulsePair(a: number, b: number, dx: number, dy: number): PulsePair {
-  const self = dx === 0 && dy === 0;
+function pulsePair(a: number, b: number, dx: number, distance: Float64Array): EdgePlan['pairs'][number] {
   const outer = (a + b) / 2;
   const inner = Math.abs(a - b) / 2;
-  const height = Math.min(a, b);
-  const distance = Math.hypot(dx, dy);
-  // Smooth integrands: few points suffice once the edges are further apart than they are wide.
-  const order = distance > 4 * outer ? 3 : distance > 1.5 * outer ? 4 : 8;
-  const rule = gaussLegendre(order);
-  const r: number[] = [];
-  const weight: number[] = [];
-  const piece = (from: number, to: number, times: number): void => {
-    if (to - from < GRAIN) return;
-    for (let i = 0; i < order; i++) {
+  const rule = gaussLegendre(12);
+  const vector = new Float64Array(distance.length);
+  const charge = new Float64Array(distance.length);
+  // Mirror halves: offsets v and −v are the same distance.
+  for (const [from, to] of [
+    [0, inner],
+    [inner, outer],
+  ]) {
+    if (to - from < GRAIN) continue;
+    for (let i = 0; i < rule.nodes.length; i++) {
       const v = (from + to) / 2 + ((to - from) / 2) * rule.nodes[i];
-      const overlap = Math.abs(v) <= inner ? height : outer - Math.abs(v);
-      r.push(Math.hypot(dx, dy + v));
-      weight.push(((times * (to - from)) / 2) * rule.weights[i] * overlap);
+      const overlap = v <= inner ? Math.min(a, b) : outer - v;
+      addWeight(distance, Math.hypot(dx, v), (to - from) * rule.weights[i] * overlap, vector);
     }
-  };
-  // Mirror halves where there is no offset across.
-  if (dy === 0) {
-    piece(0, inner, 2);
-    piece(inner, outer, 2);
-  } else {
-    piece(-outer, -inner, 1);
-    piece(-inner, inner, 1);
-    piece(inner, outer, 1);
   }
-  const near = (a - b) / 2;
-  const offsets = [dy + near, dy - near, dy + outer, dy - outer];
-  return {
-    r: Float64Array.from(r),
-    weight: Float64Array.from(weight),
-    chargeR: Float64Array.from(offsets, (v) => Math.hypot(dx, v)),
-    chargeSign: Float64Array.of(1, 1, -1, -1),
-    self,
-  };
+  addWeight(distance, Math.hypot(dx, inner), 2, charge);
+  addWeight(distance, Math.hypot(dx, outer), -2, charge);
+  const last = Math.max(vector.findLastIndex((w) => w !== 0), charge.findLastIndex((w) => w !== 0));
+  return { vector: vector.slice(0, last + 1), charge: charge.slice(0, last + 1) };
 }
 
-/** Largest distance that the plan asks the kernel for, m. */
-export function planReach(plan: EdgePlan): number {
-  return plan.pairs.reduce((reach, pair) => Math.max(reach, ...pair.chargeR, ...pair.r), 0);
-}
-
+/** For each patch Y of (near, near), (near, far), (far, far), S; diagonal ones are real. */
 export interface EdgeAdmittance {
-  readonly n: number;
-  /** Full symmetric matrices, row-major: admittance and, apart, the conductances of all power and of the guided wave. */
   readonly re: Float64Array;
   readonly im: Float64Array;
-  readonly guided: Float64Array;
 }
 
-/** Fills the admittance matrix of all edges at the kernel's frequency, S. */
-export function edgeAdmittance(edges: readonly RadiatingEdge[], plan: EdgePlan, kernel: SlabKernel): EdgeAdmittance {
-  const n = plan.count;
-  const omega = kernel.spectrum.omega;
+export function edgeAdmittance(
+  edges: readonly RadiatingEdge[],
+  plan: EdgePlan,
+  slab: SlabPotentials,
+): EdgeAdmittance {
+  const { omega } = slab;
   const count = plan.pairs.length;
   const pr = new Float64Array(count);
   const pi = new Float64Array(count);
-  const pg = new Float64Array(count);
-  const value = new Float64Array(4);
-  const lossy = new Float64Array(4);
-  plan.pairs.forEach((pair, p) => {
-    let [re, im, guided] = [0, 0, 0];
-    for (let i = 0; i < pair.r.length; i++) {
-      kernel.evaluatePower(pair.r[i], lossy);
-      const w = pair.weight[i] * omega;
-      guided -= w * lossy[2];
-      if (pair.self) {
-        re -= w * lossy[0];
-        continue;
-      }
-      kernel.evaluate(pair.r[i], value);
-      re -= w * value[1];
-      im += w * value[0];
+  plan.pairs.forEach(({ vector, charge }, p) => {
+    let [fr, fi, mr, mi] = [0, 0, 0, 0];
+    for (let d = 0; d < vector.length; d++) {
+      fr += vector[d] * slab.re[2][d];
+      fi += vector[d] * slab.im[2][d];
+      mr += charge[d] * slab.re[3][d];
+      mi += charge[d] * slab.im[3][d];
     }
-    for (let i = 0; i < 4; i++) {
-      kernel.evaluatePower(pair.chargeR[i], lossy);
-      const w = pair.chargeSign[i] / omega;
-      guided += w * lossy[3];
-      if (pair.self) {
-        re += w * lossy[1];
-        continue;
-      }
-      kernel.evaluate(pair.chargeR[i], value);
-      re += w * value[3];
-      im -= w * value[2];
-    }
-    pr[p] = re;
-    pi[p] = im;
-    pg[p] = guided;
+    pr[p] = -omega * fi + mi / omega;
+    pi[p] = omega * fr - mr / omega;
   });
-  const result = { n, re: new Float64Array(n * n), im: new Float64Array(n * n), guided: new Float64Array(n * n) };
-  for (let m = 0, q = 0; m < n; m++) {
-    for (let k = 0; k <= m; k++, q += 4) {
-      let [re, im, guided] = [0, 0, 0];
-      for (let i = 0; i < edges[m].pulses.length; i++) {
-        for (let j = 0; j < edges[k].pulses.length; j++) {
-          const p = plan.index[q + 2 * i + j];
-          const d = edges[m].pulses[i].density * edges[k].pulses[j].density;
-          re += d * pr[p];
-          im += d * pi[p];
-          guided += d * pg[p];
+  const out = { re: new Float64Array((3 * edges.length) / 2), im: new Float64Array((3 * edges.length) / 2) };
+  for (let m = 0, q = 0; m < edges.length; m += 2) {
+    for (let which = 0; which < 3; which++, q++) {
+      const [a, b] = [edges[m + EDGE_PAIRS[which][0]], edges[m + EDGE_PAIRS[which][1]]];
+      for (let s = 0; s < a.pulses.length; s++) {
+        for (let t = 0; t < b.pulses.length; t++) {
+          const p = plan.index[6 * m + 4 * which + 2 * s + t];
+          const density = a.sign * b.sign * a.pulses[s].density * b.pulses[t].density;
+          out.re[q] += density * pr[p];
+          if (which === 1) out.im[q] += density * pi[p];
         }
       }
-      const sign = edges[m].sign * edges[k].sign;
-      result.re[m * n + k] = result.re[k * n + m] = sign * re;
-      result.im[m * n + k] = result.im[k * n + m] = sign * im;
-      result.guided[m * n + k] = result.guided[k * n + m] = sign * guided;
     }
   }
-  return result;
-}
-
-/** ½ V^H G V for a real symmetric G, W. */
-export function quadraticForm(matrix: Float64Array, n: number, re: Float64Array, im: Float64Array): number {
-  let sum = 0;
-  for (let m = 0; m < n; m++) {
-    let [r, i] = [0, 0];
-    for (let k = 0, q = m * n; k < n; k++, q++) {
-      r += matrix[q] * re[k];
-      i += matrix[q] * im[k];
-    }
-    sum += re[m] * r + im[m] * i;
-  }
-  return sum / 2;
-}
-
-/** Adds the edge admittances to a nodal matrix of the same order. */
-export function addTo(target: ComplexMatrix, source: EdgeAdmittance): void {
-  for (let q = 0; q < source.re.length; q++) {
-    target.re[q] += source.re[q];
-    target.im[q] += source.im[q];
-  }
+  return out;
 }

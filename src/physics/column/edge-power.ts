@@ -1,36 +1,25 @@
-/** Power of the excited edges in the guided wave of the slab, from the spectrum at the TM0 pole: a check on the circuit. */
+/** Power of the excited patches in the guided wave of the slab, from the spectrum at the TM0 pole: a check on the circuit. */
 import type { ExcitedEdges } from './engine.js';
+import { boardSpectrum } from './patch-field.js';
+import { patchReach } from './patch-currents.js';
 import { slabSpectrum } from './slab-spectrum.js';
 
-/** Largest extent of the edges, m: sets how finely the sphere must be sampled. */
-function extent(excited: ExcitedEdges): number {
-  const xs = excited.edges.map((e) => e.x);
-  const ys = excited.edges.map((e) => e.y);
-  const width = Math.max(...excited.edges.flatMap((e) => e.pulses.map((p) => p.width)));
-  return Math.hypot(Math.max(...xs) - Math.min(...xs), Math.max(...ys) - Math.min(...ys) + width);
-}
-
-/** Power in the TM0 wave of the slab, W: (ω R/16π) ∫ |M_φ(kp, φ)|² dφ with R the residue of F at the pole. */
-export function guidedWavePower(excited: ExcitedEdges): number {
-  const { omega, kp, residueF } = slabSpectrum(excited.frequency, excited.slab.permittivity, excited.slab.height);
-  const steps = 4 * Math.ceil((16 + 2 * kp * extent(excited)) / 4);
+/** Power in the TM0 wave of the slab, W: −(R/16πω) ∫ |kx J̃x(kp, φ)|² dφ with R the residue of G_q at the pole. */
+export function guidedWavePower({ currents }: ExcitedEdges): number {
+  const { patches } = currents;
+  const { omega, kp, residueQ } = slabSpectrum(
+    currents.frequency,
+    currents.slab.permittivity,
+    currents.slab.height,
+  );
+  const steps = 4 * Math.ceil((16 + 2 * kp * patchReach(patches)) / 4);
+  const current = new Float64Array(2);
   let sum = 0;
-  for (let p = 0; p < steps; p++) {
-    const phi = (2 * Math.PI * (p + 0.5)) / steps;
-    let [re, im] = [0, 0];
-    excited.edges.forEach((edge, m) => {
-      const ky = kp * Math.sin(phi);
-      let a = 0;
-      for (const pulse of edge.pulses) {
-        const x = (ky * pulse.width) / 2;
-        a += pulse.density * pulse.width * (x === 0 ? 1 : Math.sin(x) / x);
-      }
-      a *= edge.sign * Math.cos(phi);
-      const phase = kp * Math.cos(phi) * edge.x + ky * edge.y;
-      re += a * (excited.re[m] * Math.cos(phase) - excited.im[m] * Math.sin(phase));
-      im += a * (excited.re[m] * Math.sin(phase) + excited.im[m] * Math.cos(phase));
-    });
-    sum += re * re + im * im;
+  for (let step = 0; step < steps; step++) {
+    const phi = (2 * Math.PI * (step + 0.5)) / steps;
+    const kx = kp * Math.cos(phi);
+    boardSpectrum(currents, kx, kp * Math.sin(phi), current);
+    sum += kx * kx * (current[0] * current[0] + current[1] * current[1]);
   }
-  return ((omega * residueF) / (16 * Math.PI)) * sum * ((2 * Math.PI) / steps);
+  return (-residueQ / (16 * Math.PI * omega)) * sum * ((2 * Math.PI) / steps);
 }

@@ -91,10 +91,43 @@ export interface FarField {
   cut(plane: 'azimuth' | 'elevation'): (angle: number) => number;
 }
 
-/** Radiating edges with their voltages: all that pattern and power need. */
+/** A patch as seen by its neighbours: number of column and patch, centre, length along x and width along y, m. */
+export interface MacroPatch {
+  readonly column: number;
+  readonly patch: number;
+  readonly x: number;
+  readonly y: number;
+  readonly length: number;
+  readonly width: number;
+  readonly lines: readonly AttachedLine[];
+}
+
+/** The part of a line's current that goes with the patch at its end. */
+export interface AttachedLine {
+  /** Of the patch that it leaves from: +1 at the large-x edge. */
+  readonly side: 1 | -1;
+  readonly width: number;
+  /** To the next patch, or half a wavelength, m. */
+  readonly length: number;
+  /** Crest of its current over that of the patch's. */
+  readonly share: number;
+}
+
+/** Patches with the amplitude of their macro currents: all that pattern and guided wave need. */
+export interface ExcitedPatches {
+  readonly frequency: number;
+  readonly slab: Slab;
+  readonly patches: readonly MacroPatch[];
+  /** Total current in the middle of each patch, A. */
+  readonly re: Float64Array;
+  readonly im: Float64Array;
+}
+
+/** The network's radiating edges with their voltages, and the currents that stand for them outside their patch. */
 export interface ExcitedEdges {
   readonly frequency: number;
   readonly slab: Slab;
+  readonly currents: ExcitedPatches;
   readonly edges: readonly RadiatingEdge[];
   /** Voltage of each edge, V. */
   readonly re: Float64Array;

@@ -7,13 +7,15 @@ export type {
   ColumnSolution,
   ExcitedArray,
   ExcitedEdges,
+  ExcitedPatches,
   FarField,
   LineSection,
+  MacroPatch,
   PowerBudget,
   RadiatingEdge,
   Slab,
   SolverEffort,
 } from './engine.js';
 export { edgeNetwork } from './network.js';
-export { NETWORK_CONSTANTS } from './network-constants.js';
+export { NETWORK_CONSTANTS, type NetworkConstants } from './network-constants.js';
 export { slabGuidesOneWave, slabSpectrum, tm0Wavenumber } from './slab-spectrum.js';

@@ -2,7 +2,7 @@
  * What happens where a narrow line meets the edge of a wide patch: corrections 1 and 3 of the edge network.
  */
 import { ETA0, MU0, SPEED_OF_LIGHT } from '../constants.js';
-import { NETWORK_CONSTANTS } from './network-constants.js';
+import type { NetworkConstants } from './network-constants.js';
 
 /** Width of the parallel-plate line of the same impedance and permittivity, m: η0 h/(Zc √εeff). */
 export function effectiveWidth(height: number, impedance: number, effectivePermittivity: number): number {
@@ -21,10 +21,11 @@ export function stepReactance(
   patchEffectiveWidth: number,
   patchEffectivePermittivity: number,
   lineEffectiveWidth: number,
+  constants: NetworkConstants,
 ): number {
   const omega = 2 * Math.PI * frequency;
   const k0 = omega / SPEED_OF_LIGHT;
-  const cavity = patchWidth + NETWORK_CONSTANTS.cavityWidening * (patchEffectiveWidth - patchWidth);
+  const cavity = patchWidth + constants.cavityWidening * (patchEffectiveWidth - patchWidth);
   let sum = 0;
   for (let n = 2; n <= 12; n += 2) {
     const transverse = (n * Math.PI) / cavity;
@@ -35,7 +36,7 @@ export function stepReactance(
     const sinc = a === 0 ? 1 : Math.sin(a) / a;
     sum += ((2 * omega * MU0 * height) / (Math.sqrt(gamma2) * cavity)) * sinc * sinc;
   }
-  return NETWORK_CONSTANTS.stepReactance * sum;
+  return constants.stepReactance * sum;
 }
 
 /**
@@ -52,8 +53,9 @@ export function edgeSusceptance(
   beta: number,
   impedance: number,
   coverage: number,
+  constants: NetworkConstants,
 ): number {
-  const open = NETWORK_CONSTANTS.openEnd * openEnd + thick;
-  const length = open * (1 - NETWORK_CONSTANTS.coveredSusceptance * coverage);
+  const open = constants.openEnd * openEnd + thick;
+  const length = open * (1 - constants.coveredSusceptance * coverage);
   return Math.tan(beta * length) / impedance;
 }

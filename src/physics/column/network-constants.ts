@@ -3,7 +3,23 @@
  * full-wave solutions of isolated patches and one-patch two-ports (never columns), and stated to hold in `range`.
  * They are to be derived anew from this project's own full wave once it has one.
  */
-export const NETWORK_CONSTANTS = {
+export interface NetworkConstants {
+  readonly source: string;
+  readonly stepReactance: number;
+  readonly cavityWidening: number;
+  readonly edgeMoment: number;
+  readonly coveredMoment: number;
+  readonly openEnd: number;
+  readonly coveredSusceptance: number;
+  readonly range: {
+    readonly electricalHeight: readonly [number, number];
+    readonly permittivity: readonly [number, number];
+    readonly patchWidth: readonly [number, number];
+    readonly lineWidthOverHeight: readonly [number, number];
+  };
+}
+
+export const NETWORK_CONSTANTS: NetworkConstants = {
   source: 'fit to independent full-wave solutions of single patches and one-patch two-ports, 71 to 83 GHz, 2026',
   /** Step reactance over that of the planar-cavity sum of higher modes. */
   stepReactance: 0.59,
@@ -29,4 +45,4 @@ export const NETWORK_CONSTANTS = {
     /** w/h of feed line and links */
     lineWidthOverHeight: [0.6, 1.7],
   },
-} as const;
+};

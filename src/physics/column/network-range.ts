@@ -2,12 +2,12 @@
 import { SPEED_OF_LIGHT } from '../constants.js';
 import type { ValidityFlag } from '../validity.js';
 import type { ColumnProblem } from './engine.js';
-import { NETWORK_CONSTANTS } from './network-constants.js';
+import type { NetworkConstants } from './network-constants.js';
 
 const MODEL = 'edge network of the patch columns';
 
-export function networkFlags(problem: ColumnProblem, frequency: number): ValidityFlag[] {
-  const { range } = NETWORK_CONSTANTS;
+export function networkFlags(problem: ColumnProblem, frequency: number, constants: NetworkConstants): ValidityFlag[] {
+  const { range } = constants;
   const { slab, columns } = problem;
   const flags: ValidityFlag[] = [];
   const check = (code: string, what: string, values: readonly number[], limits: readonly [number, number]): void => {

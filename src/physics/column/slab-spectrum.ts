@@ -18,6 +18,8 @@ export interface SlabSpectrum {
   /** lim (k² − kp²) F at the pole; that of M is ω²/kp² times it. */
   readonly residueF: number;
   readonly residueM: number;
+  /** The same of G_q, the scalar potential of electric charge on top of the slab. */
+  readonly residueQ: number;
   /** F and M less their infinite-slab terms at real k: out = [Re F, Im F, Re M, Im M]. */
   remainder(k: number, out: Float64Array): void;
 }
@@ -39,6 +41,9 @@ export function slabSpectrum(frequency: number, permittivity: number, height: nu
   const tan = Math.tan(beta * height);
   const slope = (permittivity * kp) / u0 + (kp / beta) * (tan + beta * height * (1 + tan * tan));
   const residueF = (2 * kp * EPS0 * permittivity * (1 + (permittivity * u0 * tan) / beta)) / slope;
+  // G_q = u0 u1 t/(ε0 k² (u1 t + εr u0)) less a TE part without pole; u1 t = −β tan βh = −εr u0 there, and the
+  // denominator's slope in k is that of F: d(εr u0 + u1 t)/dk².
+  const residueQ = (-2 * u0 * u0 * permittivity) / (EPS0 * kp * slope);
   const er = permittivity;
   const e1 = EPS0 * er;
 
@@ -78,7 +83,7 @@ export function slabSpectrum(frequency: number, permittivity: number, height: nu
     out[3] = evanescent ? mi : mi + 1 / (MU0 * v);
   }
 
-  return { omega, k0, k1, kp, residueF, residueM: (residueF * omega * omega) / (kp * kp), remainder };
+  return { omega, k0, k1, kp, residueF, residueM: (residueF * omega * omega) / (kp * kp), residueQ, remainder };
 }
 
 /** Whether TM0 alone propagates on the slab: k0 h √(εr − 1) < π/2. */

@@ -1,56 +1,12 @@
 import { describe, expect, it } from 'vitest';
-import { edgeField } from '../../../src/physics/column/edge-field.js';
-import type { ExcitedEdges } from '../../../src/physics/column/index.js';
-import { cutShape, intensity } from '../../../src/physics/pattern/index.js';
+import { cutShape } from '../../../src/physics/pattern/index.js';
+import { row } from './point-sources.js';
 
-const edges: ExcitedEdges = {
-  frequency: 77e9,
-  slab: { permittivity: 3, lossTangent: 0, height: 127e-6 },
-  edges: [
-    {
-      column: 0,
-      patch: 0,
-      x: -0.5e-3,
-      y: 0,
-      sign: -1,
-      pulses: [
-        { width: 1e-3, density: 1 },
-        { width: 0.2e-3, density: -0.7 },
-      ],
-    },
-    { column: 0, patch: 0, x: 0.5e-3, y: 0, sign: 1, pulses: [{ width: 1e-3, density: 1 }] },
-    { column: 1, patch: 0, x: 0.5e-3, y: 2e-3, sign: 1, pulses: [{ width: 1.1e-3, density: 0.9 }] },
-  ],
-  re: Float64Array.of(-1, 0.9, 0.4),
-  im: Float64Array.of(0.1, 0.05, -0.3),
-};
-
-describe('pattern of edges', () => {
-  it('is one function seen in two cuts', () => {
-    const whole = intensity(edgeField(edges));
-    const [el, az] = [edgeField(edges).cut('elevation'), edgeField(edges).cut('azimuth')];
-    for (const angle of [-1.2, -0.4, 0, 0.3, 1.1]) {
-      expect(el(angle)).toBeCloseTo(whole(Math.sin(angle), 0), 12);
-      expect(az(angle)).toBeCloseTo(whole(0, Math.sin(angle)), 12);
-    }
-  });
-
-  it('vanishes at the horizon and beyond', () => {
-    const whole = intensity(edgeField(edges));
-    expect(whole(1, 0)).toBe(0);
-    expect(whole(0.8, 0.7)).toBe(0);
-  });
-
+describe('sense of angles', () => {
   it('tilts towards +x when the phase lags along +x', () => {
     // e^{+jωt}: later phase further along +x sends the wave towards +x.
-    const lag = (phase: number): ExcitedEdges => ({
-      ...edges,
-      edges: [0, 1, 2, 3].map((i) => ({ ...edges.edges[1], x: i * 2e-3, sign: 1 as const })),
-      re: Float64Array.from([0, 1, 2, 3], (i) => Math.cos(-i * phase)),
-      im: Float64Array.from([0, 1, 2, 3], (i) => Math.sin(-i * phase)),
-    });
-    expect(cutShape(edgeField(lag(0.5)).cut('elevation')).beamDirection).toBeGreaterThan(0.05);
-    expect(cutShape(edgeField(lag(-0.5)).cut('elevation')).beamDirection).toBeLessThan(-0.05);
+    expect(cutShape(row(4, 0.5, 0.5).cut('elevation')).beamDirection).toBeGreaterThan(0.05);
+    expect(cutShape(row(4, 0.5, -0.5).cut('elevation')).beamDirection).toBeLessThan(-0.05);
   });
 });
 

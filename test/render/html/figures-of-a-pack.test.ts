@@ -33,6 +33,7 @@ function axesOf({ content }: FigureBlock): string[] {
 function labelsOf({ content }: FigureBlock): string[] {
   if ('drawing' in content) {
     if (content.drawing === 'stack-up') return content.layers.map(({ label }) => label);
+    if (content.drawing === 'matrix') return [`${content.rowTitle} ↓`, `${content.columnTitle} →`, ...content.labels];
     return content.drawing === 'array' ? content.columns.map((c) => c.label) : content.faces.map((f) => f.label);
   }
   if (content.chart === 'budget') return [content.start, ...content.losses, content.end].map(({ label }) => label);
@@ -42,7 +43,7 @@ function labelsOf({ content }: FigureBlock): string[] {
 describe('pictures of a pack', () => {
   it('are of every kind', () => {
     const kinds = figures.map(([, , { content }]) => ('chart' in content ? content.chart : content.drawing));
-    expect(new Set(kinds)).toEqual(new Set(['stack-up', 'array', 'tooth', 'budget', 'cut', 'lines']));
+    expect(new Set(kinds)).toEqual(new Set(['stack-up', 'array', 'matrix', 'tooth', 'budget', 'cut', 'lines']));
   });
 
   it.each(figures)(

@@ -1,0 +1,84 @@
+/** What a board keeps for all frequencies: its metal on the grid, ports, blocks, and prepared reactions. */
+import { SPEED_OF_LIGHT } from '../constants.js';
+import { microstripLine } from '../line/index.js';
+import { type Block, cutBlocks } from './blocks.js';
+import { edgeTrim } from './edge-trim.js';
+import { chooseGrid } from './grid.js';
+import { drawMesh, type Mesh } from './mesh.js';
+import { outlineOf } from './outline.js';
+import { type MeshPort, meshPort } from './port-waves.js';
+import type { FullWaveProblem, FullWaveSettings } from './problem.js';
+import { reactionProduct } from './reaction-product.js';
+import type { SlabMedium } from './slab-medium.js';
+import { type PreparedReactions, prepareReactions } from './slab-reactions.js';
+import { drawnSquares } from './strip-sheet.js';
+
+export interface BoardSetup {
+  readonly mesh: Mesh;
+  readonly ports: readonly MeshPort[];
+  readonly driven: number;
+  readonly blocks: readonly Block[];
+  readonly reactions: PreparedReactions;
+  readonly product: ReturnType<typeof reactionProduct>;
+  /** Of each rectangle: ∫J²/(∫J)² of its drawn current, 1/m. */
+  readonly squares: readonly number[];
+}
+
+/** Cells by which the blocks of the preconditioner reach into each other. */
+const OVERLAP = 4;
+/** Slab heights from gap and patch within which a feed line's current is not its wave's alone. */
+const CLEAR = 2.5;
+/** Guided wavelengths of feed line that are read, and of stub behind the gap. */
+const READ = 0.55;
+const STUB = 0.3;
+
+export function setUpBoard(
+  problem: FullWaveProblem,
+  band: { readonly low: number; readonly high: number },
+  settings: FullWaveSettings,
+): BoardSetup {
+  const { columns, slab } = problem;
+  const zero = { re: 0, im: 0 };
+  const feedLine = microstripLine({
+    geometry: {
+      width: columns[0].feedLineWidth,
+      height: slab.height,
+      thickness: 0,
+      permittivity: slab.permittivity,
+    },
+    frequency: Math.sqrt(band.low * band.high),
+    lossTangent: 0,
+    faces: { underside: zero, top: zero, edges: zero, ground: zero },
+  });
+  const wavelength = SPEED_OF_LIGHT / (Math.sqrt(band.low * band.high) * Math.sqrt(feedLine.effectivePermittivity));
+  const clear = CLEAR * slab.height;
+  const outline = outlineOf(columns, { run: 2 * clear + READ * wavelength, stub: STUB * wavelength });
+  const grid = chooseGrid(columns, outline.rectangles, settings.cellsPerPatch ?? 17, settings.cellsPerLine ?? 2);
+  const mesh = drawMesh(outline.rectangles, grid);
+  return {
+    mesh,
+    ports: outline.ports.map((line) => meshPort(mesh, line, clear)),
+    driven: outline.ports.filter((p) => !p.terminated).length,
+    blocks: cutBlocks(mesh, OVERLAP),
+    reactions: prepareReactions({ dx: grid.dx, dy: grid.dy, nx: mesh.nx, ny: mesh.ny }, band, mediumOf(problem, slab)),
+    product: reactionProduct(mesh),
+    squares: mesh.rectangles.map(({ metal, i0, i1, j0, j1, inwards }) => {
+      const acrossX = metal.kind === 'feed' && Math.abs(metal.y1 - metal.y0 - metal.width) > 1e-9;
+      return acrossX
+        ? drawnSquares(i1 - i0, grid.dx, slab.height, [edgeTrim(inwards.x0), edgeTrim(inwards.x1)])
+        : drawnSquares(j1 - j0, grid.dy, slab.height, [edgeTrim(inwards.y0), edgeTrim(inwards.y1)]);
+    }),
+  };
+}
+
+export const mediumOf = (
+  problem: FullWaveProblem,
+  slab: FullWaveProblem['slab'],
+  groundImpedance: SlabMedium['groundImpedance'] = { re: 0, im: 0 },
+): SlabMedium => ({
+  permittivity: slab.permittivity,
+  lossTangent: slab.lossTangent,
+  height: slab.height,
+  groundImpedance,
+  ...(problem.cover && { cover: problem.cover }),
+});

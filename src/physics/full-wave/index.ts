@@ -1,0 +1,2 @@
+export { fullWave } from './full-wave.js';
+export type { FullWaveProblem, FullWaveSettings } from './problem.js';

@@ -1,0 +1,97 @@
+/** Closed forms from which sizing starts, and which tie a patch's length to its width throughout. */
+import { SPEED_OF_LIGHT } from '../constants.js';
+import type { ColumnGeometry } from '../column/index.js';
+import { microstripDispersive, openEndExtension } from '../line/index.js';
+import type { SizingRequest } from './request.js';
+
+/** Where a search begins. */
+export interface ColumnGuess {
+  /** Of a patch of amplitude 1, m. */
+  readonly unitWidth: number;
+  /** Patch length over the resonant one. */
+  readonly lengthFactor: number;
+  /** Link length in half waves over the place along the column, 0 to 1. */
+  link(place: number): number;
+}
+
+/** The attached lines raise a patch's resonance by a few per cent: its length makes up for it. */
+export const firstGuess = (request: SizingRequest, amplitudes: readonly number[]): ColumnGuess => ({
+  unitWidth: startingWidth(request, amplitudes),
+  lengthFactor: 1.03,
+  link: () => 1,
+});
+
+/**
+ * From a shorter column that is sized already: its length factor, its links by their place, and its widths over their
+ * amplitudes, narrower as more patches share the match.
+ */
+export function guessFrom(
+  request: SizingRequest,
+  amplitudes: readonly number[],
+  shorter: ColumnGeometry,
+  itsAmplitudes: readonly number[],
+): ColumnGuess {
+  const { patches, links } = shorter;
+  const half = halfWave(request, links[0].width);
+  const mean = (values: readonly number[]): number => values.reduce((a, b) => a + b, 0) / values.length;
+  const squares = (values: readonly number[]): number => values.reduce((sum, a) => sum + a * a, 0);
+  const widest = patches.map((p, i) => [p.width, itsAmplitudes[i]]).sort((a, b) => b[1] - a[1])[0];
+  return {
+    unitWidth: (widest[0] / widest[1]) * Math.sqrt(squares(itsAmplitudes) / squares(amplitudes)),
+    lengthFactor: mean(patches.map((p) => p.length / resonantLength(request, p.width))),
+    link: (place) => {
+      const at = Math.min(Math.max(place * links.length - 0.5, 0), links.length - 1);
+      const i = Math.min(Math.floor(at), Math.max(links.length - 2, 0));
+      const next = links[Math.min(i + 1, links.length - 1)];
+      return (links[i].length + (at - i) * (next.length - links[i].length)) / half;
+    },
+  };
+}
+
+/** Amplitudes of a column of half as many patches, read off along those of the long one. */
+export function halved(amplitudes: readonly number[]): number[] {
+  const [n, m] = [amplitudes.length, Math.ceil(amplitudes.length / 2)];
+  const read = Array.from({ length: m }, (_, i) => {
+    const at = ((i + 0.5) * n) / m - 0.5;
+    const low = Math.floor(at);
+    const high = Math.min(low + 1, n - 1);
+    return amplitudes[low] + (at - low) * (amplitudes[high] - amplitudes[low]);
+  });
+  const largest = Math.max(...read);
+  return read.map((a) => a / largest);
+}
+
+/** Half a guided wave less two open ends, m: resonant length of a patch of this width. */
+export function resonantLength(request: SizingRequest, width: number): number {
+  const { slab, stripThickness: thickness, frequency } = request;
+  const geometry = { width, height: slab.height, thickness, permittivity: slab.permittivity };
+  const { effectivePermittivity } = microstripDispersive(geometry, frequency);
+  const open = openEndExtension({ ...geometry, thickness: 0 }, frequency);
+  return SPEED_OF_LIGHT / (2 * frequency * Math.sqrt(effectivePermittivity)) - 2 * open;
+}
+
+/** Half a guided wave on a line of this width, m. */
+export function halfWave(request: SizingRequest, width: number): number {
+  const { slab, stripThickness: thickness, frequency } = request;
+  const { effectivePermittivity } = microstripDispersive(
+    { width, height: slab.height, thickness, permittivity: slab.permittivity },
+    frequency,
+  );
+  return SPEED_OF_LIGHT / (2 * frequency * Math.sqrt(effectivePermittivity));
+}
+
+/**
+ * Width of a patch of amplitude 1, m, for which the edge resistances of all patches in parallel are the line's impedance:
+ * R = 90 Ω εr²/(εr − 1) (L/W)² (textbooks after Munson 1974; good to some tens of per cent, a start only).
+ */
+function startingWidth(request: SizingRequest, amplitudes: readonly number[]): number {
+  const { slab, stripThickness: thickness, frequency, feedLineWidth } = request;
+  const { impedance } = microstripDispersive(
+    { width: feedLineWidth, height: slab.height, thickness, permittivity: slab.permittivity },
+    frequency,
+  );
+  const er = slab.permittivity;
+  const squares = amplitudes.reduce((sum, a) => sum + a * a, 0);
+  const length = resonantLength(request, SPEED_OF_LIGHT / (3 * frequency));
+  return length * Math.sqrt((90 * er * er) / (er - 1) / (impedance * squares));
+}

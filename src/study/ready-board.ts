@@ -1,0 +1,7 @@
+/** A board as it is to be studied: what its manifest leaves to be worked out is worked out once, before anything else. */
+import type { Analysis, Board } from '../manifest/model.js';
+import { retuneBoard } from './retune.js';
+
+export const asksToBeReadied = ({ retune }: Board): boolean => retune !== undefined;
+
+export const readyBoard = (board: Board, analysis: Analysis): Board => retuneBoard(board, analysis);
