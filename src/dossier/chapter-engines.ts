@@ -11,7 +11,7 @@ import { excitationBlocks } from './excitation.js';
 import { micrometres } from './figures.js';
 import { boardPage, EVIDENCE, link } from './links.js';
 import { ENGINE_LIMITS } from './statements.js';
-import { count, GAP, gigahertz, powerAbove, valueText } from './values.js';
+import { GAP, gigahertz, powerAbove, valueText } from './values.js';
 
 const figureValue = (value: number, { unit }: ComparedFigure): string => {
   if (!Number.isFinite(value)) return DASH;
@@ -102,20 +102,20 @@ export function enginesChapter(context: BoardContext): Chapter {
     const words =
       study.nominal.points.length === 0
         ? 'Neither engine gave figures of the columns of this board.'
-        : 'Sweeps, tolerances and allowances rest on the fast engine (network) alone. The uncertainty of every figure of the columns therefore carries what that engine was found to be off on other boards, widened, as its part under ';
+        : 'Sweeps, tolerances and allowances rest on the fast engine (network) alone. The uncertainty of every figure of the columns therefore carries what that engine was found to be off on other boards, widened: see its parts under ';
     return chapter(
       'engines',
       'Two engines',
       prose(
         { strong: 'Network only. ' },
-        `The full wave did not run: ${confirmation.reason}. `,
+        `Reason: ${confirmation.reason}. `,
         words,
         ...(study.nominal.points.length === 0 ? [] : [link('Uncertainty', boardPage(board.id), 'uncertainty'), '.']),
       ),
       ...limits(),
     );
   }
-  const { points, flags, alignment } = confirmation;
+  const { points, flags, alignment, carriedFrom } = confirmation;
   return chapter(
     'engines',
     'Two engines',
@@ -124,6 +124,9 @@ export function enginesChapter(context: BoardContext): Chapter {
       link('Evidence', EVIDENCE, 'engine-accuracy'),
       '.',
     ),
+    ...(carriedFrom === undefined
+      ? []
+      : [prose(`The full wave did not run on this state of the board: the differences are those of ${carriedFrom}.`)]),
     prose(
       { strong: 'How far the fast engine can be trusted on this board. ' },
       trustSentences(board, points).join(' '),
@@ -132,7 +135,6 @@ export function enginesChapter(context: BoardContext): Chapter {
       'engine-facts',
       ['Compared at', points.map(({ frequency }) => gigahertz(frequency)).join(', ')],
       ['Shift in frequency that best aligns the reflections', alignmentText(alignment)],
-      ['Largest part of the board', count(Math.max(...points.map(({ effort }) => effort.unknowns)), 'unknown')],
     ),
     comparisonTable(board, points),
     ...engineCuts(board, points),

@@ -3,7 +3,7 @@ import { cell, chapter, number, prose, table } from './blocks.js';
 import type { BoardContext, Judged } from './context.js';
 import type { Block, Cell, Chapter } from './document.js';
 import { figureTextByPath } from './figures.js';
-import { DEFINITIONS, EVIDENCE, link } from './links.js';
+import { boardPage, DEFINITIONS, EVIDENCE, link } from './links.js';
 import { sideTitle } from './model-words.js';
 import { changeText, marginText, valueText } from './values.js';
 
@@ -49,7 +49,9 @@ export function uncertaintyChapter(context: BoardContext): Chapter {
     'uncertainty',
     'Uncertainty',
     prose(
-      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread from the low to the high estimate of the copper’s texture is added linearly, because it is no random error. Every tolerance is moved alone to both its limits under every estimate, and its largest effect counts. The rule stands under ',
+      'Each part says how much smaller (against) or larger (for) the margin may be. Engine accuracy and tolerances are added by root sum of squares; the spread from the low to the high estimate of the copper’s texture is added linearly, because it is no random error. Every tolerance is moved alone to both its limits under every estimate, and its largest effect counts. Figures of columns have the accuracy of the full wave where it ran on the board, with what carrying its differences to other frequencies and states leaves open; without it they have that of the network, widened: see ',
+      link('Two engines', boardPage(context.board.id), 'engines'),
+      '. The rule stands under ',
       link('Definitions', DEFINITIONS, 'uncertainty-rule'),
       ', the engine accuracy with its sources under ',
       link('Evidence', EVIDENCE, 'engine-accuracy'),

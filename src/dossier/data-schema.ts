@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { complexValue, confirmation, cutFigures, matrix } from './confirmation-schema.js';
 
 /**
  * Shape of the JSON data of a pack: the one source of the TypeScript types, of the check before writing and of the JSON
@@ -161,12 +162,6 @@ export const packDataSchema = z
   })
   .describe('Verdicts of a pack of boards: calculated design evidence, not a declaration of conformity');
 
-const complexValue = z.strictObject({ re: value, im: value });
-const cutFigures = z.strictObject({
-  beamDirectionRad: value,
-  halfPowerBeamwidthRad: value,
-  sidelobeDb: value,
-});
 const cut = z.strictObject({ angleRad: z.array(z.number()), gainDbi: z.array(value) });
 
 const point = z.strictObject({
@@ -186,6 +181,11 @@ const point = z.strictObject({
   azimuth: cutFigures,
   powerResidual: value.describe('power of ten above the residual of the circuit, over the input power'),
   farFieldClosure: value,
+  scattering: matrix.optional(),
+  feed: z
+    .strictObject({ inputReflection: complexValue, transmission: value, burnt: value })
+    .optional()
+    .describe('feed network at its input; transmission and burnt power over the power accepted there'),
 });
 
 const linePoint = z.strictObject({
@@ -281,6 +281,11 @@ export const boardDataSchema = z
     flags: z.array(z.strictObject({ code: text, severity: text, model: text, text })),
     notEvaluated: z.array(z.strictObject({ quantities: z.array(text), reason: text })),
     losslessClosure: value,
+    confirmation: confirmation.describe('how the figures of the columns are confirmed'),
+    sizing: z
+      .strictObject({ by: z.enum(['network', 'full wave']), networkReflectionDb: value, fullWaveReflectionDb: value })
+      .optional()
+      .describe('where the columns were sized by the program: reflection at the frequency asked for'),
     verdicts: z.array(verdict),
   })
   .describe('Results of one board: calculated design evidence, not a declaration of conformity');

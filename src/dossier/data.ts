@@ -1,8 +1,6 @@
 import type { Board, Requirement } from '../manifest/model.js';
-import type { Complex } from '../numerics/complex.js';
 import type {
   Cut,
-  CutFigures,
   FaceFigures,
   FaceState,
   LineLossByFace,
@@ -12,6 +10,7 @@ import type {
   SlowWave,
 } from '../study/results.js';
 import { type BoardVerdict, quantityOf, type RequirementVerdict } from '../verdict/index.js';
+import { confirmationData } from './confirmation-data.js';
 import { type BoardContext, bandPoints, boardContexts, markingOf, noticesOf, type PackInput } from './context.js';
 import {
   type BoardData,
@@ -22,21 +21,10 @@ import {
   packDataSchema,
   type VerdictData,
 } from './data-schema.js';
+import { complexData, cutFiguresData as figuresData, matrixData, maybe, num } from './data-values.js';
 import { boardData as boardPath, PACK_DATA } from './links.js';
 import { exponentAbove } from './values.js';
 
-const DIGITS = 12;
-
-/** 12 significant digits: more than any figure here deserves, fewer than differ between engines of the language. */
-const num = (x: number): number => Number(x.toPrecision(DIGITS));
-const maybe = (x: number | undefined): number | null => (x === undefined || !Number.isFinite(x) ? null : num(x));
-
-const complexData = ({ re, im }: Complex) => ({ re: maybe(re), im: maybe(im) });
-const figuresData = (f: CutFigures) => ({
-  beamDirectionRad: maybe(f.beamDirection),
-  halfPowerBeamwidthRad: maybe(f.halfPowerBeamwidth),
-  sidelobeDb: maybe(f.sidelobeDb),
-});
 const cutData = (c: Cut) => ({ angleRad: Array.from(c.angle, num), gainDbi: Array.from(c.gainDbi, maybe) });
 const curvesData = ({ x, curves, band }: ModelCurves) => ({
   x: x.map(num),
@@ -120,7 +108,23 @@ const pointData = (p: PointResult): PointData => ({
   azimuth: figuresData(p.azimuth),
   powerResidual: Number.isFinite(p.powerResidual) ? num(10 ** exponentAbove(p.powerResidual)) : null,
   farFieldClosure: maybe(p.farFieldClosure),
+  ...(p.scattering === undefined ? {} : { scattering: matrixData(p.scattering) }),
+  ...(p.feed === undefined
+    ? {}
+    : {
+        feed: {
+          inputReflection: complexData(p.feed.inputReflection),
+          transmission: maybe(p.feed.transmission),
+          burnt: maybe(p.feed.burnt),
+        },
+      }),
 });
+
+function sizingData({ sized }: Board): Pick<BoardData, 'sizing'> {
+  if (sized === undefined || 'reason' in sized) return {};
+  const { by, networkDb, fullWaveDb } = sized;
+  return { sizing: { by, networkReflectionDb: maybe(networkDb), fullWaveReflectionDb: maybe(fullWaveDb) } };
+}
 
 const verdictData = (boardId: string, v: RequirementVerdict): VerdictData => ({
   boardId,
@@ -231,6 +235,8 @@ function boardData(context: BoardContext): BoardData {
     flags: study.flags.map(({ code, severity, model, text }) => ({ code, severity, model, text })),
     notEvaluated: study.notEvaluated.map(({ quantities, reason }) => ({ quantities: [...quantities], reason })),
     losslessClosure: maybe(study.losslessClosure),
+    confirmation: confirmationData(study.confirmation),
+    ...sizingData(board),
     verdicts: verdictsData(verdict),
   };
 }

@@ -6,7 +6,7 @@ import { type PackInput, page } from './context.js';
 import type { Chapter, DocumentPage } from './document.js';
 import { DEFINITIONS, EVIDENCE, link } from './links.js';
 import { MODEL_WORDS } from './model-words.js';
-import { NOT_MODELLED } from './statements.js';
+import { ENGINE_LIMITS, NOT_MODELLED } from './statements.js';
 
 const gain = (): Chapter =>
   chapter(
@@ -44,12 +44,42 @@ const reflection = (): Chapter =>
     ]),
   );
 
+const engines = (): Chapter =>
+  chapter(
+    'engines',
+    'Two engines, and what network only means',
+    list([
+      [
+        'Network: the columns as lines, steps and radiating edges in one circuit. A frequency takes milliseconds, so sweeps, temperatures, tolerances and allowances are solved by it.',
+      ],
+      [
+        'Full wave: the currents on all metal of the columns, solved on the laminate with its surface wave. It runs in the nominal state of a board at the band edges and the band centre, and at further frequencies where a figure is near its limit.',
+      ],
+      [
+        'Where the full wave ran, its value is the nominal figure. What the engines differ by is carried to other frequencies and states: reflections after the shift in frequency that best aligns them, all else along straight lines.',
+      ],
+      [
+        'Network only: the full wave did not run on the board, for the reason that stands in the dossier. Such figures carry these words and a wider uncertainty.',
+      ],
+      [
+        'Excitation: amplitude and phase of the current of each patch, integrated along the column. A column in one phase radiates broadside.',
+      ],
+      [
+        'Coupling: wave that leaves one column while another is driven, over the wave driven. Isolation of groups: the least of its opposite over all pairs of two groups.',
+      ],
+      ['Both engines share limits that no comparison between them shows:'],
+      ...ENGINE_LIMITS.map((line) => [line]),
+    ]),
+  );
+
 const cuts = (): Chapter =>
   chapter(
     'cuts',
     'Axes, cuts and polarisation',
     list([
-      ['x runs along the columns away from the feed, y across them, z away from the ground; broadside is z.'],
+      [
+        'x runs along the columns, away from the feed of a column that is not reversed; y across them, z away from the ground; broadside is z.',
+      ],
       ['Elevation cut: the x-z plane, which is the E plane. Azimuth cut: the y-z plane, which is the H plane.'],
       ['Angles are counted from broadside, positive towards +x in elevation and towards +y in azimuth.'],
       ['The electric field is linear, along x; figures are of the co-polar field.'],
@@ -138,7 +168,7 @@ const uncertaintyRule = (): Chapter =>
         ],
         ['The margin is the distance of the nominal worst value to the limit, positive inside.'],
         [
-          'Engine accuracy, by quantity, is taken at the value found: ',
+          'Engine accuracy, by quantity, is taken at the value found; for figures of columns it is that of the full wave where it ran, with what carrying its differences leaves open, and otherwise that of the network, widened: ',
           link('engine accuracy', EVIDENCE, 'engine-accuracy'),
           '.',
         ],
@@ -240,6 +270,7 @@ export function definitionsPage(input: PackInput): DocumentPage {
     chapters: [
       gain(),
       reflection(),
+      engines(),
       cuts(),
       beamFigures(input),
       quantities(),

@@ -16,8 +16,13 @@ export function unitText({ dimension, unit }: Measured): string {
   return dimension === 'number' || unit === undefined ? '–' : unitNamed(dimension, unit)!.symbol;
 }
 
-/** Most significant digits that a stated number is printed with: nobody writes more, only conversions (Rq from Ra) have them. */
-const MOST_DIGITS = 6;
+/** Most significant digits that people write; what has more comes from a conversion (Rq from Ra) or a measured file. */
+const WRITTEN_DIGITS = 5;
+/** With these such a number is printed: a part in a thousand and better, as good as any profile is known. */
+const WORKED_OUT_DIGITS = 4;
+
+const workedOut = (value: number): boolean =>
+  Math.abs(Number(value.toPrecision(WRITTEN_DIGITS)) - value) > 1e-9 * Math.abs(value);
 
 /** The unit as it stands behind a number, with its space. */
 export function unitBehind(item: Measured): string {
@@ -25,8 +30,11 @@ export function unitBehind(item: Measured): string {
   return unit === '–' ? '' : unit === '°' ? unit : `${GAP}${unit}`;
 }
 
-/** A manifest's number as it was written. */
-const stated = (value: number): string => statedNumber(value, decimalsFor(value, MOST_DIGITS));
+/** A manifest's number as it was written, one that was worked out from it rounded. */
+const stated = (value: number): string =>
+  workedOut(value)
+    ? formatNumber(value, decimalsFor(value, WORKED_OUT_DIGITS))
+    : statedNumber(value, decimalsFor(value, WRITTEN_DIGITS));
 
 const decimalsOf = (text: string): number => (text.split('.')[1] ?? '').length;
 
@@ -40,8 +48,16 @@ export function nominalIn(item: SheetItem): string {
 
 /** Digits that tell a calculated limit from nominal to about two percent of its distance, rounded towards nominal. */
 export function towardsNominal(item: Measured & { readonly nominal: number }, value: number): string {
+  return cutTowardsNominal(item, value, 0);
+}
+
+function cutTowardsNominal(
+  item: Measured & { readonly nominal: number },
+  value: number,
+  leastDecimals: number,
+): string {
   const [at, nominal] = [inUnit(item, value), inUnit(item, item.nominal)];
-  const decimals = at === nominal ? 0 : decimalsFor(at - nominal, 2);
+  const decimals = Math.max(leastDecimals, at === nominal ? 0 : decimalsFor(at - nominal, 2));
   const scale = 10 ** decimals;
   const cut = at > nominal ? Math.floor(at * scale + 1e-6) : Math.ceil(at * scale - 1e-6);
   return formatNumber(cut / scale, decimals);
@@ -50,13 +66,16 @@ export function towardsNominal(item: Measured & { readonly nominal: number }, va
 /** The limit asked on one side. */
 export function limitIn(item: SheetItem, side: 'lower' | 'upper'): string {
   const raw = rawLimit(item, side);
-  if (item.limits[side].origin === 'calculated') return raw;
+  if (item.limits[side].origin === 'calculated' || workedOut(inUnit(item, item.limits[side].limit))) return raw;
   return formatNumber(inUnit(item, item.limits[side].limit), Math.max(decimalsOf(raw), decimalsOf(nominalIn(item))));
 }
 
 function rawLimit(item: SheetItem, side: 'lower' | 'upper'): string {
   const { limit, origin } = item.limits[side];
-  return origin === 'stated' ? stated(inUnit(item, limit)) : towardsNominal(item, limit);
+  if (origin === 'calculated') return towardsNominal(item, limit);
+  const value = inUnit(item, limit);
+  // Rounding must not allow more than was stated.
+  return workedOut(value) ? cutTowardsNominal(item, limit, decimalsFor(value, WORKED_OUT_DIGITS)) : stated(value);
 }
 
 export function basisText({ limits: { lower, upper }, upperOnly }: SheetItem): string {

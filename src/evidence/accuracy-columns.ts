@@ -10,15 +10,14 @@ const COLUMNS = 'independent full-wave solutions of two columns';
 const PATCHES = 'independent full-wave solutions of edge-fed patches';
 const UNITS = 'independent full-wave solutions of one patch between two lines';
 const EIGHT = 'eight patches on 127 µm and on 100 µm, smooth copper 76 to 80 GHz, rough copper';
-const THREE =
-  'patches on 100, 127 and 200 µm, permittivity 3 to 3.55, without loss and with smooth copper, 78 to 80 GHz';
+const THREE = 'patches on 100, 127 and 200 µm, permittivity 3 to 3.55, 78 to 80 GHz';
 
 /** Frequencies compared, GHz: the network at all, the full wave at a few that show the match, the slope and the dip. */
 const COUPLED: Readonly<Record<EngineName, readonly number[]>> = {
   network: [76, 76.5, 77, 77.5, 78, 78.5, 79, 79.5, 80],
-  'full wave': [77, 78.5],
+  'full wave': [78],
 };
-const BETWEEN: Readonly<Record<EngineName, readonly number[]>> = { network: [70, 74, 78, 82], 'full wave': [74, 78] };
+const BETWEEN: Readonly<Record<EngineName, readonly number[]>> = { network: [70, 74, 78, 82], 'full wave': [78] };
 
 interface Target {
   readonly network: number;

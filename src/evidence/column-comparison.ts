@@ -68,17 +68,27 @@ function compare(
   return { reference, copper, rows };
 }
 
-/** Both columns, smooth over the band and rough: at every row for the network, near the best match for the full wave. */
+/** GHz at which the full wave is held to the references: enough to see match, slope and dip, few enough to build in seconds. */
+const FULL_WAVE_GHZ: readonly (readonly [heightUm: number, copper: 'smooth' | 'rough', fGHz: readonly number[]])[] = [
+  [127, 'smooth', [76, 77, 78, 79, 80]],
+  [127, 'rough', [78]],
+  [100, 'smooth', [77, 78, 79]],
+];
+
+/** The network at every row of the references, the full wave at some. */
 const comparisons = (engine: EngineName): (() => readonly ColumnComparison[]) =>
   once(() =>
     COLUMN_REFERENCES.flatMap((reference) => {
       const prepared = engineOf(engine, reference);
-      return [
-        compare(prepared, reference, 'smooth'),
-        compare(prepared, reference, 'rough', engine === 'network' ? undefined : [78]),
-      ];
+      if (engine === 'network')
+        return (['smooth', 'rough'] as const).map((copper) => compare(prepared, reference, copper));
+      return FULL_WAVE_GHZ.filter(([height]) => height === heightUm(reference)).map(([, copper, fGHz]) =>
+        compare(prepared, reference, copper, fGHz),
+      );
     }),
   );
+
+export const heightUm = (reference: { readonly height: number }): number => Math.round(reference.height * 1e6);
 
 export const columnComparisons: Readonly<Record<EngineName, () => readonly ColumnComparison[]>> = {
   network: comparisons('network'),

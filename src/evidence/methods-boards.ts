@@ -1,47 +1,47 @@
 import type { Method } from './method.js';
 
-/** Patch columns and their far field. */
+/** Patch columns by the fast engine, and the far field. */
 export const columnsMethods: readonly Method[] = [
   {
     id: 'column-network',
     name: 'Patch columns as one nodal network',
     whatItIs:
-      'Nodes at all patch edges of the board, line sections between them, self and mutual admittances of all edges; one solution per frequency. Where an edge continues into a line, the line’s part of it is silenced and its open-end susceptance reduced.',
+      'Nodes at all patch edges of the board and line sections between them; radiation of each patch by the admittances of its edges, coupling between patches by the reaction of their currents through the slab; one solution per frequency. Where an edge continues into a line, the line’s part of it is silenced and its open-end susceptance reduced.',
     source:
-      'Transmission-line model of patches with edge admittances (A. G. Derneryd, 1976 and 1978, and later work), with five corrections found against independent full-wave solutions',
+      'Transmission-line model of patches with edge admittances (A. G. Derneryd, 1976 and 1978, and later work), with corrections found against independent full-wave solutions',
     range:
-      'k0h 0.16 to 0.33, permittivity 2.9 to 3.6, patch width 0.5 to 1.45 mm, line w/h 0.6 to 1.7. There: resonance within 0.3 %, reflection |ΔS11| 0.02 to 0.12, tilt 0.2 to 0.6°, sidelobes 0.3 to 0.7 dB (uniform) or 1.7 to 1.9 dB (tapered). Constants provisional; flagged outside',
+      'k0h 0.16 to 0.33, permittivity 2.9 to 3.6, patch width 0.5 to 1.45 mm, line w/h 0.6 to 1.7; how close it comes there stands in the accuracy table. Flagged outside. Infinite slab and ground, no cover, no vias; lines and steps do not radiate; loss of the dielectric counts in the lines only',
   },
   {
     id: 'slab-kernel',
-    name: 'Edge coupling through the grounded slab',
+    name: 'Coupling through the grounded slab',
     whatItIs:
-      'Potentials of magnetic line currents on the slab, surface wave included, as Sommerfeld integrals tabulated over distance; admittance of every pair of edges by line integrals.',
+      'Potentials of magnetic edge currents and of electric patch currents on the slab, surface wave included, as Sommerfeld integrals tabulated over distance.',
     source:
       'D. M. Pozar, IEEE Trans. Antennas Propag. 30(6), 1982; J. R. Mosig and F. E. Gardiol, 1982 and 1985; K. A. Michalski and J. R. Mosig, 1997',
-    range: 'Infinite slab and ground, no cover. Coupling between columns comes out 1 to 4 dB too strong',
+    range: 'Infinite slab and ground, no cover, below the cut-off of the second surface wave',
   },
   {
     id: 'step-reactance',
     name: 'Step between line and patch',
     whatItIs:
       'Series reactance from the higher transverse modes of the patch as a planar cavity, 7 to 18 Ω per junction.',
-    source: 'Planar waveguide model with effective width; factor 0.59 fitted to independent full-wave solutions',
+    source: 'Planar waveguide model with effective width; factor fitted to independent full-wave solutions',
     range: 'Range of the column network',
   },
   {
     id: 'far-field',
-    name: 'Far field of the edges',
+    name: 'Far field through the slab',
     whatItIs:
-      'Magnetic edge currents seen through the slab, TE and TM by transmission-line factors; directivity by integration over the half space. Gain is directivity times the efficiency of the circuit.',
-    source: 'Reciprocity and stationary phase, D. M. Pozar, 1982; terms of IEEE Std 145-2013',
+      'Currents of the board seen through the slab, TE and TM by transmission-line factors; directivity by integration over the half space, cross polarisation after the third definition of Ludwig. Gain is directivity times the efficiency of the engine’s own power balance.',
+    source: 'Reciprocity and stationary phase, D. M. Pozar, 1982; A. C. Ludwig, 1973; terms of IEEE Std 145-2013',
     range:
-      'Infinite ground: nothing below the horizon, no edge diffraction. Field plus surface wave equals the circuit’s power within 1 % on lossless boards, printed per board',
+      'Infinite ground: nothing below the horizon, no edge diffraction. How field plus surface wave compare with the circuit’s power on the lossless board is printed per board',
   },
   {
     id: 'surface-wave',
     name: 'Surface wave by residue',
-    whatItIs: 'Power in the TM0 mode of the slab from the residue at its pole, for the edges together.',
+    whatItIs: 'Power in the TM0 mode of the slab from the residue at its pole, for all currents together.',
     source: 'D. M. Pozar, 1982; residue calculus',
     range:
       'Below the cut-off of TE1 (417 GHz at 0.127 mm and permittivity 3). Counted as lost; a finite board radiates part of it again',

@@ -1,6 +1,7 @@
 import { type Dimension, parseQuantity, quoted, splitQuantity } from '../quantity/index.js';
 import type { FigureDocument } from './documents/fields.js';
 import type { Figure, Provenance } from './model.js';
+import type { Path } from './problem.js';
 
 /** Distance to a limit, in the base unit; `%` means of the value. Undefined when it cannot be read. */
 export function spreadDistance(written: unknown, value: number, dimension: Dimension | 'number'): number | undefined {
@@ -69,3 +70,6 @@ export function figureOf(doc: FigureDocument, dimension: Dimension | 'number', p
       : [distance(doc.spread), distance(doc.spread)];
   return { value, minus, plus, provenance: provenanceOf(doc), path };
 }
+
+/** The figure that stands at a path of a board. */
+export type MakeFigure = (doc: FigureDocument, dimension: Dimension | 'number', path: Path) => Figure;

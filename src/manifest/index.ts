@@ -1,6 +1,7 @@
 export { askedItems, askedWords } from './asked-items.js';
 export { packFor } from './audience.js';
 export { audienceOf } from './audience-rules.js';
+export { columnLength, withPieces } from './column-outline.js';
 export type { FigureDocument } from './documents/fields.js';
 export { LARGEST_FILE, type PackFiles } from './files.js';
 export { manifestSchemas, schemaText } from './json-schema.js';

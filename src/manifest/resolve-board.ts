@@ -2,9 +2,9 @@ import type { Dimension } from '../quantity/index.js';
 import type { BoardDocument } from './documents/board-document.js';
 import type { FigureDocument } from './documents/fields.js';
 import type { Measurements } from './evaluated-texture.js';
-import { figureOf, si } from './figures.js';
+import { figureOf, type MakeFigure, si } from './figures.js';
 import { guessedColumns } from './guessed-columns.js';
-import type { Board, Figure, Finish, Foil, Laminate, StackUp, Texture } from './model.js';
+import type { Board, Finish, Foil, Laminate, StackUp, Texture } from './model.js';
 import { dotted, type Path } from './problem.js';
 import { drawnColumns, groupsOf, scanOf, sizedForOf } from './resolve-array.js';
 import { feedOf, networkOf } from './resolve-feed.js';
@@ -75,8 +75,6 @@ export function boardOf(doc: BoardDocument, input: BoardInput, libraries: Librar
     declared: declaredOf(doc.declared),
   };
 }
-
-export type MakeFigure = (doc: FigureDocument, dimension: Dimension | 'number', path: Path) => Figure;
 
 function stackUpOf(
   doc: BoardDocument['stack_up'],

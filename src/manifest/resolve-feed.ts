@@ -1,9 +1,8 @@
 import type { FeedDocument } from './documents/feed-document.js';
-import { si } from './figures.js';
+import { type MakeFigure, si } from './figures.js';
 import type { FeedNetwork, FeedPath } from './model.js';
 import type { Path } from './problem.js';
 import { lineOf } from './resolve-array.js';
-import type { MakeFigure } from './resolve-board.js';
 import type { Transitions } from './transitions.js';
 
 /** Weights of every column, and its path where one is given; a network computes its own. */

@@ -51,9 +51,9 @@ export interface PointResult {
   readonly realizedGain: number;
   /** Radiated over accepted power at the column ports (surface wave counted as lost). */
   readonly radiationEfficiency: number;
-  /** Power transmission through the feed paths, weighted by their power, 0…1. */
+  /** Power transmission through the feed paths, weighted by their power, 0…1; through the feed network where there is one. */
   readonly feedTransmission: number;
-  /** 1 − reflected/incident power with all columns driven, 0…1. */
+  /** 1 − reflected/incident power with all columns driven, 0…1: at the columns, or at the input of a feed network. */
   readonly mismatch: number;
   readonly shares: PowerShares;
   /** Passive: every column driven alone, the others terminated in the reference impedance. */

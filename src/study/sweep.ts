@@ -18,6 +18,7 @@ import { correctedCut } from './corrected-cut.js';
 import { correctedScattering, correctedShares, differenceAt, wavesLeaving } from './correction.js';
 import type { Correction, EngineDifference } from './correction-model.js';
 import { cutFigures, gainCut } from './engine-figures.js';
+import { fedColumns } from './feed-network.js';
 import { columnObstacle } from './obstacle.js';
 import type { LinePoint, PointResult, PowerShares, Sweep } from './results.js';
 import { type Surfaces, surfaces } from './surfaces.js';
@@ -105,22 +106,26 @@ function evaluate(
   solution: ColumnSolution,
   wanted: { readonly closure: boolean; readonly coupling: boolean },
   difference: EngineDifference | undefined,
-): PointResult {
-  const { board, state, frequency, temperatureC } = at;
-  const waves = incidentWaves(board.feed);
+): { readonly point: PointResult; readonly found: readonly ValidityFlag[] } {
+  const { board, values, state, frequency, temperatureC } = at;
+  const { referenceImpedance } = solution;
+  const scattering = difference ? correctedScattering(solution.scattering, difference) : solution.scattering;
+  const fed = board.feedNetwork
+    ? fedColumns(board, values, state, frequency, { scattering, referenceImpedance })
+    : undefined;
+  const waves = fed?.waves ?? incidentWaves(board.feed);
   const figures = arrayFigures(solution, waves);
   const { power } = figures.excited;
-  const feedTransmission = feedPaths(at, waves);
-  const scattering = difference ? correctedScattering(solution.scattering, difference) : solution.scattering;
+  const feedTransmission = fed?.figures.transmission ?? feedPaths(at, waves);
   const reflected = wavesLeaving(scattering, waves);
+  const mismatch = fed?.mismatch ?? 1 - sum(reflected.map(abs2)) / sum(waves.map(abs2));
   const drawn = powerShares(power, state);
   const shares = difference ? correctedShares(drawn, difference.shares) : drawn;
   const directivity = figures.directivity * 10 ** ((difference?.directivityDb ?? 0) / 10);
   const radiationEfficiency = shares.radiated;
   const gain = directivity * radiationEfficiency * feedTransmission;
-  const mismatch = 1 - sum(reflected.map(abs2)) / sum(waves.map(abs2));
   const cuts = cutsOf(figures, feedTransmission, difference, gain);
-  return {
+  const point: PointResult = {
     frequency,
     temperatureC,
     directivity,
@@ -132,7 +137,7 @@ function evaluate(
     shares,
     columnReflection: scattering.map((row, c) => row[c]),
     activeReflection: waves.map((wave, c) => (abs2(wave) > 0 ? div(reflected[c], wave) : ZERO)),
-    referenceImpedance: solution.referenceImpedance,
+    referenceImpedance,
     elevation: cuts.elevation.figures,
     azimuth: cuts.azimuth.figures,
     powerResidual: figures.powerResidual,
@@ -143,7 +148,9 @@ function evaluate(
         : Number.NaN,
     cuts: { elevation: cuts.elevation.cut, azimuth: cuts.azimuth.cut },
     ...(wanted.coupling ? { scattering } : {}),
+    ...(fed ? { feed: fed.figures } : {}),
   };
+  return { point, found: fed?.flags ?? [] };
 }
 
 const sum = (parts: readonly number[]): number => parts.reduce((a, b) => a + b, 0);

@@ -11,10 +11,12 @@ export interface Wish {
   readonly covered: boolean;
   /** Ids of the requirements that stay. */
   readonly requirements?: readonly string[];
+  /** Off unless the test is about it: it takes seconds a board. */
+  readonly fullWave?: true;
 }
 
 /** The small pack of the manifest tests, path → text, made quicker. */
-export function smallPack({ covered, requirements }: Wish): Record<string, string> {
+export function smallPack({ covered, requirements, fullWave }: Wish): Record<string, string> {
   const files = Object.fromEntries(
     filesUnder(realDisk, folder).map((path) => [path, readFileSync(join(folder, path), 'utf8')]),
   );
@@ -24,6 +26,7 @@ export function smallPack({ covered, requirements }: Wish): Record<string, strin
     files[path] = changed;
   };
   change('pack.yaml', 'frequency_step: 100 MHz', 'frequency_step: 400 MHz');
+  if (!fullWave) change('pack.yaml', 'analysis:\n', 'analysis:\n  full_wave: off\n');
   if (covered) {
     const figure = (value: string) => `{ value: ${value}, spread: 0, basis: estimated }`;
     change(

@@ -18,6 +18,10 @@ describe('boardcase start', () => {
     const { io, said } = listening();
     expect(await runCommandLine(['start', folder], io)).toBe(0);
     expect(said.out()).toContain(join(folder, 'pack.yaml'));
+    // The full wave takes seconds a board and has tests of its own.
+    const pack = readTree(folder)['pack.yaml']!;
+    expect(pack).toContain('\nanalysis:\n');
+    writeTree(folder, { 'pack.yaml': pack.replace('\nanalysis:\n', '\nanalysis:\n  full_wave: off\n') });
     const code = await runCommandLine(['build', join(folder, 'pack.yaml'), '--out', join(folder, 'out')], io);
     expect([code, said.err()]).toEqual([0, '']);
     expect(said.out()).toMatch(/first-pack revision 1, 3 boards: first \w+, second \w+, third \w+/);

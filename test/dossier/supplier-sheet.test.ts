@@ -91,7 +91,7 @@ describe('a supplier sheet', () => {
       ['A-untreated-face-texture', 'Texture of the untreated face (Rq), KF-04', '0.30', '–', '0.35', 'µm'],
       ['B-treated-face-texture', 'Texture of the treated face (Rq), KF-10', '1.00', '–', '1.15', 'µm'],
       // Ra 0.25 ± 0.05 µm times sqrt(π/2).
-      ['B-untreated-face-texture', 'Texture of the untreated face (Rq), KF-10', '0.313329', '–', '0.416219', 'µm'],
+      ['B-untreated-face-texture', 'Texture of the untreated face (Rq), KF-10', '0.3133', '–', '0.4162', 'µm'],
     ]);
     const definition = rowsOf(chapterOf(open.chapters, 'verification'))[0][1];
     expect(definition).toContain(

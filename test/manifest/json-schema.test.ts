@@ -96,7 +96,7 @@ describe('manifestSchemas', () => {
     ['requirements.yaml', '    property: flammability\n', ''],
   ])('refuses %s with %j as %j', (file, from, to) => {
     const text = fixtureText(file);
-    expect(text).toMatch(typeof from === 'string' ? from.replace(/[[\]{}().*+?^$|\\]/g, '\\$&') : from);
+    expect(text).toMatch(from);
     expect(accepts(file, text.replace(from, to))).toBe(false);
   });
 

@@ -33,7 +33,10 @@ export function edgeReach(edges: readonly RadiatingEdge[]): number {
   for (let m = 0; m < edges.length; m += 2)
     reach = Math.max(
       reach,
-      Math.hypot(edges[m].x - edges[m + 1].x, Math.max(...edges[m].pulses.map((p) => p.width), ...edges[m + 1].pulses.map((p) => p.width))),
+      Math.hypot(
+        edges[m].x - edges[m + 1].x,
+        Math.max(...edges[m].pulses.map((p) => p.width), ...edges[m + 1].pulses.map((p) => p.width)),
+      ),
     );
   return reach;
 }
@@ -85,7 +88,10 @@ function pulsePair(a: number, b: number, dx: number, distance: Float64Array): Ed
   }
   addWeight(distance, Math.hypot(dx, inner), 2, charge);
   addWeight(distance, Math.hypot(dx, outer), -2, charge);
-  const last = Math.max(vector.findLastIndex((w) => w !== 0), charge.findLastIndex((w) => w !== 0));
+  const last = Math.max(
+    vector.findLastIndex((w) => w !== 0),
+    charge.findLastIndex((w) => w !== 0),
+  );
   return { vector: vector.slice(0, last + 1), charge: charge.slice(0, last + 1) };
 }
 
@@ -95,11 +101,7 @@ export interface EdgeAdmittance {
   readonly im: Float64Array;
 }
 
-export function edgeAdmittance(
-  edges: readonly RadiatingEdge[],
-  plan: EdgePlan,
-  slab: SlabPotentials,
-): EdgeAdmittance {
+export function edgeAdmittance(edges: readonly RadiatingEdge[], plan: EdgePlan, slab: SlabPotentials): EdgeAdmittance {
   const { omega } = slab;
   const count = plan.pairs.length;
   const pr = new Float64Array(count);

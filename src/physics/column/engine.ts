@@ -99,18 +99,8 @@ export interface MacroPatch {
   readonly y: number;
   readonly length: number;
   readonly width: number;
-  readonly lines: readonly AttachedLine[];
-}
-
-/** The part of a line's current that goes with the patch at its end. */
-export interface AttachedLine {
-  /** Of the patch that it leaves from: +1 at the large-x edge. */
-  readonly side: 1 | -1;
-  readonly width: number;
-  /** To the next patch, or half a wavelength, m. */
-  readonly length: number;
-  /** Crest of its current over that of the patch's. */
-  readonly share: number;
+  /** Lines at its edges: width, m, and the part of the patch's current moment that each takes away. */
+  readonly lines: readonly { readonly width: number; readonly share: number }[];
 }
 
 /** Patches with the amplitude of their macro currents: all that pattern and guided wave need. */

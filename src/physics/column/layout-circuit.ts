@@ -2,7 +2,7 @@
  * A board's layout as a circuit without values: nodes, line sections with the steps at their ends, patch edges, ports
  * and loads. Steps stand on the side of the line, never of the patch.
  */
-import type { ColumnGeometry, LineSection } from './engine.js';
+import type { ColumnGeometry, LineSection, MacroPatch } from './engine.js';
 
 export interface CircuitSection {
   readonly from: number;
@@ -35,21 +35,12 @@ export interface CircuitEdge {
   readonly covered: number;
 }
 
-export interface CircuitPatch {
-  readonly column: number;
-  readonly patch: number;
-  /** Centre, m. */
-  readonly x: number;
-  readonly y: number;
-  readonly length: number;
-  readonly width: number;
-  /** Lines that leave it, towards +x or −x; length 0 where no patch follows. */
-  readonly lines: readonly { readonly side: 1 | -1; readonly width: number; readonly length: number }[];
-}
+/** A macro patch before it is known what its lines take away. */
+export type MacroOutline = Omit<MacroPatch, 'lines'>;
 
 export interface LayoutCircuit {
   readonly nodes: number;
-  readonly patches: readonly CircuitPatch[];
+  readonly patches: readonly MacroOutline[];
   readonly edges: readonly CircuitEdge[];
   readonly sections: readonly CircuitSection[];
   readonly ports: readonly CircuitPort[];
@@ -61,7 +52,7 @@ const NO_STEP = 1e-9;
 
 /** @throws RangeError on a layout that is not physical */
 export function layoutCircuit(columns: readonly ColumnGeometry[]): LayoutCircuit {
-  const patches: CircuitPatch[] = [];
+  const patches: MacroOutline[] = [];
   const edges: CircuitEdge[] = [];
   const sections: CircuitSection[] = [];
   const ports: CircuitPort[] = [];
@@ -104,11 +95,7 @@ export function layoutCircuit(columns: readonly ColumnGeometry[]): LayoutCircuit
       const away = x + direction * patch.length;
       edges.push({ ...edge, node: near, x, sign: direction === 1 ? -1 : 1, covered });
       edges.push({ ...edge, node: last, x: away, sign: direction, covered: behind });
-      const lines: CircuitPatch['lines'][number][] = [];
-      const before = first ? (sideFeed ? 0 : entry) : column.links[p - 1].width;
-      if (before > 0) lines.push({ side: direction === 1 ? -1 : 1, width: before, length: first ? 0 : column.links[p - 1].length });
-      if (behind > 0) lines.push({ side: direction, width: behind, length: end ? 0 : column.links[p].length });
-      patches.push({ ...patch, column: c, patch: p, x: (x + away) / 2, y: column.y, lines });
+      patches.push({ ...patch, column: c, patch: p, x: (x + away) / 2, y: column.y });
       x = away + direction * (column.links[p]?.length ?? 0);
 
       if (first && !sideFeed) ports.push(feed(column, inset ? 0 : patch.width, patch.width, tap));
@@ -162,5 +149,7 @@ function check(column: ColumnGeometry): void {
   if (!(inset.depth > 0 && inset.depth < patches[0].length))
     throw new RangeError(`edgeNetwork: inset depth ${inset.depth} m in a patch ${patches[0].length} m long`);
   if (!(inset.gap > 0 && entry + 2 * inset.gap < patches[0].width))
-    throw new RangeError(`edgeNetwork: line and slots take ${entry + 2 * inset.gap} m of a patch ${patches[0].width} m wide`);
+    throw new RangeError(
+      `edgeNetwork: line and slots take ${entry + 2 * inset.gap} m of a patch ${patches[0].width} m wide`,
+    );
 }

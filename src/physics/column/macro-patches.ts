@@ -1,37 +1,48 @@
-/** What of the lines' currents goes with each patch of a board. */
-import { SPEED_OF_LIGHT } from '../constants.js';
+/** What the lines at its edges take away from each patch's macro current. */
 import { microstripLine } from '../line/index.js';
 import type { ColumnProblem, MacroPatch } from './engine.js';
-import type { CircuitPatch } from './layout-circuit.js';
+import { effectiveWidth } from './junction.js';
+import type { LayoutCircuit } from './layout-circuit.js';
+import type { NetworkConstants } from './network-constants.js';
+
+/** No more of a patch's current than this is taken away: a line as wide as its patch leaves something of the patch. */
+const LARGEST_SHARE = 0.4;
 
 /**
- * A patch and a line at its edge share the voltage there, and both are half a wave long: the crests of their currents are
- * as their admittances. Feed lines and terminated lines, which no patch follows, are given half a wavelength.
+ * Each edge carries half of the moment; a line takes from its edge what it silences of the magnetic moment.
  *
  * @param frequency Hz, about where the board works: shares hang on it by a few parts in a thousand
  */
-export function macroPatches(patches: readonly CircuitPatch[], problem: ColumnProblem, frequency: number): MacroPatch[] {
+export function macroPatches(
+  circuit: LayoutCircuit,
+  problem: ColumnProblem,
+  frequency: number,
+  constants: NetworkConstants,
+): MacroPatch[] {
   const { slab, stripThickness: thickness } = problem;
   const zero = { re: 0, im: 0 };
   const faces = { underside: zero, top: zero, edges: zero, ground: zero };
-  const known = new Map<number, { impedance: number; halfWave: number }>();
-  const line = (width: number): { impedance: number; halfWave: number } => {
+  const known = new Map<number, number>();
+  const wide = (width: number): number => {
     let found = known.get(width);
-    if (!found) {
+    if (found === undefined) {
       const geometry = { width, height: slab.height, thickness, permittivity: slab.permittivity };
       const { impedance, effectivePermittivity } = microstripLine({ geometry, frequency, lossTangent: 0, faces });
-      found = { impedance, halfWave: SPEED_OF_LIGHT / (2 * frequency * Math.sqrt(effectivePermittivity)) };
+      found = effectiveWidth(slab.height, impedance, effectivePermittivity);
       known.set(width, found);
     }
     return found;
   };
-  return patches.map((patch) => ({
+  return circuit.patches.map((patch, p) => ({
     ...patch,
-    lines: patch.lines.map(({ side, width, length }) => ({
-      side,
-      width,
-      length: length > 0 ? length : line(width).halfWave,
-      share: Number(process.env.SHARE ?? 1)*line(patch.width).impedance / line(width).impedance,
-    })),
+    lines: [circuit.edges[2 * p], circuit.edges[2 * p + 1]]
+      .filter(({ covered }) => covered > 0)
+      .map(({ covered, width }) => ({
+        width: covered,
+        share: Math.min(
+          LARGEST_SHARE,
+          (constants.coveredMoment * wide(covered)) / (2 * constants.edgeMoment * wide(width)),
+        ),
+      })),
   }));
 }

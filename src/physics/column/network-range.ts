@@ -1,10 +1,18 @@
 /** Says where a layout lies outside the range in which the network's constants were compared with full wave. */
 import { SPEED_OF_LIGHT } from '../constants.js';
 import type { ValidityFlag } from '../validity.js';
-import type { ColumnProblem } from './engine.js';
+import type { ColumnGeometry, ColumnProblem } from './engine.js';
 import type { NetworkConstants } from './network-constants.js';
 
 const MODEL = 'edge network of the patch columns';
+
+const LAYOUTS: readonly { readonly name: string; readonly has: (column: ColumnGeometry) => boolean }[] = [
+  { name: 'columns that run towards −x', has: (c) => c.direction === -1 },
+  { name: 'matching sections', has: (c) => (c.matching?.length ?? 0) > 0 },
+  { name: 'an inset feed', has: (c) => c.inset !== undefined },
+  { name: 'a terminated column', has: (c) => c.termination !== undefined },
+  { name: 'a feed from the side', has: (c) => c.sideFeed !== undefined },
+];
 
 export function networkFlags(problem: ColumnProblem, frequency: number, constants: NetworkConstants): ValidityFlag[] {
   const { range } = constants;
@@ -29,5 +37,13 @@ export function networkFlags(problem: ColumnProblem, frequency: number, constant
   check('column.patch-width', 'Patch width in mm', widths, [range.patchWidth[0] * 1e3, range.patchWidth[1] * 1e3]);
   const lines = columns.flatMap((c) => [c.feedLineWidth, ...c.links.map((l) => l.width)]).map((w) => w / slab.height);
   check('column.line-width', 'Line width over laminate height', lines, range.lineWidthOverHeight);
+  const kinds = LAYOUTS.filter(({ has }) => columns.some(has)).map(({ name }) => name);
+  if (kinds.length > 0)
+    flags.push({
+      code: 'column.layout',
+      severity: 'outside',
+      model: MODEL,
+      text: `The layout has ${kinds.join(', ')}: the network was not compared with full wave there. Reflection, beam direction and gain may err by more than stated.`,
+    });
   return flags;
 }

@@ -22,11 +22,10 @@ import { layoutCircuit } from './layout-circuit.js';
 import { layoutEdges } from './layout-edges.js';
 import { lineLosses, section, sectionCurrent } from './line-section.js';
 import { type LineTable, lineTable } from './line-table.js';
+import { macroPatches } from './macro-patches.js';
 import { NETWORK_CONSTANTS, type NetworkConstants } from './network-constants.js';
 import { networkFlags } from './network-range.js';
 import { addCoupling, edgePower, type PatchCoupling, patchCoupling } from './patch-coupling.js';
-import { currentSpectrum } from './macro-current.js';
-import { macroPatches } from './macro-patches.js';
 import { patchReach, patchReaction, reactionPlan } from './patch-currents.js';
 import { patchField } from './patch-field.js';
 import { slabIntegrals } from './slab-integrals.js';
@@ -54,21 +53,10 @@ export function edgeNetwork(
   const circuit = layoutCircuit(problem.columns);
   // Pulse widths depend on the geometry alone, so the plans serve every frequency.
   const { height, permittivity } = problem.slab;
-  const patches = macroPatches(circuit.patches, problem, maximumFrequency);
-  const moments = Float64Array.from(patches, (patch) => {
-    const [whole, bare] = [new Float64Array(2), new Float64Array(2)];
-    currentSpectrum(patch, 0, 0, whole);
-    currentSpectrum({ ...patch, lines: [] }, 0, 0, bare);
-    return whole[0] / bare[0];
-  });
+  const patches = macroPatches(circuit, problem, maximumFrequency, constants);
   const outlines = layoutEdges(circuit, height, constants, (w) => w);
   const reach = edgeReach(outlines);
-  const integrals = slabIntegrals(
-    maximumFrequency,
-    permittivity,
-    height,
-    Math.max(reach, patchReach(patches)),
-  );
+  const integrals = slabIntegrals(maximumFrequency, permittivity, height, Math.max(reach, patchReach(patches)));
   const edgePairs = edgePlan(outlines, integrals);
   const patchPairs = reactionPlan(patches, integrals);
 
@@ -81,7 +69,7 @@ export function edgeNetwork(
       const edges = layoutEdges(circuit, height, constants, lines.effectiveWidth);
       const potentials = slabPotentials(frequency, slab.permittivity, slab.height, integrals, reach);
       const own = edgeAdmittance(edges, edgePairs, potentials);
-      found = { edges, coupling: patchCoupling(circuit.edges, own, patchReaction(patchPairs, potentials), moments) };
+      found = { edges, coupling: patchCoupling(circuit.edges, own, patchReaction(patchPairs, potentials)) };
       if (known.size >= RADIATION_KEPT) known.clear();
       known.set(key, found);
     }
@@ -150,7 +138,10 @@ export function edgeNetwork(
       });
       const power = (waves: readonly Complex[]): number => waves.reduce((p, wave) => p + abs2(wave), 0) / 2;
       const out = edgePower(circuit.edges, coupling, re, im);
-      const loadPower = loads.reduce((p, { node, admittance }) => p + admittance.re * (re[node] ** 2 + im[node] ** 2), 0);
+      const loadPower = loads.reduce(
+        (p, { node, admittance }) => p + admittance.re * (re[node] ** 2 + im[node] ** 2),
+        0,
+      );
       // The mode's current leads its voltage by a quarter period: I = (j/ωL')(π/L) V.
       const amplitude = coupling.resistance.map((r) => 1 / Math.sqrt(r));
       const currents = {

@@ -29,7 +29,6 @@ export function patchCoupling(
   edges: readonly CircuitEdge[],
   admittance: EdgeAdmittance,
   reaction: Reaction,
-  moments: Float64Array,
 ): PatchCoupling {
   const { n } = reaction;
   const projection = new Float64Array(2 * n);
@@ -42,7 +41,7 @@ export function patchCoupling(
     const mode = Math.sqrt(near * s + far * t);
     projection[2 * p] = near / mode;
     projection[2 * p + 1] = far / mode;
-    resistance[p] = process.env.B ? reaction.bare[p] * moments[p] ** 2 : reaction.re[p * n + p];
+    resistance[p] = reaction.re[p * n + p];
   }
   const size = n * n;
   const out = { re: new Float64Array(size), im: new Float64Array(size), guided: new Float64Array(size) };
@@ -71,7 +70,8 @@ export function addCoupling(target: ComplexMatrix, edges: readonly CircuitEdge[]
   }
   for (let p = 0; p < patches; p++) {
     for (let r = 0; r < patches; r++) {
-      const [yr, yi] = [coupling.re[p * patches + r] - (r === p ? 1 : 0), coupling.im[p * patches + r]];
+      if (r === p) continue;
+      const [yr, yi] = [coupling.re[p * patches + r], coupling.im[p * patches + r]];
       for (let a = 0; a < 2; a++) {
         const row = edges[2 * p + a].node * n;
         for (let b = 0; b < 2; b++) {

@@ -8,7 +8,7 @@
  */
 import { ETA0, SPEED_OF_LIGHT } from '../constants.js';
 import type { ExcitedPatches, FarField, MacroPatch } from './engine.js';
-import { currentExtent, currentSpectrum, sameShape } from './macro-current.js';
+import { currentSpectrum, sameShape } from './macro-current.js';
 
 /** V_e and V_h of the lossless slab at sin² θ: [Re, Im, Re, Im], ohm. */
 function slabVoltages(excited: ExcitedPatches, sin2: number): readonly [number, number, number, number] {
@@ -30,20 +30,15 @@ function slabVoltages(excited: ExcitedPatches, sin2: number): readonly [number, 
 /** Spectrum of the current, A m, at wavenumbers (kx, ky): out = [re, im]. */
 export function boardSpectrum(excited: ExcitedPatches, kx: number, ky: number, out: Float64Array): void {
   const { patches } = excited;
-  let [re, im] = [0, 0];
-  let [sr, si] = [0, 0];
+  let [re, im, shape] = [0, 0, 0];
   for (let p = 0; p < patches.length; p++) {
     const patch = patches[p];
     // Patches of one shape tend to follow each other.
-    if (p === 0 || !sameShape(patch, patches[p - 1])) {
-      currentSpectrum(patch, kx, ky, out);
-      [sr, si] = [out[0], out[1]];
-    }
+    if (p === 0 || !sameShape(patch, patches[p - 1])) shape = currentSpectrum(patch, kx, ky);
     const phase = kx * patch.x + ky * patch.y;
-    const [c, s] = [Math.cos(phase), Math.sin(phase)];
-    const [ar, ai] = [sr * c - si * s, sr * s + si * c];
-    re += excited.re[p] * ar - excited.im[p] * ai;
-    im += excited.re[p] * ai + excited.im[p] * ar;
+    const [c, s] = [shape * Math.cos(phase), shape * Math.sin(phase)];
+    re += excited.re[p] * c - excited.im[p] * s;
+    im += excited.re[p] * s + excited.im[p] * c;
   }
   out[0] = re;
   out[1] = im;
@@ -77,11 +72,9 @@ export function patchField(excited: ExcitedPatches): FarField {
 }
 
 function extent(patches: readonly MacroPatch[]): { x: number; y: number } {
-  const half = patches.map(currentExtent);
-  const span = (axis: 'x' | 'y'): number =>
-    Math.max(...patches.map((p, i) => p[axis] + half[i][axis])) -
-    Math.min(...patches.map((p, i) => p[axis] - half[i][axis]));
-  return { x: span('x'), y: span('y') };
+  const span = (axis: 'x' | 'y', size: 'length' | 'width'): number =>
+    Math.max(...patches.map((p) => p[axis] + p[size] / 2)) - Math.min(...patches.map((p) => p[axis] - p[size] / 2));
+  return { x: span('x', 'length'), y: span('y', 'width') };
 }
 
 /** Intensity in a principal cut as a function of the signed angle in rad; patches at one place are gathered first. */

@@ -139,7 +139,9 @@ function group(
 /** erfc to 1e-7 (Abramowitz & Stegun 7.1.26 refined; Press et al., Numerical Recipes, ch. 6; from memory). */
 function complementaryError(x: number): number {
   const t = 1 / (1 + 0.5 * Math.abs(x));
-  const c = [0.17087277, -0.82215223, 1.48851587, -1.13520398, 0.27886807, -0.18628806, 0.09678418, 0.37409196, 1.00002368];
+  const c = [
+    0.17087277, -0.82215223, 1.48851587, -1.13520398, 0.27886807, -0.18628806, 0.09678418, 0.37409196, 1.00002368,
+  ];
   let s = 0;
   for (const a of c) s = s * t + a;
   const value = t * Math.exp(-x * x - 1.26551223 + t * s);

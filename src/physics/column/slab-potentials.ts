@@ -108,8 +108,7 @@ export function addWeight(distance: Float64Array, r: number, amount: number, wei
   const base = Math.min(Math.max(low - 1, 0), distance.length - 4);
   for (let i = 0; i < 4; i++) {
     let w = amount / at;
-    for (let j = 0; j < 4; j++)
-      if (j !== i) w *= (at - distance[base + j]) / (distance[base + i] - distance[base + j]);
+    for (let j = 0; j < 4; j++) if (j !== i) w *= (at - distance[base + j]) / (distance[base + i] - distance[base + j]);
     weights[base + i] += w;
   }
 }

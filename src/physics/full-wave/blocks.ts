@@ -11,6 +11,9 @@ export interface Block {
   readonly key: string;
 }
 
+/** Cells between two edges for which one inverse is taken: it only has to be near. */
+const SAME_TRIM = 0.15;
+
 /** @param overlap cells by which a block reaches into its neighbours */
 export function cutBlocks(mesh: Mesh, overlap: number): Block[] {
   const columns = Math.max(...mesh.rectangles.map((r) => r.metal.column)) + 1;
@@ -93,7 +96,7 @@ function blockOf(
         2 * r.j0 - centre,
         2 * r.j1 - centre,
         r.metal.width.toExponential(9),
-        ...Object.values(r.inwards).map((d) => d.toFixed(6)),
+        ...Object.values(r.inwards).map((d) => Math.round(d / SAME_TRIM)),
       ].join(' '),
     )
     .join(';');

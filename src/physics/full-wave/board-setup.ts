@@ -2,7 +2,7 @@
 import { SPEED_OF_LIGHT } from '../constants.js';
 import { microstripLine } from '../line/index.js';
 import { type Block, cutBlocks } from './blocks.js';
-import { edgeTrim } from './edge-trim.js';
+import { edgeTrims } from './edge-trim.js';
 import { chooseGrid } from './grid.js';
 import { drawMesh, type Mesh } from './mesh.js';
 import { outlineOf } from './outline.js';
@@ -54,7 +54,8 @@ export function setUpBoard(
   const clear = CLEAR * slab.height;
   const outline = outlineOf(columns, { run: 2 * clear + READ * wavelength, stub: STUB * wavelength });
   const grid = chooseGrid(columns, outline.rectangles, settings.cellsPerPatch ?? 17, settings.cellsPerLine ?? 2);
-  const mesh = drawMesh(outline.rectangles, grid);
+  const layers = { ...slab, ...(problem.cover && { cover: problem.cover }) };
+  const mesh = drawMesh(outline.rectangles, grid, edgeTrims(layers, problem.stripThickness));
   return {
     mesh,
     ports: outline.ports.map((line) => meshPort(mesh, line, clear)),
@@ -62,11 +63,11 @@ export function setUpBoard(
     blocks: cutBlocks(mesh, OVERLAP),
     reactions: prepareReactions({ dx: grid.dx, dy: grid.dy, nx: mesh.nx, ny: mesh.ny }, band, mediumOf(problem, slab)),
     product: reactionProduct(mesh),
-    squares: mesh.rectangles.map(({ metal, i0, i1, j0, j1, inwards }) => {
+    squares: mesh.rectangles.map(({ metal, i0, i1, j0, j1, trims }) => {
       const acrossX = metal.kind === 'feed' && Math.abs(metal.y1 - metal.y0 - metal.width) > 1e-9;
       return acrossX
-        ? drawnSquares(i1 - i0, grid.dx, slab.height, [edgeTrim(inwards.x0), edgeTrim(inwards.x1)])
-        : drawnSquares(j1 - j0, grid.dy, slab.height, [edgeTrim(inwards.y0), edgeTrim(inwards.y1)]);
+        ? drawnSquares(i1 - i0, grid.dx, slab.height, [trims.x0, trims.x1])
+        : drawnSquares(j1 - j0, grid.dy, slab.height, [trims.y0, trims.y1]);
     }),
   };
 }

@@ -6,6 +6,7 @@
  * the rest by weights on its table. Both are geometry. Pieces of a spline that touch the source are split into two
  * triangles (Duffy 1982, SIAM J. Numer. Anal. 19, 1260), others take Gauss points by their distance.
  */
+import { abs, add, complex, mul, sqrt, sub } from '../../numerics/complex.js';
 import { gaussLegendre } from '../../numerics/gauss-legendre.js';
 import { lagrangeWeights } from '../../numerics/lagrange.js';
 import { cubicSpline, linearSpline } from './bspline-stencil.js';
@@ -105,7 +106,7 @@ function piecePoints(
   tables: PotentialTables,
 ): PiecePoint[] {
   const points: PiecePoint[] = [];
-  const add = (tx: number, ty: number, weight: number): void => {
+  const place = (tx: number, ty: number, weight: number): void => {
     const rho = Math.hypot(tx * dx, ty * dy);
     const powers = new Float64Array(orders);
     powers[0] = unit / rho;
@@ -121,14 +122,25 @@ function piecePoints(
     const [along, across] = [unitRule(14), unitRule(24)];
     for (const u of along)
       for (const v of across) {
-        add(u.at, u.at * v.at, u.weight * v.weight * u.at);
-        add(u.at * v.at, u.at, u.weight * v.weight * u.at);
+        place(u.at, u.at * v.at, u.weight * v.weight * u.at);
+        place(u.at * v.at, u.at, u.weight * v.weight * u.at);
       }
     return points;
   }
-  const rule = unitRule(i <= 2 && j <= 2 ? 16 : i + j < 8 ? 10 : 7);
-  for (const u of rule) for (const v of rule) add(i + u.at, j + v.at, u.weight * v.weight);
+  const rule = unitRule(pointsAt(Math.hypot(i * dx, j * dy) / Math.max(dx, dy)));
+  for (const u of rule) for (const v of rule) place(i + u.at, j + v.at, u.weight * v.weight);
   return points;
+}
+
+/**
+ * Gauss points for 1e-9 on a piece whose distance from the singularity is `ratio` of its longer side: n points err as
+ * R^{−2n}, R of Bernstein's ellipse through −1 + 2j·ratio (Trefethen 2013, theorem 19.3); one more for the spline.
+ */
+function pointsAt(ratio: number): number {
+  const z = complex(-1, 2 * ratio);
+  const root = sqrt(sub(mul(z, z), complex(1)));
+  const ellipse = Math.max(abs(add(z, root)), abs(sub(z, root)));
+  return 1 + Math.ceil(4.5 / Math.log10(ellipse));
 }
 
 /** Gauss points on (0, 1). */

@@ -29,10 +29,10 @@ export function localTerms(mesh: Mesh, frequency: number, sheet: readonly Comple
   for (let c = 0; c < n; c++) {
     const z = sheet[cells.rectangle[c]];
     terms.x.re[c] = (z.re * grid.dx) / grid.dy;
-    terms.x.im[c] = (z.im * grid.dx) / grid.dy + inductive * cells.alongX[c] * grid.dx;
+    terms.x.im[c] = (z.im * grid.dx) / grid.dy + inductive * cells.currentX[c] * grid.dx;
     terms.y.re[c] = (z.re * grid.dy) / grid.dx;
-    terms.y.im[c] = (z.im * grid.dy) / grid.dx + inductive * cells.alongY[c] * grid.dy;
-    const kappa = cells.alongX[c] / grid.dx + cells.alongY[c] / grid.dy;
+    terms.y.im[c] = (z.im * grid.dy) / grid.dx + inductive * cells.currentY[c] * grid.dy;
+    const kappa = cells.chargeX[c] / grid.dx + cells.chargeY[c] / grid.dy;
     terms.charge.re[c] = potential.re * kappa;
     terms.charge.im[c] = potential.im * kappa;
   }

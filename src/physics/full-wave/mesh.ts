@@ -1,5 +1,5 @@
 /** Metal drawn on a uniform grid: cells, currents across the edges between them, and how far true edges lie off the lines. */
-import { edgeTrim } from './edge-trim.js';
+import type { EdgeTrim, EdgeTrims } from './edge-trim.js';
 import { drawEdge, type Grid } from './grid.js';
 import type { MetalRectangle } from './outline.js';
 
@@ -11,6 +11,7 @@ export interface DrawnRectangle {
   readonly j0: number;
   readonly j1: number;
   readonly inwards: { readonly x0: number; readonly x1: number; readonly y0: number; readonly y1: number };
+  readonly trims: { readonly x0: EdgeTrim; readonly x1: EdgeTrim; readonly y0: EdgeTrim; readonly y1: EdgeTrim };
 }
 
 export interface Mesh {
@@ -32,9 +33,11 @@ export interface Mesh {
     readonly place: Int32Array;
     readonly rectangle: Int32Array;
     readonly edges: Int32Array;
-    /** Σ κ of free edges that run along x, and along y. */
-    readonly alongX: Float64Array;
-    readonly alongY: Float64Array;
+    /** Σ κ of free edges that run along x, and along y: for the current along them, and for the charge. */
+    readonly currentX: Float64Array;
+    readonly currentY: Float64Array;
+    readonly chargeX: Float64Array;
+    readonly chargeY: Float64Array;
   };
 }
 
@@ -71,7 +74,7 @@ function drawAxis(
 }
 
 /** @throws RangeError where a rectangle is thinner than a cell */
-export function drawMesh(metal: readonly MetalRectangle[], grid: Grid): Mesh {
+export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: EdgeTrims): Mesh {
   const xs = drawAxis(
     metal.map((r) => ({ low: r.x0, high: r.x1, crossLow: r.y0, crossHigh: r.y1 })),
     grid.x0,
@@ -91,17 +94,27 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid): Mesh {
     if (xs[k].high <= xs[k].low || ys[k].high <= ys[k].low)
       throw new RangeError(`fullWave: a piece of metal ${r.x1 - r.x0} by ${r.y1 - r.y0} m is smaller than a cell`);
     const gap = (index: number, at: number, origin: number, step: number): number => index - (at - origin) / step;
+    const inwards = {
+      x0: -gap(xs[k].low, r.x0, grid.x0, grid.dx),
+      x1: gap(xs[k].high, r.x1, grid.x0, grid.dx),
+      y0: -gap(ys[k].low, r.y0, grid.y0, grid.dy),
+      y1: gap(ys[k].high, r.y1, grid.y0, grid.dy),
+    };
+    const [wide, tall] = [xs[k].high - xs[k].low, ys[k].high - ys[k].low];
+    // Across a column both edges share what is off, so that it stays symmetric: its place is a whole number of cells.
+    const across = edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
     return {
       metal: r,
       i0: xs[k].low - left,
       i1: xs[k].high - left,
       j0: ys[k].low - below,
       j1: ys[k].high - below,
-      inwards: {
-        x0: -gap(xs[k].low, r.x0, grid.x0, grid.dx),
-        x1: gap(xs[k].high, r.x1, grid.x0, grid.dx),
-        y0: -gap(ys[k].low, r.y0, grid.y0, grid.dy),
-        y1: gap(ys[k].high, r.y1, grid.y0, grid.dy),
+      inwards,
+      trims: {
+        x0: edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x0),
+        x1: edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x1),
+        y0: across,
+        y1: across,
       },
     };
   });
@@ -128,26 +141,24 @@ function occupy(rectangles: readonly DrawnRectangle[], nx: number, ny: number) {
   for (let c = 0; c < nx * ny; c++) if (owner[c] >= 0) place.push(c);
   const count = place.length;
   const edges = new Int32Array(4 * count);
-  const alongX = new Float64Array(count);
-  const alongY = new Float64Array(count);
-  const trims = rectangles.map((r) => ({
-    x0: edgeTrim(r.inwards.x0),
-    x1: edgeTrim(r.inwards.x1),
-    y0: edgeTrim(r.inwards.y0),
-    y1: edgeTrim(r.inwards.y1),
-  }));
+  const column = (): Float64Array => new Float64Array(count);
+  const sums = { currentX: column(), currentY: column(), chargeX: column(), chargeY: column() };
   place.forEach((c, n) => {
     const i = c % nx;
     const j = (c - i) / nx;
-    const trim = trims[owner[c]];
+    const { trims } = rectangles[owner[c]];
     edges[4 * n] = i > 0 ? xEdge[c - 1] : -1;
     edges[4 * n + 1] = xEdge[c];
     edges[4 * n + 2] = j > 0 ? yEdge[c - nx] : -1;
     edges[4 * n + 3] = yEdge[c];
-    if (!metal(i, j - 1)) alongX[n] += trim.y0;
-    if (!metal(i, j + 1)) alongX[n] += trim.y1;
-    if (!metal(i - 1, j)) alongY[n] += trim.x0;
-    if (!metal(i + 1, j)) alongY[n] += trim.x1;
+    const note = (axis: 'X' | 'Y', trim: EdgeTrim): void => {
+      sums[`current${axis}`][n] += trim.current;
+      sums[`charge${axis}`][n] += trim.charge;
+    };
+    if (!metal(i, j - 1)) note('X', trims.y0);
+    if (!metal(i, j + 1)) note('X', trims.y1);
+    if (!metal(i - 1, j)) note('Y', trims.x0);
+    if (!metal(i + 1, j)) note('Y', trims.x1);
   });
   return {
     xEdge,
@@ -159,8 +170,7 @@ function occupy(rectangles: readonly DrawnRectangle[], nx: number, ny: number) {
       place: Int32Array.from(place),
       rectangle: Int32Array.from(place, (c) => owner[c]),
       edges,
-      alongX,
-      alongY,
+      ...sums,
     },
   };
 }

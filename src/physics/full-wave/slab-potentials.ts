@@ -15,6 +15,7 @@ import { hankelTable, type SpectrumPair, type TransformPair } from './hankel-tab
 import { squareRoot } from './layer-line.js';
 import { checkMedium, type SlabMedium } from './slab-medium.js';
 import { type DirectTerm, type SlabSpectral, slabSpectral } from './slab-spectral.js';
+import { guidedWave, guidesTm0Only } from './slab-wave.js';
 import { fallingPath, windowedPath } from './sommerfeld-path.js';
 
 export interface Band {
@@ -74,9 +75,11 @@ export function potentialTables(
   const nearTable = hankelTable(fallingPath(end, nearDistances[nearCount - 1], 11 / thinnest), nearDistances);
 
   const farWavenumber = (Math.PI * (band.low + band.high)) / SPEED_OF_LIGHT;
-  // What the phase taken off leaves at the edges of the band: no more than 0.2 rad a step.
-  const detuning = (2 * Math.PI * (band.high - band.low)) / SPEED_OF_LIGHT;
-  const farStep = Math.min(0.03, 0.2 / (detuning * farReach + 1));
+  // What the phase taken off leaves, at the edges of the band and of the guided wave: no more than 0.3 rad a step.
+  const detuning = (2 * Math.PI * (band.high - band.low)) / SPEED_OF_LIGHT / 2;
+  const slowest = guidesTm0Only(medium, band.high) ? guidedWave(medium, band.high).wavenumber : end;
+  const beat = Math.max(detuning, slowest - farWavenumber);
+  const farStep = Math.min(0.03, 0.3 / (beat * farReach));
   const farCount = Math.max(8, Math.ceil(Math.log(farReach / farStart) / farStep) + 4);
   const farDistances = Float64Array.from({ length: farCount }, (_, m) => farStart * Math.exp(m * farStep));
   const octave = Math.ceil(Math.LN2 / farStep);

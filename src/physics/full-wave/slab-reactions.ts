@@ -7,7 +7,7 @@
  * along x and a linear one along y; that of two cells' charges is the average of G_q/(jω) over linear ones.
  *
  * Cells nearer than eight steps are integrated (`bspline-cells.ts`), others averaged by stencils from samples on the grid
- * (`bspline-stencil.ts`): relative error of either below 1e-6.
+ * (`bspline-stencil.ts`): relative error about 1e-6, up to 6e-6 beside the source where the steps exceed the slab's height.
  */
 import { type Complex, complex, mul, scale } from '../../numerics/complex.js';
 import { lagrangeWeights } from '../../numerics/lagrange.js';

