@@ -2,6 +2,7 @@ import type { ArrayDrawing } from '../dossier/document.js';
 import { axes, tiltInset } from './array-axes.js';
 import { columnEnds, feedTree, treeWidth } from './array-feed.js';
 import { amplitudeMarks } from './array-weights.js';
+import { textWidth } from './font.js';
 import { niceStep } from './scale.js';
 import type { Drawing, Shape, Stroke } from './shapes.js';
 import type { Theme } from './theme.js';
@@ -10,6 +11,8 @@ import { wrapText } from './wrap.js';
 const width = 480;
 const nearLeft = 64;
 const nearRight = 66;
+/** Largest size of the name of a column. */
+const nameSize = 8;
 /** Room for the arrow of a column that is fed from the large-x side. */
 const arrowRoom = 22;
 const top = 34;
@@ -24,7 +27,8 @@ export function arrayShapes(data: ArrayDrawing, theme: Theme, title: string, des
   const tree = data.network === undefined ? 0 : treeWidth(data.network.driven.length);
   const left = nearLeft + tree;
   const farEnd = data.columns.some(({ feed }) => feed.towards === '-x') ? arrowRoom : 0;
-  const right = nearRight + farEnd;
+  const names = data.columns.map(({ label }) => textWidth(label, nameSize) + 8);
+  const right = Math.max(nearRight, ...names) + farEnd;
   const scale = Math.min((width - left - right) / (x1 - x0), mostHeight / (y1 - y0));
   const planWidth = (x1 - x0) * scale;
   const planHeight = (y1 - y0) * scale;
@@ -89,7 +93,7 @@ export function arrayShapes(data: ArrayDrawing, theme: Theme, title: string, des
     return (low + high) / 2;
   });
   const pitch = middles.slice(1).reduce((least, y, i) => Math.min(least, Math.abs(y - middles[i]) * scale), 20);
-  const labelSize = Math.max(5, Math.min(8, pitch * 0.8));
+  const labelSize = Math.max(5, Math.min(nameSize, pitch * 0.8));
   for (const column of data.columns) shapes.push(...amplitudeMarks(column.rectangles, px, py, theme));
   data.columns.forEach((column, i) => {
     const y = py(middles[i]);

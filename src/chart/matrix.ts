@@ -1,17 +1,20 @@
 import type { MatrixDrawing } from '../dossier/document.js';
+import { textWidth } from './font.js';
 import { printNumber } from './scale.js';
 import type { Drawing, Shape } from './shapes.js';
 import type { Theme } from './theme.js';
 
 const width = 480;
-const left = 78;
 const top = 44;
 const mostCell = 44;
+const titleSize = 8;
 
 /** Cells on paper, shaded by level and each with its number: the shade only helps the eye find the largest. */
 export function matrixShapes(data: MatrixDrawing, theme: Theme, title: string, desc: string): Drawing {
   const { labels, cells, range } = data;
   const n = Math.max(1, labels.length);
+  const rowTitle = `${data.rowTitle} ↓`;
+  const left = Math.ceil(textWidth(rowTitle, titleSize)) + 18;
   const cell = Math.min(mostCell, (width - left - 12) / n);
   const high = Math.min(cell, 26);
   const size = Math.max(4.5, Math.min(8, cell * 0.26));
@@ -26,8 +29,8 @@ export function matrixShapes(data: MatrixDrawing, theme: Theme, title: string, d
     color: ink,
   });
   const shapes: Shape[] = [
-    text(left, 14, `${data.columnTitle} →`, 'start', 8),
-    text(left - 10, top - 6, `${data.rowTitle} ↓`, 'end', 8),
+    text(left, 14, `${data.columnTitle} →`, 'start', titleSize),
+    text(left - 10, top - 6, rowTitle, 'end', titleSize),
     ...labels.flatMap((label, i) => [
       text(left + (i + 0.5) * cell, top - 6, label, 'middle'),
       text(left - 6, top + (i + 0.5) * high + size * 0.35, label, 'end'),

@@ -7,6 +7,7 @@ import {
   type RunTask,
   readyBoard,
   runTask,
+  type SolverFor,
   type TaskResult,
 } from '../study/index.js';
 import { type AllowanceResult, type AllowanceTask, searchAllowance } from '../verdict/index.js';
@@ -46,15 +47,18 @@ export interface AllowanceJob extends OnBoard {
 
 export type Job = ReadyJob | ConfirmJob | StudyJob | AllowanceJob;
 
-/** @param unknownJob a `Job`, as it comes from another thread */
-export function carryOut(unknownJob: unknown): TaskResult | AllowanceResult | Confirmation | Board {
+/**
+ * @param unknownJob a `Job`, as it comes from another thread
+ * @param solver     that confirms; the full wave where left out
+ */
+export function carryOut(unknownJob: unknown, solver?: SolverFor): TaskResult | AllowanceResult | Confirmation | Board {
   const job = unknownJob as Job;
   const { board, analysis } = job;
   switch (job.kind) {
     case 'ready':
       return readyBoard(board, analysis);
     case 'confirm':
-      return confirmBoard(board, analysis, job.frequencies, job.earlier);
+      return confirmBoard(board, analysis, job.frequencies, job.earlier, solver);
     case 'study':
       return runTask(board, analysis, job.task, job.correction);
     case 'allowance':
@@ -77,5 +81,5 @@ export const boardsToReady = ({ boards }: Pack): Board[] => boards.filter(asksTo
 export function studyWorkers(): Workers {
   return import.meta.url.endsWith('.js')
     ? threadPool(new URL('./task-worker.js', import.meta.url))
-    : inThisThread(carryOut);
+    : inThisThread((job) => carryOut(job));
 }

@@ -48,11 +48,12 @@ function drawnExcitation({ board, study: { confirmation } }: BoardContext) {
 function arrayReading(board: Board, lengthMm: number, smallest: number | undefined): string {
   const patches = [...new Set(board.columns.map((c) => c.patches.length))];
   const ends = new Set(board.columns.map(({ direction = 1, sideFeed }) => (sideFeed ? 'side' : direction)));
-  const feed = ends.has('side')
-    ? 'a line from the side feeds each in the middle of a link'
-    : ends.size === 2
-      ? 'they are fed from both ends in turn'
-      : `the feed is at the ${ends.has(1) ? 'small' : 'large'}-x end`;
+  const feed =
+    ends.size > 1
+      ? 'arrows show where each is fed'
+      : ends.has('side')
+        ? 'a line from the side feeds each in the middle of a link'
+        : `the feed is at the ${ends.has(1) ? 'small' : 'large'}-x end`;
   const dummies = board.columns.filter(({ dummy }) => dummy === true).length;
   return [
     `${count(board.columns.length, 'series-fed column')} of ${patches.join(' or ')} patches at a pitch of ${millimetres(board.pitch)}, ${statedNumber(lengthMm, 2)} mm long with the feed lines`,

@@ -8,7 +8,7 @@ import { cell, chapter, DASH, figureBlock, number, prose, table } from './blocks
 import { type BoardContext, bandPoints } from './context.js';
 import type { Block, Chapter, LinesChart } from './document.js';
 import { engineTag } from './network-only.js';
-import { gigahertz, limitText, rounded, valueText } from './values.js';
+import { GAP, gigahertz, limitText, rounded, valueText } from './values.js';
 
 const DEGREES = 180 / Math.PI;
 /** Below this a coupling is as good as none, and a level stays a number. */
@@ -50,7 +50,7 @@ function matrixFigure({ context: { board }, scattering, at }: Coupled): Block {
   return figureBlock({
     id: 'coupling-matrix',
     title: `Coupling between columns at ${at}`,
-    reading: `The strongest coupling is ${valueText(strongest.value, 'dB')} from column ${strongest.column + 1} into column ${strongest.row + 1}.`,
+    reading: `The strongest coupling is ${formatNumber(strongest.value, 1)}${GAP}dB from column ${strongest.column + 1} into column ${strongest.row + 1}.`,
     alt: `Square of cells, one per pair of columns, each with the level of the wave that leaves one column while another is driven${outlined.length === 0 ? '' : '; pairs of different groups are outlined with a dashed line'}.`,
     content: {
       drawing: 'matrix',

@@ -1,14 +1,16 @@
 import type { QuantityName } from '../manifest/model.js';
+import { abs } from '../numerics/complex.js';
+import { formatNumber } from '../quantity/index.js';
 import type { PointResult } from '../study/results.js';
 import { quantityOf } from '../verdict/index.js';
 import { cell, chapter, figureBlock, number, prose, table } from './blocks.js';
 import { referenceText } from './chapter-board.js';
 import { NO_RESULTS } from './chapter-budget.js';
-import type { BoardContext } from './context.js';
+import { type BoardContext, bandPoints } from './context.js';
 import type { Block, Cell, Chapter, LinesChart } from './document.js';
 import { COMPARED_FIGURES } from './engine-figures.js';
 import { engineTag } from './network-only.js';
-import { celsius, gigahertz, limitText, rounded, valueText } from './values.js';
+import { celsius, GAP, gigahertz, limitText, rounded, valueText } from './values.js';
 
 const KINDS = [
   { quantity: 'reflection', id: 'match-passive', engine: 'reflection', name: 'Passive reflection, worst column' },
@@ -137,6 +139,27 @@ function matchRows(context: BoardContext): readonly (readonly Cell[])[] {
   });
 }
 
+/** What the feed network does at its input, nominal temperature; nothing for boards without one. */
+function feedTable(context: BoardContext): readonly Block[] {
+  const points = (bandPoints(context)?.nominal ?? []).flatMap(({ frequency, feed }) =>
+    feed === undefined ? [] : [{ frequency, feed }],
+  );
+  if (points.length === 0) return [];
+  return [
+    table(
+      'feed-table',
+      `Feed network at its input, with the columns behind it, nominal temperature${engineTag(context.study)}`,
+      ['Frequency', '#Reflection at the input|1.2', '#Power into the columns|1.2', '#Power burnt in resistors|1.2'],
+      points.map(({ frequency, feed }) => [
+        cell(gigahertz(frequency)),
+        number(valueText(20 * Math.log10(Math.max(abs(feed.inputReflection), 1e-6)), 'dB')),
+        number(valueText(10 * Math.log10(feed.transmission), 'dB')),
+        number(`${formatNumber(100 * feed.burnt, 2)}${GAP}%`),
+      ]),
+    ),
+  ];
+}
+
 export function matchChapter(context: BoardContext): Chapter {
   if (context.study.nominal.points.length === 0) return chapter('match', 'Match', prose(NO_RESULTS));
   return chapter(
@@ -149,6 +172,7 @@ export function matchChapter(context: BoardContext): Chapter {
       ['Reflection|2', '#Temperature', '#Lower edge', '#Centre', '#Upper edge', '#Largest', '#At'],
       matchRows(context),
     ),
+    ...feedTable(context),
     prose(
       `Referred to the ${referenceText(context.board)}, at the true edge of the first patch. Passive: each column driven alone, the others terminated in the reference impedance. Active: all columns driven with the weights of the feed.`,
     ),

@@ -1,8 +1,9 @@
 import type { Board, QuantityName } from '../manifest/model.js';
+import { formatNumber } from '../quantity/index.js';
 import type { EngineComparison } from '../study/results.js';
 import { ENGINE_ACCURACY } from '../verdict/index.js';
 import { type ComparedFigure, differencesOf, reflectionDifference } from './engine-figures.js';
-import { changeText, valueText } from './values.js';
+import { changeText, GAP, valueText } from './values.js';
 
 /** The quantity whose stated accuracy a compared figure is held against, and what its value there is divided by. */
 const HELD: Readonly<Record<string, { readonly quantity: QuantityName; readonly scale?: number }>> = {
@@ -53,7 +54,7 @@ export function trustOf(board: Board, points: readonly EngineComparison[]): read
 }
 
 export const differenceText = (difference: number, unit: ComparedFigure['unit']): string =>
-  unit === '%' ? changeText(difference, 'percent').replace(/\u00a0percent$/, '\u00a0%') : changeText(difference, unit);
+  unit === '%' ? `${formatNumber(difference, 1, { plus: true })}${GAP}%` : changeText(difference, unit);
 
 const lower = (title: string): string => title.replace(/^[A-Z]/, (letter) => letter.toLowerCase());
 

@@ -6,10 +6,10 @@ import { statedNumber } from './values.js';
 
 const inMillimetres = (metres: number): string => statedNumber(metres * 1e3, 4);
 
-/** What makes two columns alike: all but where they stand and whether they are driven. */
+/** What makes two columns alike: all but where they stand, which way they run and whether they are driven. */
 const sameLayout = (a: ColumnLayout, b: ColumnLayout): boolean => {
-  const form = ({ feedLine, patches, links, direction = 1, matching, inset, termination, sideFeed }: ColumnLayout) =>
-    JSON.stringify([feedLine, patches, links, direction, matching, inset, termination, sideFeed]);
+  const form = ({ feedLine, patches, links, matching, inset, termination, sideFeed }: ColumnLayout) =>
+    JSON.stringify([feedLine, patches, links, matching, inset, termination, sideFeed]);
   return form(a) === form(b);
 };
 
@@ -17,9 +17,8 @@ export const distinctLayouts = (columns: readonly ColumnLayout[]): readonly Colu
   columns.filter((column, i) => columns.findIndex((c) => sameLayout(c, column)) === i);
 
 /** What the table of patches cannot say, in words. */
-function formWords({ direction, matching = [], inset, termination, sideFeed }: ColumnLayout): readonly string[] {
+function formWords({ matching = [], inset, termination, sideFeed }: ColumnLayout): readonly string[] {
   return [
-    ...(direction === -1 ? ['The column is fed at its large-x end and runs towards −x.'] : []),
     ...(matching.length > 0 ? ['Reflections are taken where the matching sections begin.'] : []),
     ...(inset === undefined
       ? []
@@ -76,7 +75,15 @@ const originOf = ({ retuned, sized }: Board): string => {
 export function layoutTables(board: Board): readonly Block[] {
   return distinctLayouts(board.columns).flatMap((column, n) => {
     const same = board.columns.flatMap((c, i) => (sameLayout(c, column) ? [i + 1] : []));
-    const words = formWords(column);
+    const reversed = same.filter((number) => board.columns[number - 1].direction === -1);
+    const words = [
+      ...(reversed.length === 0
+        ? []
+        : [
+            `Fed at the large-x end and running towards −x: column${reversed.length === 1 ? '' : 's'} ${reversed.join(', ')}.`,
+          ]),
+      ...formWords(column),
+    ];
     return [
       table(
         `layout-${n + 1}`,

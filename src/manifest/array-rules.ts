@@ -2,6 +2,7 @@ import { formatQuantity } from '../quantity/index.js';
 import { columnFormRules } from './column-form-rules.js';
 import { columnOutline, sideLine, touches } from './column-outline.js';
 import type { BoardDocument } from './documents/board-document.js';
+import { etchRules } from './etch-rules.js';
 import { si } from './figures.js';
 import { groupRules } from './group-rules.js';
 import type { ColumnLayout } from './model.js';
@@ -23,6 +24,7 @@ export function arrayRules(report: RuleReport, board: BoardDocument): void {
   if (array.offset_x && array.offset_x.length !== array.columns) return;
   const columns = drawnColumns(array);
   columnFormRules(report, array, columns[0]!);
+  etchRules(report, board, columns[0]!);
   apartRules(report, board, columns);
 }
 

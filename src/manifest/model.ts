@@ -96,7 +96,7 @@ export interface Transition {
   readonly file: string;
   /** Ohm, real; both ports. */
   readonly referenceImpedance: number;
-  /** Hz, ascending; S as [S11, S21, S12, S22], each re, im. Port 2 faces the antenna. */
+  /** Over the band and some beyond: Hz, ascending; S as [S11, S21, S12, S22], each re, im. Port 2 faces the antenna. */
   readonly points: readonly { readonly frequency: number; readonly s: readonly (readonly [number, number])[] }[];
 }
 

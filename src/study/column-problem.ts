@@ -1,6 +1,7 @@
 import type { Board } from '../manifest/model.js';
 import type { ColumnProblem } from '../physics/column/index.js';
 import { columnGeometry } from './geometry.js';
+import { FARTHEST_SHIFT } from './shift.js';
 import type { BoardValues } from './values.js';
 
 /** A board as the column solvers prepare for it. Loss is a condition of each solve, not of the preparation. */
@@ -11,5 +12,5 @@ export const columnProblem = (board: Board, values: BoardValues): ColumnProblem 
   referenceImpedance: board.referenceImpedance,
 });
 
-/** Of the band: the network is prepared for frequencies that a shift does not leave. */
-export const highestSolved = (board: Board): number => 1.01 * board.band.high;
+/** The network is prepared for frequencies that no shift leaves. */
+export const highestSolved = (board: Board): number => (1 + FARTHEST_SHIFT) * board.band.high;

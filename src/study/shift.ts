@@ -2,9 +2,9 @@
 import { abs2, type Complex, sub } from '../numerics/complex.js';
 import { minimumBetween } from '../numerics/golden-section.js';
 
-/** Share of the frequency up to which a shift is looked for: five times what the network's resonance is off by. */
-const FARTHEST = 0.0075;
-const STEPS = 12;
+/** Share of the frequency up to which a shift is looked for: what 3 % of permittivity or a thick strip may do to a resonance. */
+export const FARTHEST_SHIFT = 0.015;
+const STEPS = 24;
 /** A shift that takes away less than this share of the difference is as likely chance: a few frequencies are compared. */
 const WORTH_SHARE = 0.15;
 /** Resolution, Hz. */
@@ -24,7 +24,7 @@ export function aligningShift(
   fullWave: readonly Reflections[],
   network: (frequency: number, conditionsFor: number) => readonly Complex[],
 ): number {
-  const farthest = FARTHEST * fullWave[0].frequency;
+  const farthest = FARTHEST_SHIFT * fullWave[0].frequency;
   const off = (shift: number): number => {
     const squares = fullWave.flatMap(({ frequency, reflection }) => {
       const other = network(frequency - shift, frequency);

@@ -69,9 +69,10 @@ export function runSweep(
       const solution = engine.solve({ frequency: frequency - shift, ...state });
       keep(solution.flags);
       const place = { board, values, state, frequency, temperatureC };
-      points.push(
-        evaluate(place, solution, { closure: centre, coupling: nominal || !!board.groups }, differences?.[f]),
-      );
+      const wanted = { closure: centre, coupling: nominal || !!board.groups };
+      const { point, found } = evaluate(place, solution, wanted, differences?.[f]);
+      points.push(point);
+      keep(found);
     });
   return { sweep: { id, label, points, line }, flags: [...flags.values()] };
 }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { formatProblem } from '../../src/manifest/index.js';
-import { type ArrayText, withArray } from './array-fixture.js';
+import { type ArrayText, boardText, withArray } from './array-fixture.js';
 import { load, problemsOf } from './fixture.js';
 
 const sizedFor = (change: Readonly<Record<string, string>> = {}, more = ''): ArrayText => {
@@ -263,6 +263,24 @@ const CASES: readonly (readonly [name: string, change: ArrayText, message: RegEx
 ];
 
 describe('messages on arrays and feeds', () => {
+  it.each([
+    [
+      'a slot that etching closes',
+      '0 um, spread: 110 um',
+      /found copper that grows by up to 110.µm; the narrowest gap of a column is 100.µm wide\.$/,
+    ],
+    [
+      'a line that etching takes away',
+      '-60 um, spread: 90 um',
+      /found copper that shrinks by up to 150.µm; the narrowest copper of a column is 150.µm wide\.$/,
+    ],
+  ])('%s', (_, etch, message) => {
+    const text = boardText({ array: '  inset: { depth: 0.2 mm, gap: 0.1 mm }\n' }).replace('0 um, spread: 15 um', etch);
+    const texts = problemsOf(load({ 'boards/qs-1.yaml': text })).map(formatProblem);
+    expect(texts).toEqual([expect.stringMatching(message)]);
+    expect(texts[0]).toMatch(/^boards\/qs-1\.yaml:\d+:\d+ {2}tolerances\.etch\n/);
+  });
+
   it.each(CASES)('%s: one fault, one message, where it stands', (_name, change, message) => {
     const texts = problemsOf(load(withArray(change))).map(formatProblem);
     expect(texts).toEqual([expect.stringMatching(message)]);

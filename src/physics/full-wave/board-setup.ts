@@ -52,7 +52,7 @@ export function setUpBoard(
   });
   const wavelength = SPEED_OF_LIGHT / (Math.sqrt(band.low * band.high) * Math.sqrt(feedLine.effectivePermittivity));
   const clear = CLEAR * slab.height;
-  const outline = outlineOf(columns, { run: 2 * clear + READ * wavelength, stub: STUB * wavelength });
+  const outline = outlineOf(columns, { run: 2 * clear + +(process.env.READ ?? READ) * wavelength, stub: STUB * wavelength });
   const grid = chooseGrid(columns, outline.rectangles, settings.cellsPerPatch ?? 17, settings.cellsPerLine ?? 2);
   const layers = { ...slab, ...(problem.cover && { cover: problem.cover }) };
   const mesh = drawMesh(outline.rectangles, grid, edgeTrims(layers, problem.stripThickness));

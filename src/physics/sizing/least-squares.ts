@@ -9,6 +9,8 @@ export interface LeastSquaresSettings {
   /** Between which each unknown is kept. */
   readonly low: Float64Array;
   readonly high: Float64Array;
+  /** Steps that one move makes at most: slopes say little of what lies further away. */
+  readonly reach: number;
   /** Done once the largest residual is below it. */
   readonly tolerance: number;
   /** Calls of the function after which the best point so far is returned. */
@@ -31,7 +33,7 @@ const ENOUGH = 0.95;
  * @throws RangeError where residuals at the start are not finite
  */
 export function leastSquares(f: Residuals, start: Float64Array, settings: LeastSquaresSettings): LeastSquaresResult {
-  const { step, low, high, tolerance, budget } = settings;
+  const { step, low, high, reach, tolerance, budget } = settings;
   let calls = 0;
   const call = (x: Float64Array): Float64Array => {
     calls += 1;
@@ -51,6 +53,8 @@ export function leastSquares(f: Residuals, start: Float64Array, settings: LeastS
       fresh = true;
     }
     const move = dampedStep(slopes, r, damping);
+    const shorten = Math.min(1, reach / largest(move));
+    for (let i = 0; i < move.length; i++) move[i] *= shorten;
     const next = x.map((value, i) => Math.min(high[i], Math.max(low[i], value + move[i] * step[i])));
     for (let i = 0; i < move.length; i++) move[i] = (next[i] - x[i]) / step[i];
     const there = call(next);

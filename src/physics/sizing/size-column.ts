@@ -6,10 +6,10 @@ import { excitationError, responseOf, solveColumn } from './column-response.js';
 import { type ColumnUnknowns, columnUnknowns } from './column-unknowns.js';
 import { type LeastSquaresResult, leastSquares } from './least-squares.js';
 import { type SizedColumn, type SizingRequest, requireRequest } from './request.js';
-import { firstGuess, guessFrom, halved } from './starting-layout.js';
+import { firstGuesses, guessFrom, halved } from './starting-layout.js';
 
 const BUDGET = 220;
-const TOLERANCE = 2e-3;
+const TOLERANCE = 5e-3;
 
 /** Where the network is to be steered to instead of a perfect column: what another engine found beside it. */
 interface Aim {
@@ -18,27 +18,57 @@ interface Aim {
 }
 
 /** Columns up to this many patches are found from closed forms; longer ones by way of shorter ones. */
-const SHORT = 5;
+const SHORT = 3;
+const WORD = 0.03;
 
 export function sizeColumn(request: SizingRequest): SizedColumn {
   requireRequest(request);
   const amplitudes = taperAmplitudes(request.taper, request.patches);
-  const { geometry, solves } = search(request, amplitudes);
+  const { geometry, solves } = search(request, amplitudes, TOLERANCE);
   return figures(request, amplitudes, geometry, solves);
 }
 
-function search(request: SizingRequest, amplitudes: readonly number[]): { geometry: ColumnGeometry; solves: number } {
+function search(
+  request: SizingRequest,
+  amplitudes: readonly number[],
+  tolerance: number,
+): { geometry: ColumnGeometry; solves: number } {
   let before = 0;
-  let guess = firstGuess(request, amplitudes);
+  let unknowns: ColumnUnknowns;
   if (amplitudes.length > SHORT) {
     const fewer = halved(amplitudes);
-    const shorter = search(request, fewer);
-    guess = guessFrom(request, amplitudes, shorter.geometry, fewer);
+    const shorter = search(request, fewer, WORD);
+    unknowns = columnUnknowns(request, amplitudes, guessFrom(request, amplitudes, shorter.geometry, fewer));
     before = shorter.solves;
+  } else {
+    const tried = firstGuesses(request, amplitudes).map((guess) => columnUnknowns(request, amplitudes, guess));
+    const sizes = tried.map((u) => squares(residuals(request, amplitudes, u.geometry(u.start))));
+    unknowns = tried[sizes.indexOf(Math.min(...sizes))];
+    before = tried.length;
   }
-  const unknowns = columnUnknowns(request, amplitudes, guess);
-  const found = steer(request, amplitudes, unknowns, unknowns.start);
+  const found = steer(request, amplitudes, unknowns, unknowns.start, tolerance);
   return { geometry: unknowns.geometry(found.x), solves: before + found.calls };
+}
+
+const squares = (r: Float64Array): number => r.reduce((sum, value) => sum + value * value, 0);
+
+function residuals(
+  request: SizingRequest,
+  amplitudes: readonly number[],
+  geometry: ColumnGeometry,
+  aim?: Aim,
+): Float64Array {
+  const { reflection, moments } = responseOf(solveColumn(request, geometry));
+  const error = excitationError(moments, amplitudes);
+  const r = new Float64Array(2 * error.length + 2);
+  error.forEach((e, i) => {
+    r[2 * i] = e.re - (aim?.excitation[i].re ?? 1);
+    r[2 * i + 1] = e.im - (aim?.excitation[i].im ?? 0);
+  });
+  const s = aim ? sub(reflection, aim.reflection) : reflection;
+  r[2 * error.length] = s.re;
+  r[2 * error.length + 1] = s.im;
+  return r;
 }
 
 function steer(
@@ -46,22 +76,11 @@ function steer(
   amplitudes: readonly number[],
   unknowns: ColumnUnknowns,
   start: Float64Array,
+  tolerance: number,
   aim?: Aim,
 ): LeastSquaresResult {
-  const residuals = (x: Float64Array): Float64Array => {
-    const { reflection, moments } = responseOf(solveColumn(request, unknowns.geometry(x)));
-    const error = excitationError(moments, amplitudes);
-    const r = new Float64Array(2 * error.length + 2);
-    error.forEach((e, i) => {
-      r[2 * i] = e.re - (aim?.excitation[i].re ?? 1);
-      r[2 * i + 1] = e.im - (aim?.excitation[i].im ?? 0);
-    });
-    const s = aim ? sub(reflection, aim.reflection) : reflection;
-    r[2 * error.length] = s.re;
-    r[2 * error.length + 1] = s.im;
-    return r;
-  };
-  return leastSquares(residuals, start, { ...unknowns, tolerance: TOLERANCE, budget: BUDGET });
+  const f = (x: Float64Array): Float64Array => residuals(request, amplitudes, unknowns.geometry(x), aim);
+  return leastSquares(f, start, { ...unknowns, reach: 20, tolerance, budget: BUDGET });
 }
 
 function figures(

@@ -1,25 +1,29 @@
 /** Closed forms from which sizing starts, and which tie a patch's length to its width throughout. */
-import { SPEED_OF_LIGHT } from '../constants.js';
+import { ETA0, SPEED_OF_LIGHT } from '../constants.js';
 import type { ColumnGeometry } from '../column/index.js';
 import { microstripDispersive, openEndExtension } from '../line/index.js';
 import type { SizingRequest } from './request.js';
 
 /** Where a search begins. */
 export interface ColumnGuess {
-  /** Of a patch of amplitude 1, m. */
-  readonly unitWidth: number;
+  /** Effective width, less what lines silence of it, of a patch of amplitude 1, m. */
+  readonly unitMoment: number;
   /** Patch length over the resonant one. */
   readonly lengthFactor: number;
   /** Link length in half waves over the place along the column, 0 to 1. */
   link(place: number): number;
 }
 
-/** The attached lines raise a patch's resonance by a few per cent: its length makes up for it. */
-export const firstGuess = (request: SizingRequest, amplitudes: readonly number[]): ColumnGuess => ({
-  unitWidth: startingWidth(request, amplitudes),
-  lengthFactor: 1.03,
-  link: () => 1,
-});
+/**
+ * Guesses for a short column, closed form for its widths: the attached lines make a patch resonate a few per cent higher, and
+ * steps and thickness of the slab shorten or lengthen the links, so that the best of a few is to be tried.
+ */
+export function firstGuesses(request: SizingRequest, amplitudes: readonly number[]): ColumnGuess[] {
+  const unitMoment = startingWidth(request, amplitudes);
+  return [1, 1.03, 1.06].flatMap((lengthFactor) =>
+    [0.93, 1, 1.07].map((link): ColumnGuess => ({ unitMoment, lengthFactor, link: () => link })),
+  );
+}
 
 /**
  * From a shorter column that is sized already: its length factor, its links by their place, and its widths over their
@@ -35,9 +39,12 @@ export function guessFrom(
   const half = halfWave(request, links[0].width);
   const mean = (values: readonly number[]): number => values.reduce((a, b) => a + b, 0) / values.length;
   const squares = (values: readonly number[]): number => values.reduce((sum, a) => sum + a * a, 0);
-  const widest = patches.map((p, i) => [p.width, itsAmplitudes[i]]).sort((a, b) => b[1] - a[1])[0];
+  const widest = itsAmplitudes.indexOf(Math.max(...itsAmplitudes));
+  const moment =
+    (effectiveWidth(request, patches[widest].width) - silenced(request, widest, patches.length)) /
+    itsAmplitudes[widest];
   return {
-    unitWidth: (widest[0] / widest[1]) * Math.sqrt(squares(itsAmplitudes) / squares(amplitudes)),
+    unitMoment: moment * Math.sqrt(squares(itsAmplitudes) / squares(amplitudes)),
     lengthFactor: mean(patches.map((p) => p.length / resonantLength(request, p.width))),
     link: (place) => {
       const at = Math.min(Math.max(place * links.length - 0.5, 0), links.length - 1);
@@ -46,6 +53,39 @@ export function guessFrom(
       return (links[i].length + (at - i) * (next.length - links[i].length)) / half;
     },
   };
+}
+
+/** Width of the parallel-plate line of the same impedance and speed as a microstrip, m. */
+function effectiveWidth(request: SizingRequest, width: number): number {
+  const { slab, stripThickness: thickness, frequency } = request;
+  const { impedance, effectivePermittivity } = microstripDispersive(
+    { width, height: slab.height, thickness, permittivity: slab.permittivity },
+    frequency,
+  );
+  return (ETA0 * slab.height) / (impedance * Math.sqrt(effectivePermittivity));
+}
+
+/** What the lines at its edges take from a patch's effective width, m: half of theirs for each; the last has one only. */
+function silenced(request: SizingRequest, patch: number, patches: number): number {
+  const { feedLineWidth, linkWidth = feedLineWidth } = request;
+  return (effectiveWidth(request, linkWidth) * (patch === patches - 1 ? 1 : 2)) / 2;
+}
+
+/** Width, m, with which a patch radiates an amplitude: its effective width exceeds it by little that hardly changes. */
+export function widthFor(request: SizingRequest, unitMoment: number, patch: number, amplitudes: readonly number[]): number {
+  const wanted = unitMoment * amplitudes[patch] + silenced(request, patch, amplitudes.length);
+  const [least, greatest] = widthLimits(request);
+  let width = least;
+  for (let round = 0; round < 6; round++)
+    width = Math.min(greatest, Math.max(least, width + wanted - effectiveWidth(request, width)));
+  return width;
+}
+
+/** Widths of a patch, m: it is wider than the lines that enter it, and narrower than half a wave in air. */
+export function widthLimits(request: SizingRequest): readonly [number, number] {
+  const { frequency, feedLineWidth, linkWidth = feedLineWidth, leastWidth, greatestWidth } = request;
+  const half = SPEED_OF_LIGHT / (2 * frequency);
+  return [Math.max(leastWidth, 1.2 * feedLineWidth, 1.2 * linkWidth), Math.min(half, greatestWidth ?? half)];
 }
 
 /** Amplitudes of a column of half as many patches, read off along those of the long one. */

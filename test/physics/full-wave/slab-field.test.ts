@@ -54,7 +54,7 @@ describe('far field of a sheet current', () => {
     }
   });
 
-  it('falls with loss in slab, ground and cover', () => {
+  it('falls a little with loss in the cover', () => {
     const cover = { permittivity: 3.5, lossTangent: 0, thickness: 30e-6 };
     const reference = currentTransfer({ ...SLAB, cover }, F, 0.2);
     const lossy = currentTransfer({ ...SLAB, cover: { ...cover, lossTangent: 0.03 } }, F, 0.2);
