@@ -27,7 +27,8 @@ export function linesSpec(chart: LinesChart, theme: Theme): VegaLiteSpec {
   const xType = chart.xScale ?? 'linear';
   const yType = chart.yScale ?? 'linear';
   const [xDomain, yDomain] = domains(chart, xType, yType);
-  const xStep = niceStep(xDomain[1] - xDomain[0], 8);
+  const fine = niceStep(xDomain[1] - xDomain[0], 8);
+  const xStep = chart.xWhole ? Math.max(1, fine) : fine;
   const yStep = niceStep(yDomain[1] - yDomain[0], 7);
   const named = [
     ...chart.series.map((series) => ({ text: series.label, bold: series.emphasis === true })),

@@ -50,7 +50,7 @@ function comparisonTable(board: Board, points: readonly EngineComparison[]): Blo
 function runTable(points: readonly EngineComparison[]): Block {
   return table(
     'engine-runs',
-    'What each run rests on; power that is missing or too much stands as a share of the accepted power',
+    'What each run rests on; power that is missing (+) or too much (−) stands as a share of the accepted power',
     [
       'Frequency',
       '#Power residual, full wave|1.2',
@@ -129,7 +129,7 @@ export function enginesChapter(context: BoardContext): Chapter {
       : [prose(`The full wave did not run on this state of the board: the differences are those of ${carriedFrom}.`)]),
     prose(
       { strong: 'How far the fast engine can be trusted on this board. ' },
-      trustSentences(board, points).join(' '),
+      trustSentences(board, points, alignment).join(' '),
     ),
     facts(
       'engine-facts',

@@ -10,7 +10,7 @@ import { judgedTag, networkOnlyCaution } from './network-only.js';
 import { retunedNotice } from './retuning.js';
 import { sizedNotice } from './sizing.js';
 import { COMPARED_WITH, NOT_MODELLED } from './statements.js';
-import { limitText, marginText, placeText, uncertaintyText, valueText } from './values.js';
+import { gigahertz, limitText, marginText, placeText, uncertaintyText, valueText } from './values.js';
 
 /** Worst value, or why there is none; with what stands behind a value that no full wave confirms. */
 export function valueCell({ requirement, verdict }: Judged, study: BoardStudy): Cell {
@@ -150,6 +150,19 @@ function assumptions({ board }: BoardContext): readonly Block[] {
   ];
 }
 
+/** Which engine the figures of the columns come from; where there are none, or the network alone, a caution says so. */
+function solvedBy({ board, study: { confirmation } }: BoardContext): readonly (readonly [string, ...Inline[]])[] {
+  if (confirmation.kind === 'network only') return [];
+  const at = confirmation.points.map(({ frequency }) => gigahertz(frequency)).join(', ');
+  return [
+    [
+      'Columns solved by',
+      `the full wave at ${at}, and by the network corrected to it everywhere else: `,
+      link('Two engines', boardPage(board.id), 'engines'),
+    ],
+  ];
+}
+
 /** Page one of a dossier: what was found, against what, and what it rests on. */
 export function verdictChapter(context: BoardContext): Chapter {
   const { board, verdict, judged } = context;
@@ -176,6 +189,7 @@ export function verdictChapter(context: BoardContext): Chapter {
           ? 'none'
           : undecided.map(({ requirement }) => `${requirement.id} (${quantityTitle(requirement)})`).join('; '),
       ],
+      ...solvedBy(context),
       ['Rule', 'how statuses follow from these: ', link('Definitions', DEFINITIONS, 'statuses')],
     ),
     ...concessions(context),

@@ -157,6 +157,8 @@ export interface LinesChart {
   readonly xTitle: string;
   readonly yTitle: string;
   readonly xScale?: 'linear' | 'log';
+  /** The axis counts: whole numbers only. */
+  readonly xWhole?: true;
   readonly yScale?: 'linear' | 'log';
   readonly xDomain?: readonly [number, number];
   readonly yDomain?: readonly [number, number];

@@ -58,15 +58,24 @@ export const differenceText = (difference: number, unit: ComparedFigure['unit'])
 
 const lower = (title: string): string => title.replace(/^[A-Z]/, (letter) => letter.toLowerCase());
 
+const shiftClause = (alignment: { readonly shift: number; readonly remaining: number } | undefined): string =>
+  alignment === undefined || alignment.shift === 0
+    ? ''
+    : `; with the network moved by ${formatNumber(alignment.shift / 1e9, 3, { plus: true })}${GAP}GHz ${valueText(alignment.remaining, '1')} of it remains`;
+
 /** What a reader may conclude from the comparison about the engine behind the sweeps, tolerances and allowances. */
-export function trustSentences(board: Board, points: readonly EngineComparison[]): readonly string[] {
+export function trustSentences(
+  board: Board,
+  points: readonly EngineComparison[],
+  alignment?: { readonly shift: number; readonly remaining: number },
+): readonly string[] {
   const trust = trustOf(board, points);
   const outside = trust.filter(({ inside }) => !inside);
   const inside = trust.filter((entry) => entry.inside && entry.granted !== undefined);
   const complex = Math.max(...points.map(reflectionDifference));
   const list = (entries: readonly Trust[]): string => entries.map(({ figure }) => lower(figure.title)).join('; ');
   return [
-    `Complex reflection differs by up to ${valueText(complex, '1')}, root mean square over the columns.`,
+    `Complex reflection differs by up to ${valueText(complex, '1')}, root mean square over the columns${shiftClause(alignment)}.`,
     ...(inside.length === 0
       ? []
       : [`Within the accuracy that the uncertainty grants the network before any correction: ${list(inside)}.`]),

@@ -1,6 +1,6 @@
 import type { EvidenceResult } from '../evidence/index.js';
 import { decimalsFor, formatNumber } from '../quantity/index.js';
-import { ENGINE_ACCURACY, quantityOf } from '../verdict/index.js';
+import { ENGINE_ACCURACY, type EngineAccuracy, FULL_WAVE_ACCURACY, quantityOf } from '../verdict/index.js';
 import { accuracyChapter } from './accuracy-chapter.js';
 import { caution, cell, chapter, facts, number, prose, table } from './blocks.js';
 import { cautionsChapter } from './chapter-record.js';
@@ -54,6 +54,19 @@ function checkTable(topic: string, checks: readonly EvidenceResult[], n: number)
     ]),
   );
 }
+
+const accuracyTable = (id: string, caption: string, entries: readonly EngineAccuracy[]): Block =>
+  table(
+    id,
+    caption,
+    ['Quantity|1.2', 'Figure|2', 'Ground|0.7', 'From|2.6'],
+    entries.map((entry) => [
+      cell(quantityOf(entry.quantity).title),
+      cell(entry.statement),
+      cell(entry.ground),
+      cell(entry.source),
+    ]),
+  );
 
 export function evidencePage(input: PackInput): DocumentPage {
   const { evidence, methods, accuracy } = input;
@@ -116,20 +129,19 @@ export function evidencePage(input: PackInput): DocumentPage {
         'engine-accuracy',
         'Engine accuracy',
         prose(
-          'How far the column network may be from the truth, by quantity, as it enters every uncertainty. Compared: found against independent full-wave solutions; argued: follows from compared figures. The rule that uses it stands under ',
+          'How far each engine may be from the truth, by quantity, as it enters every uncertainty. Compared: found against independent full-wave solutions; argued: follows from compared figures. The rule that uses it stands under ',
           link('Definitions', DEFINITIONS, 'uncertainty-rule'),
-          '. It holds inside the range of the network; outside, the dossier flags it.',
+          '. It holds inside the range of the engine; outside, the dossier flags it.',
         ),
-        table(
+        accuracyTable(
+          'full-wave-accuracy-table',
+          'Full wave, at the frequencies where it ran on a board',
+          FULL_WAVE_ACCURACY,
+        ),
+        accuracyTable(
           'accuracy-table',
-          'Engine accuracy by quantity',
-          ['Quantity|1.2', 'Figure|2', 'Ground|0.7', 'From|2.6'],
-          ENGINE_ACCURACY.map((entry) => [
-            cell(quantityOf(entry.quantity).title),
-            cell(entry.statement),
-            cell(entry.ground),
-            cell(entry.source),
-          ]),
+          'Network and line solver; widened where the full wave did not run',
+          ENGINE_ACCURACY,
         ),
       ),
       cautionsChapter(),

@@ -50,6 +50,31 @@ function departure({ amplitude, phaseDeg }: ColumnExcitation, asked: readonly nu
 const driven = ({ columns, feed }: Board): readonly number[] =>
   columns.flatMap(({ dummy }, i) => (dummy === true || feed[i]?.amplitude === 0 ? [] : [i]));
 
+/** Of every driven column how far it is from what was asked: the pictures show one. */
+function departureTable(
+  columns: readonly { readonly c: number; readonly off: Departure; readonly offNetwork: Departure }[],
+  at: string,
+): Block {
+  const tapered = columns.some(({ off }) => off.amplitudeDb !== undefined);
+  const decibels = (db: number | undefined) => number(db === undefined ? DASH : valueText(db, 'dB'));
+  return table(
+    'excitation-columns',
+    `Largest departure along each driven column at ${at}: ${tapered ? 'of amplitude from the taper asked for, ' : ''}of phase from its mean`,
+    [
+      'Column',
+      ...(tapered ? ['#Amplitude, full wave|1.2', '#Amplitude, network|1.2'] : []),
+      '#Phase, full wave|1.2',
+      '#Phase, network|1.2',
+    ],
+    columns.map(({ c, off, offNetwork }) => [
+      cell(`${c + 1}`),
+      ...(tapered ? [decibels(off.amplitudeDb), decibels(offNetwork.amplitudeDb)] : []),
+      number(valueText(off.phaseDeg, 'deg')),
+      number(valueText(offNetwork.phaseDeg, 'deg')),
+    ]),
+  );
+}
+
 /** Amplitude and phase of every patch against what was asked, by both engines, at the band centre. */
 export function excitationBlocks(board: Board, points: readonly EngineComparison[]): readonly Block[] {
   const { fullWave, network, frequency } = centreOf(board, points);
@@ -76,7 +101,6 @@ export function excitationBlocks(board: Board, points: readonly EngineComparison
     worst.off.amplitudeDb === undefined
       ? 'no taper was asked for'
       : `the largest departure from the taper asked for is ${formatNumber(worst.off.amplitudeDb, 2)} dB`;
-  const decibels = (db: number | undefined): string => (db === undefined ? DASH : valueText(db, 'dB'));
   return [
     figureBlock({
       id: 'excitation-amplitude',
@@ -86,6 +110,7 @@ export function excitationBlocks(board: Board, points: readonly EngineComparison
       content: {
         chart: 'lines',
         xTitle: 'Patch, counted from the feed (1)',
+        xWhole: true,
         yTitle: 'Amplitude over the largest (1)',
         yDomain: [0, 1.05],
         series: [
@@ -103,6 +128,7 @@ export function excitationBlocks(board: Board, points: readonly EngineComparison
       content: {
         chart: 'lines',
         xTitle: 'Patch, counted from the feed (1)',
+        xWhole: true,
         yTitle: 'Phase against the mean (°)',
         series: [
           {
@@ -123,7 +149,7 @@ export function excitationBlocks(board: Board, points: readonly EngineComparison
       `Excitation of ${name} at ${at}, patch by patch; amplitude over the largest, phase against the mean`,
       [
         'Patch',
-        '#Amplitude asked for|1.2',
+        ...(worst.asked === undefined ? [] : ['#Amplitude asked for|1.2']),
         '#Amplitude, full wave|1.2',
         '#Amplitude, network|1.2',
         '#Phase, full wave|1.2',
@@ -131,30 +157,13 @@ export function excitationBlocks(board: Board, points: readonly EngineComparison
       ],
       worst.byFullWave.amplitude.map((amplitude, i) => [
         cell(`${i + 1}`),
-        worst.asked === undefined ? cell(DASH) : number(formatNumber(worst.asked[i], 3)),
+        ...(worst.asked === undefined ? [] : [number(formatNumber(worst.asked[i], 3))]),
         number(formatNumber(amplitude, 3)),
         number(formatNumber(worst.byNetwork.amplitude[i], 3)),
         number(changeText(worst.byFullWave.phaseDeg[i], 'deg')),
         number(changeText(worst.byNetwork.phaseDeg[i], 'deg')),
       ]),
     ),
-    table(
-      'excitation-columns',
-      `Largest departure along each driven column at ${at}: of amplitude from the taper asked for, of phase from its mean`,
-      [
-        'Column',
-        '#Amplitude, full wave|1.2',
-        '#Amplitude, network|1.2',
-        '#Phase, full wave|1.2',
-        '#Phase, network|1.2',
-      ],
-      columns.map(({ c, off, offNetwork }) => [
-        cell(`${c + 1}`),
-        number(decibels(off.amplitudeDb)),
-        number(decibels(offNetwork.amplitudeDb)),
-        number(valueText(off.phaseDeg, 'deg')),
-        number(valueText(offNetwork.phaseDeg, 'deg')),
-      ]),
-    ),
+    departureTable(columns, at),
   ];
 }

@@ -14,6 +14,7 @@ export function columnObstacle(board: Board): string | undefined {
   if (!slabGuidesOneWave(board.band.high * 1.02, permittivity * 1.02, height))
     return 'at the upper band edge the laminate guides a second surface wave, which the column model does not carry';
   if (board.retuned !== undefined && 'reason' in board.retuned) return board.retuned.reason;
+  if (board.sized !== undefined && 'reason' in board.sized) return board.sized.reason;
   return undefined;
 }
 

@@ -12,6 +12,7 @@
  * Conditions are nominal: nominal view of the texture, nominal temperature, nominal figures. Widths, the feed line, offsets
  * and the pitch stay.
  */
+import { withPieces } from '../manifest/column-outline.js';
 import type { Analysis, Board, ColumnLayout } from '../manifest/model.js';
 import { abs2 } from '../numerics/complex.js';
 import { minimumBetween } from '../numerics/golden-section.js';
@@ -41,11 +42,9 @@ export function scaledLengths(columns: readonly ColumnLayout[], factor: number):
     width,
     length: Math.round(length * factor * 1e7) / 1e7,
   });
-  return columns.map((column) => ({
-    ...column,
-    patches: column.patches.map(scaled),
-    links: column.links.map(scaled),
-  }));
+  return columns.map((column) =>
+    withPieces(column, { patches: column.patches.map(scaled), links: column.links.map(scaled) }),
+  );
 }
 
 /** A board with `retune` as it is to be studied; any other board, and one that is done, as it is. */

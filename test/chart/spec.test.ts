@@ -115,6 +115,48 @@ describe('charts', () => {
     expect(new Set(dashes).size).toBe(8);
   });
 
+  it('draw single values as symbols of their own shape, without a line between them', async () => {
+    const points = fixture.match.series[0].points.filter((_, i) => i % 8 === 0);
+    const svg = async (extra: LinesChart['series']) =>
+      svgOf({ ...fixture.match, series: [fixture.match.series[0], ...extra] });
+    const [without, disc, square] = await Promise.all([
+      svg([]),
+      svg([{ label: 'Full wave', symbol: 'disc', points }]),
+      svg([{ label: 'Full wave', symbol: 'square', points }]),
+    ]);
+    const lines = (text: string) => text.match(/mark-line/g)?.length ?? 0;
+    const marks = (text: string) =>
+      [...text.matchAll(/mark-symbol[^>]*>((?:<path[^>]*>(?:<\/path>)?)+)/g)].map(([, m]) => m);
+    expect(lines(disc)).toBe(lines(without));
+    expect(marks(without)).toHaveLength(0);
+    // The values, and one more beside the name.
+    expect(marks(disc).join('').match(/<path/g)).toHaveLength(points.length + 1);
+    expect(disc.length).not.toBe(square.length);
+    expect(marks(disc)[0]).not.toBe(marks(square)[0]);
+  });
+
+  it('count in whole numbers where the axis counts', async () => {
+    const few: LinesChart = {
+      ...fixture.match,
+      limits: [],
+      marks: [],
+      xDomain: [1, 4],
+      xWhole: true,
+      series: [
+        {
+          label: 'Network',
+          points: [
+            [1, -5],
+            [4, -9],
+          ],
+        },
+      ],
+    };
+    const words = await withView(few, (view) => sceneTexts(view).map((text) => text.text));
+    expect(words).toEqual(expect.arrayContaining(['1', '2', '3', '4']));
+    expect(words).not.toContain('1.5');
+  });
+
   it('leave the solid line to the series that is emphasised', async () => {
     const svg = await svgOf(fixture.match);
     const lines = [...svg.matchAll(/mark-line[^>]*>(?:<path[^>]*>)+/g)].map((match) => match[0]);

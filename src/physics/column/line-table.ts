@@ -14,6 +14,10 @@ import type { NetworkConstants } from './network-constants.js';
 export interface LineTable {
   line(width: number): MicrostripLine;
   effectiveWidth(width: number): number;
+  /** Phase constant without loss, rad/m. */
+  phaseConstant(width: number): number;
+  /** Open-end length of the metal without thickness, m. */
+  openEnd(width: number): number;
   /** Series reactance between two widths, ohm; 0 where the second is 0. */
   step(width: number, across: number): number;
   /** Susceptance of a patch edge with metal attached over the width `covered`, S. */
@@ -48,9 +52,13 @@ export function lineTable(
   });
   const openEnd = once((width) => openEndExtension({ ...geometry(width), thickness: 0 }, frequency));
   const thick = once((width) => thicknessEndExtension(geometry(width)));
+  const phaseConstant = (width: number): number =>
+    (2 * Math.PI * frequency * Math.sqrt(line(width).effectivePermittivity)) / SPEED_OF_LIGHT;
   return {
     line,
     effectiveWidth: wide,
+    phaseConstant,
+    openEnd,
     step(width, across) {
       if (across === 0) return 0;
       const [narrow, broad] = width < across ? [width, across] : [across, width];
@@ -58,10 +66,9 @@ export function lineTable(
       return stepReactance(frequency, slab.height, broad, wide(broad), permittivity, wide(narrow), constants);
     },
     edge(width, covered) {
-      const { impedance, effectivePermittivity } = line(width);
-      const beta = (2 * Math.PI * frequency * Math.sqrt(effectivePermittivity)) / SPEED_OF_LIGHT;
+      const { impedance } = line(width);
       const coverage = covered > 0 ? wide(covered) / wide(width) : 0;
-      return edgeSusceptance(openEnd(width), thick(width), beta, impedance, coverage, constants);
+      return edgeSusceptance(openEnd(width), thick(width), phaseConstant(width), impedance, coverage, constants);
     },
   };
 }

@@ -6,11 +6,11 @@ import type { NetworkConstants } from './network-constants.js';
 
 const MODEL = 'edge network of the patch columns';
 
+/** Terminated columns are not among them: patches between two lines were compared. */
 const LAYOUTS: readonly { readonly name: string; readonly has: (column: ColumnGeometry) => boolean }[] = [
   { name: 'columns that run towards −x', has: (c) => c.direction === -1 },
   { name: 'matching sections', has: (c) => (c.matching?.length ?? 0) > 0 },
   { name: 'an inset feed', has: (c) => c.inset !== undefined },
-  { name: 'a terminated column', has: (c) => c.termination !== undefined },
   { name: 'a feed from the side', has: (c) => c.sideFeed !== undefined },
 ];
 

@@ -8,31 +8,15 @@
  */
 import { abs2, type Complex, complex, div, inverse, scale, sub, ZERO } from '../../numerics/complex.js';
 import { complexMatrix, factorise, solveInPlace } from '../../numerics/complex-lu.js';
-import { edgeAdmittance, edgePlan, edgeReach } from './edge-admittance.js';
-import type {
-  ColumnConditions,
-  ColumnEngine,
-  ColumnProblem,
-  ColumnSolution,
-  ExcitedArray,
-  RadiatingEdge,
-  Slab,
-} from './engine.js';
+import { boardRadiation } from './board-radiation.js';
+import type { ColumnConditions, ColumnEngine, ColumnProblem, ColumnSolution, ExcitedArray } from './engine.js';
 import { layoutCircuit } from './layout-circuit.js';
-import { layoutEdges } from './layout-edges.js';
 import { lineLosses, section, sectionCurrent } from './line-section.js';
-import { type LineTable, lineTable } from './line-table.js';
-import { macroPatches } from './macro-patches.js';
+import { lineTable } from './line-table.js';
 import { NETWORK_CONSTANTS, type NetworkConstants } from './network-constants.js';
 import { networkFlags } from './network-range.js';
-import { addCoupling, edgePower, type PatchCoupling, patchCoupling } from './patch-coupling.js';
-import { patchReach, patchReaction, reactionPlan } from './patch-currents.js';
+import { addCoupling, edgePower } from './patch-coupling.js';
 import { patchField } from './patch-field.js';
-import { slabIntegrals } from './slab-integrals.js';
-import { slabPotentials } from './slab-potentials.js';
-
-/** Matrices kept per layout: a band of some twenty frequencies at three temperatures. */
-const RADIATION_KEPT = 64;
 
 interface Port {
   readonly node: number;
@@ -51,37 +35,14 @@ export function edgeNetwork(
   constants: NetworkConstants = NETWORK_CONSTANTS,
 ): ColumnEngine {
   const circuit = layoutCircuit(problem.columns);
-  // Pulse widths depend on the geometry alone, so the plans serve every frequency.
-  const { height, permittivity } = problem.slab;
-  const patches = macroPatches(circuit, problem, maximumFrequency, constants);
-  const outlines = layoutEdges(circuit, height, constants, (w) => w);
-  const reach = edgeReach(outlines);
-  const integrals = slabIntegrals(maximumFrequency, permittivity, height, Math.max(reach, patchReach(patches)));
-  const edgePairs = edgePlan(outlines, integrals);
-  const patchPairs = reactionPlan(patches, integrals);
-
-  /** Edges and their admittances hang on frequency and slab but not on loss: sweeps over losses ask for the same again. */
-  const known = new Map<string, { edges: RadiatingEdge[]; coupling: PatchCoupling }>();
-  function radiation(frequency: number, slab: Slab, thickness: number, lines: LineTable) {
-    const key = `${frequency} ${slab.permittivity} ${slab.height} ${thickness}`;
-    let found = known.get(key);
-    if (!found) {
-      const edges = layoutEdges(circuit, height, constants, lines.effectiveWidth);
-      const potentials = slabPotentials(frequency, slab.permittivity, slab.height, integrals, reach);
-      const own = edgeAdmittance(edges, edgePairs, potentials);
-      found = { edges, coupling: patchCoupling(circuit.edges, own, patchReaction(patchPairs, potentials)) };
-      if (known.size >= RADIATION_KEPT) known.clear();
-      known.set(key, found);
-    }
-    return found;
-  }
+  const radiation = boardRadiation(problem, circuit, maximumFrequency, constants);
 
   function solve(conditions: ColumnConditions): ColumnSolution {
     const { frequency, faces, slab = problem.slab, stripThickness = problem.stripThickness } = conditions;
     if (frequency > maximumFrequency * (1 + 1e-9))
       throw new RangeError(`edgeNetwork: ${frequency} Hz is above the ${maximumFrequency} Hz it was prepared for`);
     const lines = lineTable(slab, stripThickness, frequency, faces, constants);
-    const { edges, coupling } = radiation(frequency, slab, stripThickness, lines);
+    const { edges, coupling } = radiation.at(frequency, slab, stripThickness, lines);
     const matrix = complexMatrix(circuit.nodes);
     addCoupling(matrix, circuit.edges, coupling);
     const put = (i: number, j: number, y: Complex): void => {
@@ -147,7 +108,7 @@ export function edgeNetwork(
       const currents = {
         frequency,
         slab,
-        patches,
+        patches: radiation.patches,
         re: out.im.map((a, p) => -a * amplitude[p]),
         im: out.re.map((a, p) => a * amplitude[p]),
       };

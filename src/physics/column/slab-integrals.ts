@@ -104,13 +104,14 @@ function group(
   }
   const fade = from === 0 ? 0 : 7 / from;
   const stop = Math.max(end * 1.5, from === 0 ? top : Math.min(top, end + 7.5 * fade));
-  const panels = Math.ceil(((stop - end) * far) / 9) + 4;
-  const inner = gaussLegendre(10);
-  const tailK = new Float64Array(panels * 10);
-  const tailWeight = new Float64Array(panels * 10);
+  // Eight points for eleven radians of J0: 1e-5 of a panel.
+  const panels = Math.ceil(((stop - end) * far) / 11) + 2;
+  const inner = gaussLegendre(8);
+  const tailK = new Float64Array(panels * 8);
+  const tailWeight = new Float64Array(panels * 8);
   const half = (stop - end) / panels / 2;
   for (let p = 0, m = 0; p < panels; p++) {
-    for (let i = 0; i < 10; i++, m++) {
+    for (let i = 0; i < 8; i++, m++) {
       const k = end + (2 * p + 1 + inner.nodes[i]) * half;
       const window = fade === 0 ? 1 : 0.5 * complementaryError((k - end) / fade - 3.75);
       tailK[m] = k;

@@ -5,7 +5,7 @@
 import { besselJ0 } from '../../numerics/bessel.js';
 import type { IntegralGroup, SlabIntegrals } from './slab-integrals.js';
 import { slabSpectrum } from './slab-spectrum.js';
-import { POTENTIALS, surfaceSpectrum } from './surface-spectrum.js';
+import { POTENTIALS, type SurfaceSpectrum, surfaceSpectrum } from './surface-spectrum.js';
 
 /**
  * r times each potential at every distance, the magnetic ones up to a reach of their own (nought beyond); the guided parts are those of the TM0 pole, imaginary and so given
@@ -64,24 +64,25 @@ export function slabPotentials(
 function integrate(
   group: IntegralGroup,
   rows: readonly number[],
-  remainder: (kRe: number, kIm: number, out: Float64Array) => void,
+  remainder: SurfaceSpectrum['remainder'],
   re: readonly Float64Array[],
   im: readonly Float64Array[],
 ): void {
   const { first, last, kRe, kIm, ellipseRe, ellipseIm, tailK, tail } = group;
   const [n, m] = [kRe.length, tailK.length];
+  const potentials = rows[POTENTIALS - 1] > first ? 4 : 2;
   const value = new Float64Array(2 * POTENTIALS);
   const low = Array.from({ length: 2 * POTENTIALS }, () => new Float64Array(n));
   for (let i = 0; i < n; i++) {
-    remainder(kRe[i], kIm[i], value);
-    for (let p = 0; p < value.length; p++) low[p][i] = value[p];
+    remainder(kRe[i], kIm[i], potentials, value);
+    for (let p = 0; p < 2 * potentials; p++) low[p][i] = value[p];
   }
   const high = Array.from({ length: POTENTIALS }, () => new Float64Array(m));
   for (let i = 0; i < m; i++) {
-    remainder(tailK[i], 0, value);
-    for (let p = 0; p < POTENTIALS; p++) high[p][i] = value[2 * p];
+    remainder(tailK[i], 0, potentials, value);
+    for (let p = 0; p < potentials; p++) high[p][i] = value[2 * p];
   }
-  for (let p = 0; p < POTENTIALS; p++) {
+  for (let p = 0; p < potentials; p++) {
     const [fr, fi, g] = [low[2 * p], low[2 * p + 1], high[p]];
     for (let d = first, q = 0, s = 0; d < Math.min(last, rows[p]); d++) {
       let [a, b] = [0, 0];

@@ -19,8 +19,8 @@ export interface SurfaceSpectrum {
   /** Wavenumber of each closed term, and its factor: factor · e^{−jkr}/(4πr)·2. */
   readonly closedK: Float64Array;
   readonly closedFactor: Float64Array;
-  /** out = re, im of the four remainders at complex k. */
-  remainder(kRe: number, kIm: number, out: Float64Array): void;
+  /** out = re, im of the remainders at complex k: the first two potentials, or all four. */
+  remainder(kRe: number, kIm: number, potentials: 2 | 4, out: Float64Array): void;
 }
 
 export function surfaceSpectrum(slab: SlabSpectrum, permittivity: number, height: number): SurfaceSpectrum {
@@ -31,7 +31,7 @@ export function surfaceSpectrum(slab: SlabSpectrum, permittivity: number, height
   const [fa, fb, fe, fm] = [MU0 / 2, 1 / (EPS0 * (1 + er)), EPS0 * er, 1 / MU0];
   const root = new Float64Array(2);
 
-  function remainder(kRe: number, kIm: number, out: Float64Array): void {
+  function remainder(kRe: number, kIm: number, potentials: 2 | 4, out: Float64Array): void {
     const k2r = kRe * kRe - kIm * kIm;
     const k2i = 2 * kRe * kIm;
     principalRoot(k2r - k0 * k0, k2i, root);
@@ -64,6 +64,15 @@ export function surfaceSpectrum(slab: SlabSpectrum, permittivity: number, height
     out[0] = MU0 * gr;
     out[1] = MU0 * gi;
     over(vr / EPS0 + omega * omega * MU0 * gr, vi / EPS0 + omega * omega * MU0 * gi, 2);
+    const close = (k2: number, factor: number, q: number): void => {
+      principalRoot(k2r - k2, k2i, root);
+      const d = root[0] * root[0] + root[1] * root[1];
+      out[q] -= (factor * root[0]) / d;
+      out[q + 1] += (factor * root[1]) / d;
+    };
+    close(ka2, fa, 0);
+    close(kb2, fb, 2);
+    if (potentials === 2) return;
     // F = ε1 (u1 + er u0 t)/(u1 (er u0 + u1 t));  jω Yh = (1/μ0) u1 (u0 + u1 t)/(u1 + u0 t)
     const [pr, pi] = [u1r + er * br, u1i + er * bi];
     const [qr, qi] = [u1r * mr - u1i * mi, u1r * mi + u1i * mr];
@@ -74,14 +83,6 @@ export function surfaceSpectrum(slab: SlabSpectrum, permittivity: number, height
     const [wr, wi] = [u1r * sr - u1i * si, u1r * si + u1i * sr];
     const [yr, yi] = [(wr * er1 + wi * ei1) / de / MU0, (wi * er1 - wr * ei1) / de / MU0];
     over(yr + omega * omega * out[4], yi + omega * omega * out[5], 6);
-    const close = (k2: number, factor: number, q: number): void => {
-      principalRoot(k2r - k2, k2i, root);
-      const d = root[0] * root[0] + root[1] * root[1];
-      out[q] -= (factor * root[0]) / d;
-      out[q + 1] += (factor * root[1]) / d;
-    };
-    close(ka2, fa, 0);
-    close(kb2, fb, 2);
     close(k1 * k1, fe, 4);
     close(k1 * k1, fm, 6);
   }

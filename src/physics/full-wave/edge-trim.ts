@@ -41,8 +41,8 @@ export interface EdgeTrims {
   of(cells: number, step: number, extent: number, inwards: number): EdgeTrim;
 }
 
-/** Below this nothing would be left of the outermost charge's own potential. */
-const LEAST = -0.9;
+/** Lower, little would be left of the outermost charge's own potential, and the equations be near to singular. */
+const LEAST = -0.65;
 const MOST = 12;
 /** Wider pieces have edges that do not feel each other: their capacitance grows evenly with the width. */
 const MOST_CELLS = 24;

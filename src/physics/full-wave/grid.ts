@@ -31,23 +31,33 @@ export function drawEdge(
 /** Steps of the scans: finer brings no less misfit worth the time. */
 const STEPS = 241;
 const OFFSETS = 40;
+const STEPS_ALONG = 501;
+/** Squared cells of misfit of an edge that a grid twice as fine as asked for is worth. */
+const FINENESS = 0.006;
 
 /**
- * Cell size and origin at which the true edges come to lie best: along, the ends of all patches; across, the lines above
- * all, then the columns' distances, then the patches.
+ * Cell size and origin at which the true edges come to lie best: along, the ends of all patches; across, the
+ * patches' sides above all, then the columns' distances, then the lines.
+ *
+ * @param finest times more cells along than asked for that are allowed, if edges then lie better
  */
 export function chooseGrid(
   columns: readonly ColumnGeometry[],
   rectangles: readonly MetalRectangle[],
   cellsPerPatch: number,
   cellsPerLine: number,
+  finest: number,
 ): Grid {
-  const along = alongGrid(rectangles, cellsPerPatch);
+  const along = alongGrid(rectangles, cellsPerPatch, finest);
   const across = acrossGrid(columns, rectangles, cellsPerLine);
   return { dx: along.step, x0: along.origin, dy: across.step, y0: across.origin };
 }
 
-function alongGrid(rectangles: readonly MetalRectangle[], cellsPerPatch: number): { step: number; origin: number } {
+function alongGrid(
+  rectangles: readonly MetalRectangle[],
+  cellsPerPatch: number,
+  finest: number,
+): { step: number; origin: number } {
   const patches = rectangles.filter((r) => r.kind === 'patch');
   const length = patches.reduce((sum, r) => sum + r.x1 - r.x0, 0) / patches.length;
   const edges = new Map<string, { at: number; outwards: 1 | -1; count: number }>();
@@ -63,11 +73,12 @@ function alongGrid(rectangles: readonly MetalRectangle[], cellsPerPatch: number)
   }
   const list = [...edges.values()];
   let best = { step: length / cellsPerPatch, origin: list[0].at, cost: Number.POSITIVE_INFINITY };
-  for (let i = 0; i < STEPS; i++) {
-    const step = length / (cellsPerPatch * (0.88 + (0.24 * i) / (STEPS - 1)));
+  for (let i = 0; i < STEPS_ALONG; i++) {
+    const finer = 0.85 + (i / (STEPS_ALONG - 1)) * (finest - 0.85);
+    const step = length / (cellsPerPatch * finer);
     for (let k = 0; k < OFFSETS; k++) {
       const origin = list[0].at + (k / OFFSETS) * step;
-      let cost = 0;
+      let cost = FINENESS * patches.length * (finer - 1) ** 2;
       for (const { at, outwards, count } of list) {
         const off = drawEdge(at, origin, step, outwards).inwards - NATURAL_EDGE;
         cost += count * off * off;
@@ -89,18 +100,18 @@ function acrossGrid(
   const centres = [...new Set(columns.map((c) => c.y))].sort((a, b) => a - b);
   let best = { step: nominal, origin: centres[0], cost: Number.POSITIVE_INFINITY };
   for (let i = 0; i < STEPS; i++) {
-    const step = nominal * (0.85 + (0.3 * i) / (STEPS - 1));
+    const step = nominal * (0.8 + (0.35 * i) / (STEPS - 1));
     // The centre of every column on a grid line, or between two.
     for (const shift of [0, 0.5]) {
       let cost = 0;
       for (const width of widths) {
         const off = drawEdge(width / 2, shift * step, step, 1).inwards - NATURAL_EDGE;
-        const weight = lines.includes(width) ? 1 : 0.5;
-        cost += weight * ((2 * off * step) / width) ** 2;
+        // A trim of a patch's side moves its resonance a little; a line's holds what it should.
+        cost += lines.includes(width) ? 0.1 * ((2 * off * step) / width) ** 2 : off * off;
       }
       for (let c = 1; c < centres.length; c++) {
         const pitch = (centres[c] - centres[c - 1]) / step;
-        cost += (4 * (pitch - Math.round(pitch)) ** 2 * (step / (centres[c] - centres[c - 1])) ** 2) / centres.length;
+        cost += (40 * (pitch - Math.round(pitch)) ** 2 * (step / (centres[c] - centres[c - 1])) ** 2) / centres.length;
       }
       if (cost < best.cost - 1e-12) best = { step, origin: centres[0] + shift * step, cost };
     }

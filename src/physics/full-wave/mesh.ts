@@ -43,6 +43,12 @@ export interface Mesh {
 
 const SAME = 1e-9;
 
+/**
+ * The current of a patch does not keep the sections' spread near its ends, where its charge gathers at the corners: trims
+ * of its sides take this much more on currents and less on charges, so that patches of one width resonate alike on all grids.
+ */
+const CORNER_SHARE = 0.05;
+
 /** Grid indices of both ends of every rectangle along one axis; where two meet, the wider one's rule holds. */
 function drawAxis(
   spans: readonly { low: number; high: number; crossLow: number; crossHigh: number }[],
@@ -102,7 +108,11 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
     };
     const [wide, tall] = [xs[k].high - xs[k].low, ys[k].high - ys[k].low];
     // Across a column both edges share what is off, so that it stays symmetric: its place is a whole number of cells.
-    const across = edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
+    const whole = edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
+    const across =
+      r.kind === 'patch'
+        ? { charge: whole.charge * (1 - CORNER_SHARE), current: whole.current * (1 + CORNER_SHARE) }
+        : whole;
     return {
       metal: r,
       i0: xs[k].low - left,
@@ -155,7 +165,6 @@ function occupy(rectangles: readonly DrawnRectangle[], nx: number, ny: number) {
       sums[`current${axis}`][n] += trim.current;
       sums[`charge${axis}`][n] += trim.charge;
     };
-    if (!metal(i, j - 1)) note('X', trims.y0);
     if (!metal(i, j + 1)) note('X', trims.y1);
     if (!metal(i - 1, j)) note('Y', trims.x0);
     if (!metal(i + 1, j)) note('Y', trims.x1);

@@ -28,11 +28,14 @@ export function responseOf(solution: ColumnSolution): ColumnResponse {
   };
 }
 
-/** Currents over those asked for, scaled to a mean square of 1 and turned so that their mean is real and positive. */
+/**
+ * Currents over those asked for, scaled to a mean square of 1 and turned so that their mean is real and positive. Each counts
+ * with its power in the means: a weak patch at the end moves the pattern little.
+ */
 export function excitationError(currents: readonly Complex[], amplitudes: readonly number[]): Complex[] {
-  const ratios = currents.map((c, i) => scale(c, 1 / amplitudes[i]));
-  const mean = ratios.reduce((sum, c) => add(sum, c), ZERO);
-  const size = Math.sqrt(ratios.reduce((sum, c) => sum + abs2(c), 0) / ratios.length);
+  const power = amplitudes.reduce((sum, a) => sum + a * a, 0);
+  const mean = currents.reduce((sum, c, i) => add(sum, scale(c, amplitudes[i])), ZERO);
+  const size = Math.sqrt(currents.reduce((sum, c) => sum + abs2(c), 0) / power);
   const turn = scale(mean, size / Math.sqrt(abs2(mean)));
-  return ratios.map((c) => div(c, turn));
+  return currents.map((c, i) => div(scale(c, 1 / amplitudes[i]), turn));
 }

@@ -21,7 +21,7 @@ export interface ColumnUnknowns {
 export function columnUnknowns(
   request: SizingRequest,
   amplitudes: readonly number[],
-  guess: ColumnGuess,
+  guess: ColumnGuess = PLAIN_GUESS,
 ): ColumnUnknowns {
   const { feedLineWidth, linkWidth = feedLineWidth } = request;
   const patches = amplitudes.length;
@@ -57,13 +57,12 @@ export function columnUnknowns(
   };
 }
 
+/** Where no start is needed. */
+const PLAIN_GUESS: ColumnGuess = { unitMoment: 1e-3, lengthFactor: 1, link: () => 1 };
+
 /** Unknowns of a column that was sized before. */
 export function unknownsOf(request: SizingRequest, { patches, links }: ColumnGeometry): Float64Array {
   const half = halfWave(request, links[0].width);
   const factor = patches.reduce((sum, p) => sum + p.length / resonantLength(request, p.width), 0) / patches.length;
-  return Float64Array.from([
-    ...patches.map((p) => Math.log(p.width)),
-    ...links.map((l) => l.length / half),
-    factor,
-  ]);
+  return Float64Array.from([...patches.map((p) => Math.log(p.width)), ...links.map((l) => l.length / half), factor]);
 }

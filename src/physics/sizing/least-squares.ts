@@ -24,7 +24,9 @@ export interface LeastSquaresResult {
 }
 
 /** Ratio of sums of squares above which a step is not worth another set of slopes. */
-const ENOUGH = 0.95;
+const ENOUGH = 0.85;
+/** The same however short the step was. */
+const STALLED = 0.98;
 
 /**
  * Least squares of a function that costs much: damped Gauss–Newton steps (Levenberg 1944, Marquardt 1963), slopes by one-sided
@@ -64,11 +66,11 @@ export function leastSquares(f: Residuals, start: Float64Array, settings: LeastS
       correct(slopes, move, r, there);
       [x, r, size] = [next, there, sizeThere];
       // Where true slopes no longer gain, the residuals that are left cannot be had away.
-      if (fresh && gain > ENOUGH) break;
+      if (fresh && shorten === 1 && (gain > STALLED || (gain > ENOUGH && damping < 0.1))) break;
       fresh = false;
       damping = Math.max(1e-8, damping / 5);
       // Slow progress on corrected slopes: true ones are worth their price.
-      if (gain > 0.6) slopes = [];
+      if (gain > (shorten === 1 ? 0.6 : 0.8)) slopes = [];
     } else if (fresh && damping > 1e4) break;
     else if (fresh) damping *= 6;
     else slopes = [];

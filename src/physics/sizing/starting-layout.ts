@@ -1,6 +1,7 @@
 /** Closed forms from which sizing starts, and which tie a patch's length to its width throughout. */
-import { ETA0, SPEED_OF_LIGHT } from '../constants.js';
+
 import type { ColumnGeometry } from '../column/index.js';
+import { ETA0, SPEED_OF_LIGHT } from '../constants.js';
 import { microstripDispersive, openEndExtension } from '../line/index.js';
 import type { SizingRequest } from './request.js';
 
@@ -72,7 +73,12 @@ function silenced(request: SizingRequest, patch: number, patches: number): numbe
 }
 
 /** Width, m, with which a patch radiates an amplitude: its effective width exceeds it by little that hardly changes. */
-export function widthFor(request: SizingRequest, unitMoment: number, patch: number, amplitudes: readonly number[]): number {
+export function widthFor(
+  request: SizingRequest,
+  unitMoment: number,
+  patch: number,
+  amplitudes: readonly number[],
+): number {
   const wanted = unitMoment * amplitudes[patch] + silenced(request, patch, amplitudes.length);
   const [least, greatest] = widthLimits(request);
   let width = least;

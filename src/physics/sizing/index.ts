@@ -1,0 +1,2 @@
+export type { SizedColumn, SizingRequest } from './request.js';
+export { correctSizing, type FoundColumn, sizeColumn } from './size-column.js';
