@@ -1,6 +1,6 @@
 import { askedItems } from '../manifest/index.js';
 import type { Analysis, Board, Pack } from '../manifest/model.js';
-import { type BoardStudy, type Confirmation, correctionIn, fullWaveObstacle } from '../study/index.js';
+import { type BoardStudy, type Confirmation, carriedConfirmation, correctionIn } from '../study/index.js';
 import {
   type AllowanceResult,
   type BoardVerdict,
@@ -67,13 +67,9 @@ export async function studyProcurement(
   };
 }
 
-/** What is offered moves materials by little: the full wave of the board as drawn is carried to it, and not run again. */
+/** @throws Error for a board that was not studied before */
 function carriedOver(board: Board, analysis: Analysis, studies: readonly BoardStudy[]): Confirmation {
-  const reason = fullWaveObstacle(board, analysis);
-  if (reason !== undefined) return { kind: 'network only', reason };
-  const drawn = studies.find((study) => study.board.id === board.id)?.confirmation;
+  const drawn = studies.find((study) => study.board.id === board.id);
   if (drawn === undefined) throw new Error(`studyProcurement: no study of board ${board.id}`);
-  return drawn.kind === 'full wave'
-    ? { ...drawn, carriedFrom: 'the board with what was assumed before the offer' }
-    : drawn;
+  return carriedConfirmation(board, analysis, drawn.confirmation, 'the board with what was assumed before the offer');
 }

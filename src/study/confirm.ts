@@ -43,6 +43,23 @@ export function fullWaveObstacle(board: Board, analysis: Analysis): string | und
 }
 
 /**
+ * Of a board whose materials differ a little from one that was confirmed: the full wave is not run again, and what it found there
+ * is carried over.
+ *
+ * @param from  the state it was found in, in words
+ */
+export function carriedConfirmation(
+  board: Board,
+  analysis: Analysis,
+  confirmed: Confirmation,
+  from: string,
+): Confirmation {
+  const reason = fullWaveObstacle(board, analysis);
+  if (reason !== undefined) return { kind: 'network only', reason };
+  return confirmed.kind === 'full wave' ? { ...confirmed, carriedFrom: from } : confirmed;
+}
+
+/**
  * Solves the board by both engines, and works out what the network is to be corrected by.
  *
  * @param frequencies  inside the band; those of `earlier` are not solved again

@@ -1,5 +1,12 @@
 export { unexplainedShare } from './carried.js';
-export { confirmBoard, firstFrequencies, fullWaveObstacle, MOST_PATCHES, type SolverFor } from './confirm.js';
+export {
+  carriedConfirmation,
+  confirmBoard,
+  firstFrequencies,
+  fullWaveObstacle,
+  MOST_PATCHES,
+  type SolverFor,
+} from './confirm.js';
 export { correctionIn } from './correction.js';
 export type { Correction, EngineDifference } from './correction-model.js';
 export { nominalValues } from './nominal-values.js';

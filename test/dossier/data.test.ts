@@ -48,6 +48,27 @@ describe('data files', () => {
     for (const n of found) expect(Number(n.toPrecision(12))).toBe(n);
   });
 
+  it('say how the columns are confirmed, with the S-matrix of both engines and of the nominal state', () => {
+    const boardOf = (name: string) => {
+      const data = files[name];
+      if (data.kind !== 'board') throw new Error('not a board');
+      return data;
+    };
+    const { confirmation, nominal } = boardOf('data/board-qb-1.json');
+    if (confirmation.kind !== 'full wave') throw new Error('not confirmed');
+    expect(confirmation.points.map(({ frequencyHz }) => frequencyHz)).toEqual([76.1e9, 76.5e9, 76.9e9]);
+    for (const { fullWave, network } of confirmation.points)
+      for (const { scattering, excitation } of [fullWave, network]) {
+        expect(scattering.map((row) => row.length)).toEqual([3, 3, 3]);
+        expect(excitation.map((column) => column.length)).toEqual([6, 6, 6]);
+      }
+    expect(nominal.every(({ scattering }) => scattering?.length === 3)).toBe(true);
+    expect(boardOf('data/board-qb-2.json').confirmation).toEqual({
+      kind: 'network only',
+      reason: 'the pack switched the full wave off',
+    });
+  });
+
   it('carry the cautions', () => {
     for (const data of Object.values(files)) {
       expect(data.notices.join(' ')).toContain('not a declaration of conformity');

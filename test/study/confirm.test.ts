@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { confirmBoard, type SolverFor } from '../../src/study/index.js';
+import { carriedConfirmation, confirmBoard, type SolverFor } from '../../src/study/index.js';
 import { figure, fixtureBoard } from './fixture-board.js';
 import { standIn } from './stand-in-engine.js';
 
@@ -46,6 +46,15 @@ describe('confirmation of a board', () => {
     if (found.kind !== 'full wave') throw new Error(found.reason);
     expect(found.points.map(({ frequency }) => frequency)).toEqual([76e9, 76.25e9, 76.5e9, 77e9]);
     expect(found.correction!.differences).toHaveLength(4);
+  });
+
+  it('is carried to a board of slightly other materials, which says where it was found', () => {
+    const first = confirmBoard(board, analysis, undefined, undefined, standIn());
+    const carried = carriedConfirmation(board, analysis, first, 'the board as drawn');
+    expect(carried).toEqual({ ...first, carriedFrom: 'the board as drawn' });
+    const none = { kind: 'network only', reason: 'the full wave found no solution' } as const;
+    expect(carriedConfirmation(board, analysis, none, 'the board as drawn')).toBe(none);
+    expect(reasonOf(carriedConfirmation(board, { ...analysis, fullWave: false }, first, ''))).toContain('switched');
   });
 
   it('says why a board is not confirmed', () => {

@@ -15,7 +15,7 @@ export interface StandIn {
 /** The network in the place of the full wave, changed as asked for: what a correction has to find is then known. */
 export function standIn({ shift = 0, permittivity = 1, loss = 1, onSolve }: StandIn = {}): SolverFor {
   return (problem, band): ColumnEngine => {
-    const network = edgeNetwork(problem, band.high * 1.02);
+    const network = edgeNetwork(problem, 1.015 * band.high);
     return {
       name: 'stand-in',
       solve({ frequency, faces, slab = problem.slab, stripThickness }) {

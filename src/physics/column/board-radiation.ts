@@ -5,7 +5,7 @@ import type { LayoutCircuit } from './layout-circuit.js';
 import { layoutEdges } from './layout-edges.js';
 import type { LineTable } from './line-table.js';
 import { macroPatches } from './macro-patches.js';
-import { bareSizes, momentFactor, scaleEdges } from './mode-conductance.js';
+import { bareSizes, conductanceFactor, scaleConductances } from './mode-conductance.js';
 import type { NetworkConstants } from './network-constants.js';
 import { type PatchCoupling, patchCoupling } from './patch-coupling.js';
 import { patchReach, patchReaction, reactionPlan } from './patch-currents.js';
@@ -65,10 +65,10 @@ export function boardRadiation(
     const bare: EdgeAdmittance = edgeAdmittance(edgesOf(bareCircuit, lines.effectiveWidth), barePairs, potentials);
     const factors = sizes.map((size, s) => {
       const resistance = patchReaction(sizePairs[s], potentials).re[0];
-      return momentFactor(size, bare, s, resistance, lines, constants);
+      return conductanceFactor(size, bare, s, resistance, lines, constants);
     });
-    const edges = scaleEdges(edgesOf(circuit, lines.effectiveWidth), (p) => factors[which[p]]);
-    const own = edgeAdmittance(edges, edgePairs, potentials);
+    const edges = edgesOf(circuit, lines.effectiveWidth);
+    const own = scaleConductances(edgeAdmittance(edges, edgePairs, potentials), (p) => factors[which[p]]);
     const made = { edges, coupling: patchCoupling(circuit.edges, own, patchReaction(patchPairs, potentials)) };
     if (known.size >= KEPT) known.clear();
     known.set(key, made);

@@ -9,7 +9,7 @@
 import { gaussLegendre } from '../../numerics/gauss-legendre.js';
 import type { RadiatingEdge } from './engine.js';
 import type { SlabIntegrals } from './slab-integrals.js';
-import { addWeight, type SlabPotentials } from './slab-potentials.js';
+import { addWeights, type SlabPotentials } from './slab-potentials.js';
 
 export interface EdgePlan {
   /** Weights on r·F and r·M of the distinct pulse pairs. */
@@ -83,11 +83,11 @@ function pulsePair(a: number, b: number, dx: number, distance: Float64Array): Ed
     for (let i = 0; i < rule.nodes.length; i++) {
       const v = (from + to) / 2 + ((to - from) / 2) * rule.nodes[i];
       const overlap = v <= inner ? Math.min(a, b) : outer - v;
-      addWeight(distance, Math.hypot(dx, v), (to - from) * rule.weights[i] * overlap, vector);
+      addWeights(distance, Math.hypot(dx, v), (to - from) * rule.weights[i] * overlap, vector, 0, charge);
     }
   }
-  addWeight(distance, Math.hypot(dx, inner), 2, charge);
-  addWeight(distance, Math.hypot(dx, outer), -2, charge);
+  addWeights(distance, Math.hypot(dx, inner), 0, vector, 2, charge);
+  addWeights(distance, Math.hypot(dx, outer), 0, vector, -2, charge);
   const last = Math.max(
     vector.findLastIndex((w) => w !== 0),
     charge.findLastIndex((w) => w !== 0),

@@ -13,6 +13,9 @@ import type { MacroPatch } from './engine.js';
 /** Part of a patch's current that is flat across. */
 const FLAT = 0.5;
 
+/** Points across from which on lines have a width of their own. */
+export const NEAR_ACROSS = 7;
+
 /** Quadrature points of a current: places, current and charge times weight. */
 export interface CurrentPoints {
   readonly x: Float64Array;
@@ -32,6 +35,12 @@ function profile(patch: MacroPatch, across: number): { y: number[]; weight: numb
   for (const a of angles) {
     y.push(patch.y + (patch.width / 2) * Math.cos(a));
     weight.push(rest * ((1 - FLAT) / across + (FLAT * Math.sin(a)) / sum));
+  }
+  // From afar a line is as good as its middle.
+  if (across < NEAR_ACROSS && patch.lines.length > 0) {
+    y.push(patch.y);
+    weight.push(-rest * covered(patch));
+    return { y, weight };
   }
   for (const { width, share } of patch.lines)
     for (const side of [-1, 1]) {

@@ -7,7 +7,7 @@
  * interplay of the edges, and the mode gives the level.
  */
 import type { EdgeAdmittance } from './edge-admittance.js';
-import type { MacroPatch, RadiatingEdge } from './engine.js';
+import type { MacroPatch } from './engine.js';
 import type { LineTable } from './line-table.js';
 import type { NetworkConstants } from './network-constants.js';
 
@@ -23,12 +23,12 @@ export function bareSizes(patches: readonly MacroPatch[]): { sizes: MacroPatch[]
 }
 
 /**
- * Factor on the moments of a patch's edges.
+ * Factor on the conductances of a patch's edges.
  *
  * @param bare       admittances of its edges without lines, at `index`
  * @param resistance of its macro current without lines, ohm
  */
-export function momentFactor(
+export function conductanceFactor(
   patch: MacroPatch,
   bare: EdgeAdmittance,
   index: number,
@@ -42,13 +42,13 @@ export function momentFactor(
   const voltage = lines.line(patch.width).impedance * Math.sin((lines.phaseConstant(patch.width) * patch.length) / 2);
   const mode = (constants.modeConductance * resistance * moment * moment) / (voltage * voltage);
   const edges = bare.re[3 * index] + bare.re[3 * index + 2] - 2 * bare.re[3 * index + 1];
-  return Math.sqrt(mode / edges);
+  return mode / edges;
 }
 
-/** Edges with all moments of each patch times its factor. */
-export function scaleEdges(edges: readonly RadiatingEdge[], factor: (patch: number) => number): RadiatingEdge[] {
-  return edges.map((edge, e) => {
-    const by = factor(e >> 1);
-    return { ...edge, pulses: edge.pulses.map(({ width, density }) => ({ width, density: density * by })) };
-  });
+/**
+ * Admittances with the conductances of each patch times its factor. The susceptance between its edges stays: it tunes the
+ * patch, and was fitted with the open ends.
+ */
+export function scaleConductances(edges: EdgeAdmittance, factor: (patch: number) => number): EdgeAdmittance {
+  return { re: edges.re.map((g, q) => g * factor(Math.floor(q / 3))), im: edges.im };
 }

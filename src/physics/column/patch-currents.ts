@@ -5,9 +5,9 @@
  * each distinct pair becomes a row of weights on the table of the potentials.
  */
 import type { MacroPatch } from './engine.js';
-import { currentPoints, sameShape } from './macro-current.js';
+import { currentPoints, NEAR_ACROSS, sameShape } from './macro-current.js';
 import type { SlabIntegrals } from './slab-integrals.js';
-import { addWeight, type SlabPotentials } from './slab-potentials.js';
+import { addWeights, type SlabPotentials } from './slab-potentials.js';
 
 /** Weights from table entry `first` on. */
 interface Weights {
@@ -72,15 +72,14 @@ function pairWeights(a: MacroPatch, b: MacroPatch, distance: Float64Array): Weig
   const apart = Math.hypot(a.x - b.x, a.y - b.y);
   const size = Math.max(a.length, a.width, b.length, b.width);
   // Smooth integrands from afar; different orders keep the points of a current and itself apart.
-  const [along, across] = apart > 4 * size ? [5, 3] : apart > 1.8 * size ? [6, 4] : [10, 7];
+  const [along, across] = apart > 4 * size ? [5, 3] : apart > 1.8 * size ? [6, 4] : [10, NEAR_ACROSS];
   const self = apart === 0 ? 1 : 0;
   const p = currentPoints(a, along, across);
   const q = currentPoints(b, along + self, across + self);
   for (let i = 0; i < p.x.length; i++)
     for (let k = 0; k < q.x.length; k++) {
       const r = Math.hypot(p.x[i] - q.x[k], p.y[i] - q.y[k]);
-      addWeight(distance, r, p.current[i] * q.current[k], vector);
-      addWeight(distance, r, p.charge[i] * q.charge[k], charge);
+      addWeights(distance, r, p.current[i] * q.current[k], vector, p.charge[i] * q.charge[k], charge);
     }
   let [first, last] = [0, vector.length - 1];
   while (first < last && vector[first] === 0 && charge[first] === 0) first++;

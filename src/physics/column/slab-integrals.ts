@@ -104,8 +104,8 @@ function group(
   }
   const fade = from === 0 ? 0 : 7 / from;
   const stop = Math.max(end * 1.5, from === 0 ? top : Math.min(top, end + 7.5 * fade));
-  // Eight points for eleven radians of J0: 1e-5 of a panel.
-  const panels = Math.ceil(((stop - end) * far) / 11) + 2;
+  // Eight points for ten radians of J0: 1e-6 of a panel; four more panels for what J0 does not set.
+  const panels = Math.ceil(((stop - end) * far) / 10) + 4;
   const inner = gaussLegendre(8);
   const tailK = new Float64Array(panels * 8);
   const tailWeight = new Float64Array(panels * 8);

@@ -97,8 +97,18 @@ function integrate(
   }
 }
 
-/** Adds `amount` times the cubic through the four tabulated values around r to weights that begin at table entry 0. */
-export function addWeight(distance: Float64Array, r: number, amount: number, weights: Float64Array): void {
+/**
+ * Adds `a` and `b` times the cubic through the four tabulated values around r to two sets of weights on the table.
+ * Nearer than the first distance it is the first.
+ */
+export function addWeights(
+  distance: Float64Array,
+  r: number,
+  a: number,
+  aWeights: Float64Array,
+  b: number,
+  bWeights: Float64Array,
+): void {
   const at = Math.max(r, distance[0]);
   let [low, high] = [0, distance.length - 1];
   while (high - low > 1) {
@@ -108,8 +118,9 @@ export function addWeight(distance: Float64Array, r: number, amount: number, wei
   }
   const base = Math.min(Math.max(low - 1, 0), distance.length - 4);
   for (let i = 0; i < 4; i++) {
-    let w = amount / at;
+    let w = 1 / at;
     for (let j = 0; j < 4; j++) if (j !== i) w *= (at - distance[base + j]) / (distance[base + i] - distance[base + j]);
-    weights[base + i] += w;
+    aWeights[base + i] += a * w;
+    bWeights[base + i] += b * w;
   }
 }

@@ -17,8 +17,9 @@ interface Split {
   /** Pairs (u, mirror) as positions in the block, u ≤ mirror; where both are one the pair is single. */
   readonly first: Int32Array;
   readonly second: Int32Array;
-  readonly even: ComplexLu;
-  readonly odd: ComplexLu;
+  /** Factorised when first asked for: a symmetric column fed along its axis never has odd currents. */
+  readonly even: () => ComplexLu;
+  readonly odd: () => ComplexLu;
   /** Pairs that the even, and the odd, system has; index into `first`. */
   readonly inEven: Int32Array;
   readonly inOdd: Int32Array;
@@ -128,6 +129,14 @@ function blockMatrix(mesh: Mesh, block: Block, r: SlabReactions, local: LocalMat
 /** Sign of a mirror image: currents along x keep theirs, those across turn. */
 const signOf = (mesh: Mesh, u: number): 1 | -1 => (u < mesh.xCount ? 1 : -1);
 
+const once = <T>(make: () => T): (() => T) => {
+  let made: T | undefined;
+  return () => {
+    made ??= make();
+    return made;
+  };
+};
+
 function splitMatrix(mesh: Mesh, block: Block, mirror: Int32Array, z: ComplexMatrix): Split {
   const first: number[] = [];
   const second: number[] = [];
@@ -169,12 +178,21 @@ function splitMatrix(mesh: Mesh, block: Block, mirror: Int32Array, z: ComplexMat
   return {
     first: Int32Array.from(first),
     second: Int32Array.from(second),
-    even: part(1, inEven),
-    odd: part(-1, inOdd),
+    even: once(() => part(1, inEven)),
+    odd: once(() => part(-1, inOdd)),
     inEven,
     inOdd,
   };
 }
+
+/** Below it, relative, a part is what rounding leaves of a current of the other symmetry. */
+const ROUNDING = 1e-10;
+
+const size = (re: Float64Array, im: Float64Array): number => {
+  let most = 0;
+  for (let i = 0; i < re.length; i++) most = Math.max(most, Math.abs(re[i]), Math.abs(im[i]));
+  return most;
+};
 
 function solveSplit(mesh: Mesh, block: Block, split: Split, re: Float64Array, im: Float64Array): void {
   const { first, second } = split;
@@ -192,8 +210,9 @@ function solveSplit(mesh: Mesh, block: Block, split: Split, re: Float64Array, im
   };
   const even = half(split.inEven, 1);
   const odd = half(split.inOdd, -1);
-  solveInPlace(split.even, ...even);
-  solveInPlace(split.odd, ...odd);
+  const [evenSize, oddSize] = [size(...even), size(...odd)];
+  if (evenSize > ROUNDING * oddSize) solveInPlace(split.even(), ...even);
+  if (oddSize > ROUNDING * evenSize) solveInPlace(split.odd(), ...odd);
   const back = (list: Int32Array, parity: 1 | -1, [r, i]: readonly [Float64Array, Float64Array]): void => {
     for (let p = 0; p < list.length; p++) {
       const k = first[list[p]];

@@ -127,7 +127,7 @@ function sideBlock(mesh: Mesh, columnOf: Int32Array, column: number, side: reado
 }
 
 /** @param centre sum of the first and the last row's ends, in cells: twice the centre line */
-function mirrorOf(mesh: Mesh, unknowns: readonly number[], centre: number): Int32Array | undefined {
+export function mirrorOf(mesh: Mesh, unknowns: readonly number[], centre: number): Int32Array | undefined {
   const at = new Map(unknowns.map((u, n) => [u, n]));
   const mirror = new Int32Array(unknowns.length);
   for (let n = 0; n < unknowns.length; n++) {

@@ -37,5 +37,31 @@ export function boardOperator(
   };
 }
 
-export const preconditioner = (setup: BoardSetup, { reactions, local }: BoardOperator): LinearMap =>
-  blockInverse(setup.mesh, setup.blocks, reactions, local);
+/** Frequencies for which inverses are kept lie this much apart, as a ratio: between them an inverse is near enough. */
+const ANCHOR_RATIO = 1.05;
+
+/**
+ * Preconditioners of a board, each worked out once, without loss, at the anchor nearest to the frequency asked for: they
+ * do not hang on the order of the calls.
+ */
+export function anchoredInverses(
+  setup: BoardSetup,
+  medium: SlabMedium,
+  band: { readonly low: number; readonly high: number },
+): (frequency: number) => LinearMap {
+  const kept = new Map<number, LinearMap>();
+  const middle = Math.sqrt(band.low * band.high);
+  const nothing = setup.mesh.rectangles.map(() => complex(0));
+  const furthest = Math.floor(Math.log(band.high / middle) / Math.log(ANCHOR_RATIO) + 1e-9);
+  return (frequency) => {
+    const steps = Math.round(Math.log(frequency / middle) / Math.log(ANCHOR_RATIO));
+    const anchor = middle * ANCHOR_RATIO ** Math.max(-furthest, Math.min(furthest, steps));
+    let found = kept.get(anchor);
+    if (!found) {
+      const { reactions, local } = boardOperator(setup, medium, anchor, nothing);
+      found = blockInverse(setup.mesh, setup.blocks, reactions, local);
+      kept.set(anchor, found);
+    }
+    return found;
+  };
+}

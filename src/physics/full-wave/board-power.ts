@@ -2,6 +2,7 @@
 import { abs2, type Complex, complex } from '../../numerics/complex.js';
 import { type ComplexVector, complexVector } from '../../numerics/gmres.js';
 import type { FarField, PowerBudget } from '../column/engine.js';
+import { MU0 } from '../constants.js';
 import type { MicrostripLine } from '../line/index.js';
 import { farFieldPower } from '../pattern/radiated-power.js';
 import type { BoardCurrents } from './board-currents.js';
@@ -99,9 +100,18 @@ function belowPower(b: PoweredBoard): Pick<PowerBudget, 'ground' | 'dielectric'>
   const whole = power(medium) - power(lossless);
   const onFeeds = feeds.reduce((sum, { port, line }) => sum + feedLoss(b, port, line), 0);
   const lost = Math.max(0, whole - onFeeds);
-  const [ground, dielectric] = [line0(feeds).ground, line0(feeds).dielectric];
-  const share = ground + dielectric > 0 ? ground / (ground + dielectric) : 0;
+  const share = groundShare(b);
   return { ground: lost * share, dielectric: lost * (1 - share) };
+}
+
+/** Of the loss in slab and ground: that of a matched feed line; without one, of a wide line, Rs/η0h against k tan δ. */
+function groundShare({ feeds, medium, frequency }: PoweredBoard): number {
+  if (feeds.length > 0) {
+    const { ground, dielectric } = line0(feeds);
+    return ground / (ground + dielectric);
+  }
+  const ground = medium.groundImpedance.re / (2 * Math.PI * frequency * MU0 * medium.height);
+  return ground / (ground + medium.lossTangent);
 }
 
 /** Loss per length of a matched line by ground and dielectric. */

@@ -2,7 +2,8 @@
 import { SPEED_OF_LIGHT } from '../constants.js';
 import { microstripLine } from '../line/index.js';
 import { type Block, cutBlocks } from './blocks.js';
-import { edgeTrims } from './edge-trim.js';
+import { type BoardMirror, boardMirror } from './board-mirror.js';
+import { edgeTrims, NATURAL_EDGE } from './edge-trim.js';
 import { chooseGrid } from './grid.js';
 import { drawMesh, type Mesh } from './mesh.js';
 import { outlineOf } from './outline.js';
@@ -17,6 +18,9 @@ export interface BoardSetup {
   readonly mesh: Mesh;
   readonly ports: readonly MeshPort[];
   readonly driven: number;
+  /** Largest distance of a true edge from where the grid would have it, along and across, m; before trims. */
+  readonly misfit: { readonly length: number; readonly width: number };
+  readonly mirror?: BoardMirror;
   readonly blocks: readonly Block[];
   readonly reactions: PreparedReactions;
   readonly product: ReturnType<typeof reactionProduct>;
@@ -67,9 +71,12 @@ export function setUpBoard(
   );
   const layers = { ...slab, ...(problem.cover && { cover: problem.cover }) };
   const mesh = drawMesh(outline.rectangles, grid, edgeTrims(layers, problem.stripThickness));
+  const ports = outline.ports.map((line) => meshPort(mesh, line, clear));
   return {
     mesh,
-    ports: outline.ports.map((line) => meshPort(mesh, line, clear)),
+    ports,
+    mirror: boardMirror(mesh, ports),
+    misfit: misfitOf(mesh),
     driven: outline.ports.filter((p) => !p.terminated).length,
     blocks: cutBlocks(mesh, OVERLAP),
     reactions: prepareReactions({ dx: grid.dx, dy: grid.dy, nx: mesh.nx, ny: mesh.ny }, band, mediumOf(problem, slab)),
@@ -81,6 +88,17 @@ export function setUpBoard(
         : drawnSquares(j1 - j0, grid.dy, slab.height, [trims.y0, trims.y1]);
     }),
   };
+}
+
+function misfitOf({ rectangles, grid }: Mesh): { length: number; width: number } {
+  let [length, width] = [0, 0];
+  for (const { metal, inwards } of rectangles) {
+    if (metal.kind === 'patch')
+      for (const end of [inwards.x0, inwards.x1]) length = Math.max(length, Math.abs(end - NATURAL_EDGE) * grid.dx);
+    if (metal.kind !== 'feed')
+      for (const side of [inwards.y0, inwards.y1]) width = Math.max(width, Math.abs(side - NATURAL_EDGE) * grid.dy);
+  }
+  return { length, width };
 }
 
 export const mediumOf = (

@@ -1,15 +1,17 @@
 /** One frequency of a board: currents for a gap driven at every port, and from them scattering and excited fields. */
 import { add, type Complex, complex, mul, scale } from '../../numerics/complex.js';
 import { complexMatrix, factorise, solveInPlace } from '../../numerics/complex-lu.js';
-import { type ComplexVector, complexVector, gmres } from '../../numerics/gmres.js';
+import { type ComplexVector, complexVector, gmres, type LinearMap } from '../../numerics/gmres.js';
 import type { ColumnConditions, ColumnSolution, ExcitedArray } from '../column/engine.js';
 import { solvedMicrostrip } from '../line/index.js';
 import { boardCurrents } from './board-currents.js';
-import { boardOperator, preconditioner } from './board-operator.js';
+import { mirrored } from './board-mirror.js';
+import { boardOperator } from './board-operator.js';
 import { boardPower } from './board-power.js';
 import { type BoardSetup, mediumOf } from './board-setup.js';
 import { fitWaves, type LineWaves } from './port-waves.js';
 import type { FullWaveProblem, FullWaveSettings } from './problem.js';
+import { fullWaveFlags } from './range.js';
 import { sheetField } from './sheet-field.js';
 import { losslessMedium } from './slab-medium.js';
 import { solvedStrip, stripSheet } from './strip-sheet.js';
@@ -22,6 +24,7 @@ export function solveBoard(
   problem: FullWaveProblem,
   conditions: ColumnConditions,
   settings: FullWaveSettings,
+  inverseAt: (frequency: number) => LinearMap,
 ): ColumnSolution {
   const { frequency, faces, slab = problem.slab, stripThickness = problem.stripThickness } = conditions;
   const { mesh, ports } = setup;
@@ -40,7 +43,7 @@ export function solveBoard(
   );
   const impedances = sheets.map((s) => s.impedance);
   const operator = boardOperator(setup, medium, frequency, impedances);
-  const precondition = preconditioner(setup, operator);
+  const precondition = inverseAt(frequency);
   const lines = ports.map(({ line }) =>
     solvedMicrostrip({
       geometry: stripOf(line.width).section,
@@ -53,14 +56,21 @@ export function solveBoard(
   );
 
   let [iterations, residual] = [0, 0];
-  const currents = ports.map(({ gap }) => {
+  const currents: ComplexVector[] = [];
+  ports.forEach(({ gap }, k) => {
+    const image = setup.mirror?.ports[k] ?? k;
+    if (image < k && setup.mirror) {
+      currents.push(mirrored(currents[image], setup.mirror, mesh.xCount));
+      return;
+    }
     const b = complexVector(mesh.unknowns);
     for (const u of gap.unknowns) b.re[u] = 1;
     const x = complexVector(mesh.unknowns);
-    const found = gmres(operator.apply, precondition, b, x, settings.tolerance ?? TOLERANCE, MOST_ITERATIONS);
+    const tolerance = settings.tolerance ?? TOLERANCE;
+    const found = gmres(operator.apply, precondition, b, x, tolerance, MOST_ITERATIONS);
     iterations = Math.max(iterations, found.iterations);
     residual = Math.max(residual, found.residual);
-    return x;
+    currents.push(x);
   });
   // Waves in √W peak: column k of each matrix belongs to gap k.
   const n = ports.length;
@@ -151,15 +161,15 @@ export function solveBoard(
     frequency,
     scattering: change.scattering,
     referenceImpedance: references,
-    flags: [],
+    flags: fullWaveFlags(problem, slab, stripThickness, frequency, residual),
     effort: {
       unknowns: mesh.unknowns,
       iterations,
       residual,
       cellLength: mesh.grid.dx,
       cellWidth: mesh.grid.dy,
-      misfitLength: 0,
-      misfitWidth: 0,
+      misfitLength: setup.misfit.length,
+      misfitWidth: setup.misfit.width,
     },
     excite,
   };

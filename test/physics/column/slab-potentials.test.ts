@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { slabIntegrals } from '../../../src/physics/column/slab-integrals.js';
-import { addWeight, type SlabPotentials, slabPotentials } from '../../../src/physics/column/slab-potentials.js';
+import { addWeights, type SlabPotentials, slabPotentials } from '../../../src/physics/column/slab-potentials.js';
 import { slabSpectrum } from '../../../src/physics/column/slab-spectrum.js';
 import { EPS0, MU0 } from '../../../src/physics/constants.js';
 
@@ -10,7 +10,7 @@ const K0 = (2 * Math.PI * F) / 299792458;
 /** Potential p at distance r: [re, im, guided part of im]. */
 function at(integrals: ReturnType<typeof slabIntegrals>, slab: SlabPotentials, p: number, r: number): number[] {
   const weights = new Float64Array(integrals.distance.length);
-  addWeight(integrals.distance, r, 1, weights);
+  addWeights(integrals.distance, r, 1, weights, 0, weights);
   return [slab.re[p], slab.im[p], slab.guided[p]].map((table) => weights.reduce((sum, w, i) => sum + w * table[i], 0));
 }
 
