@@ -2,8 +2,8 @@
  * One macro electric current along x per patch: cos(πx/L) along, unit total current in the middle, and across
  *   (P(y) − Σ share · l(y))/(1 − Σ share).
  * l = 2/(πw √(1 − (2y/w)²)) is a line at one of its edges: its current runs against the patch's and takes away, over a
- * period of the column, what the line silences of the edge in the magnetic picture. What is left lies further out, which
- * weakens and turns the coupling to the columns beside it by as much as 4 dB and 20°. P is half flat and half with the
+ * period of the column, what the line silences of the edge in the magnetic picture. What is left lies further out:
+ * 0.1 dB more directivity and some 10° in the coupling to the columns beside it. P is half flat and half with the
  * edge singularity of a strip: the second moment of flat current under the metal with what fringes at its edges.
  */
 import { besselJ0 } from '../../numerics/bessel.js';

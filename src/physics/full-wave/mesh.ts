@@ -42,6 +42,7 @@ export interface Mesh {
 }
 
 const SAME = 1e-9;
+const NO_TRIM: EdgeTrim = { charge: 0, current: 0 };
 
 /**
  * The current of a patch does not keep the sections' spread near its ends, where its charge gathers at the corners: trims
@@ -108,7 +109,8 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
     };
     const [wide, tall] = [xs[k].high - xs[k].low, ys[k].high - ys[k].low];
     // Across a column both edges share what is off, so that it stays symmetric: its place is a whole number of cells.
-    const whole = edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
+    const side = r.kind === 'feed' && r.y1 - r.y0 > r.width * 1.001;
+    const whole = side ? NO_TRIM : edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
     const across =
       r.kind === 'patch'
         ? { charge: whole.charge * (1 - CORNER_SHARE), current: whole.current * (1 + CORNER_SHARE) }
@@ -121,8 +123,9 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
       j1: ys[k].high - below,
       inwards,
       trims: {
-        x0: edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x0),
-        x1: edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x1),
+        // Where a stub ends exactly does not matter.
+        x0: r.kind === 'feed' && !side ? NO_TRIM : edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x0),
+        x1: r.kind === 'feed' && !side ? NO_TRIM : edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x1),
         y0: across,
         y1: across,
       },

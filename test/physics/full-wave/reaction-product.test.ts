@@ -64,19 +64,22 @@ describe('product of all reactions with a current', () => {
     }
   });
 
-  it('is undone by the dense inverse of the whole board, even and odd parts apart or not', () => {
+  it('is undone by the dense inverse of the board', () => {
     const all = {
       unknowns: Int32Array.from({ length: n }, (_, u) => u),
       own: new Uint8Array(n).fill(1),
       key: 'all',
     };
-    const mirror = setup.mirror?.unknowns;
-    expect(mirror).toBeDefined();
-    for (const block of [all, { ...all, mirror }]) {
-      const x = complexVector(n);
-      blockInverse(setup.mesh, [block], operator.reactions, operator.local)(za, x);
-      for (let u = 0; u < n; u++) expect(Math.hypot(x.re[u] - a.re[u], x.im[u] - a.im[u])).toBeLessThan(1e-8);
+    const x = complexVector(n);
+    blockInverse(setup.mesh, [all], operator.reactions, operator.local)(za, x);
+    const back = complexVector(n);
+    operator.apply(x, back);
+    let [off, size] = [0, 0];
+    for (let u = 0; u < n; u++) {
+      off = Math.max(off, Math.hypot(back.re[u] - za.re[u], back.im[u] - za.im[u]));
+      size = Math.max(size, Math.hypot(za.re[u], za.im[u]));
     }
+    expect(off / size).toBeLessThan(1e-9);
   });
 
   it('has the same inverse for preconditioning whatever was asked before', () => {
