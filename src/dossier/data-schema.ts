@@ -51,6 +51,7 @@ const requirement = z.strictObject({
   text,
   quantity: text,
   cut: text.optional(),
+  between: z.array(text).optional().describe('of an isolation: the two groups; absent: any two'),
   unit: text,
   limit: z.strictObject({ direction: z.enum(['at_least', 'at_most']), value: z.number() }).optional(),
   mask: z.array(z.strictObject({ fromRad: z.number(), toRad: z.number(), levelDb: z.number() })).optional(),

@@ -171,6 +171,7 @@ const requirementData = (r: Requirement): PackData['requirements'][number] => ({
   text: r.text,
   quantity: r.quantity,
   ...(r.cut === undefined ? {} : { cut: r.cut }),
+  ...(r.between === undefined ? {} : { between: [...r.between] }),
   unit: quantityOf(r.quantity).unit,
   ...(r.limit === undefined ? {} : { limit: { direction: r.limit.direction, value: num(r.limit.value) } }),
   ...(r.mask === undefined

@@ -2,6 +2,7 @@ import type { Board, Figure, FinishLayer, Texture } from '../manifest/model.js';
 import { type Dimension, formatSpread } from '../quantity/index.js';
 import { declarationsByPart } from '../verdict/index.js';
 import { micrometres } from './figures.js';
+import { LAYOUT_FIELDS } from './layout-differences.js';
 import { factorText } from './retuning.js';
 import { bandText, celsius, costText, count, gigahertz, statedNumber, temperatureText } from './values.js';
 
@@ -152,6 +153,7 @@ const FIELDS: readonly Field[] = [
   { label: 'Patch lengths (mm)', text: (b) => perColumn(b, (c) => list(c.patches.map((p) => mm(p.length)))) },
   { label: 'Link widths (mm)', text: (b) => perColumn(b, (c) => list(c.links.map((l) => mm(l.width)))) },
   { label: 'Link lengths (mm)', text: (b) => perColumn(b, (c) => list(c.links.map((l) => mm(l.length)))) },
+  ...LAYOUT_FIELDS,
   {
     label: 'Retuned by',
     text: ({ retuned }) =>

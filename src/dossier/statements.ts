@@ -9,7 +9,7 @@ export const INTERNAL_MARKING = 'internal: not for suppliers';
 export const NOT_MODELLED: readonly string[] = [
   'Fascia, bumper or radome in front of the antenna.',
   'Housing and neighbouring parts.',
-  'Transition from the chip to the feed network.',
+  'Transition from the chip to the feed network, unless the feed names a measured one.',
   'Vias.',
   'Edges of the board: laminate and ground are taken as infinite, and the power of the surface wave as lost.',
 ];

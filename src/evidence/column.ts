@@ -27,45 +27,48 @@ const ENGINES: Readonly<
     prefix: 'column',
     topic: 'Patch columns: network against full wave',
     reflection: {
-      tolerance: 0.063,
-      toleranceReason: '0.06 asked of the network and 0.02 of the reference, root of sum of squares',
+      tolerance: 0.08,
+      toleranceReason: '0.06 asked of the network and 0.02 of the reference, added',
     },
     gain: {
-      tolerance: 0.27,
-      toleranceReason: '0.25 dB asked of the network and 0.1 dB of the reference, root of sum of squares',
+      tolerance: 0.35,
+      toleranceReason: '0.25 dB asked of the network and 0.1 dB of the reference, added',
     },
     tilt: {
-      tolerance: 0.52,
-      toleranceReason: '0.5° asked of the network and 0.15° from the 0.5° grid of the reference',
+      tolerance: 0.65,
+      toleranceReason: '0.5° asked of the network and 0.15° from the 0.5° grid of the reference, added',
     },
-    sidelobe: { tolerance: 1.1, toleranceReason: '1 dB asked of the network and 0.5 dB of the reference above −20 dB' },
+    sidelobe: {
+      tolerance: 1.5,
+      toleranceReason: '1 dB asked of the network and 0.5 dB of the reference above −20 dB, added',
+    },
     resonancePercent: {
-      tolerance: 0.36,
-      toleranceReason: '0.3 % asked of the network and 0.2 % of the reference, root of sum of squares',
+      tolerance: 0.5,
+      toleranceReason: '0.3 % asked of the network and 0.2 % of the reference, added',
     },
   },
   'full wave': {
     prefix: 'full-wave',
     topic: 'Patch columns: full-wave engine against independent full wave',
     reflection: {
-      tolerance: 0.036,
-      toleranceReason: '0.03 asked of the engine and 0.02 of the reference, root of sum of squares',
+      tolerance: 0.05,
+      toleranceReason: '0.03 asked of the engine and 0.02 of the reference, added',
     },
     gain: {
-      tolerance: 0.18,
-      toleranceReason: '0.15 dB asked of the engine and 0.1 dB of the reference, root of sum of squares',
+      tolerance: 0.25,
+      toleranceReason: '0.15 dB asked of the engine and 0.1 dB of the reference, added',
     },
     tilt: {
-      tolerance: 0.52,
-      toleranceReason: '0.5° asked of the engine and 0.15° from the 0.5° grid of the reference',
+      tolerance: 0.65,
+      toleranceReason: '0.5° asked of the engine and 0.15° from the 0.5° grid of the reference, added',
     },
     sidelobe: {
-      tolerance: 0.71,
-      toleranceReason: '0.5 dB asked of the engine and 0.5 dB of the reference above −20 dB',
+      tolerance: 1,
+      toleranceReason: '0.5 dB asked of the engine and 0.5 dB of the reference above −20 dB, added',
     },
     resonancePercent: {
-      tolerance: 0.32,
-      toleranceReason: '0.25 % asked of the engine and 0.2 % of the reference, root of sum of squares',
+      tolerance: 0.45,
+      toleranceReason: '0.25 % asked of the engine and 0.2 % of the reference, added',
     },
   },
 };

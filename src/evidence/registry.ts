@@ -8,6 +8,7 @@ import { laminateChecks } from './laminate.js';
 import { lineChecks } from './line.js';
 import { lineLossChecks } from './line-loss.js';
 import { lineSolvedChecks } from './line-solved.js';
+import { patchResonanceChecks } from './measured-patches.js';
 import { otherLineChecks } from './other-lines.js';
 import { roughShapeChecks } from './rough-shapes.js';
 import { roughnessChecks } from './roughness.js';
@@ -28,6 +29,7 @@ export const allChecks: readonly EvidenceCheck[] = [
   ...guideChecks,
   ...otherLineChecks,
   ...columnEngineChecks,
+  ...patchResonanceChecks,
   ...couplingDecayChecks,
   ...slabWaveChecks,
   ...arrayPatternChecks,

@@ -22,6 +22,8 @@ const APART = new Set([
   'invented',
   'untreatedFace',
   'treatedFace',
+  // Of a file that is named: boards with other points name another file.
+  'points',
 ]);
 
 /** Every path to a number or text of the board that a result may depend on. */
@@ -49,8 +51,39 @@ const known = (path: string, texture: Texture): Texture => ({
   nodule: { radius: figure(`${path}.radius`, 0.2e-6, 0), pitch: figure(`${path}.pitch`, 0.6e-6, 0), layers: 2 },
 });
 const { strip, ground } = base.stackUp;
+/** Every field that only some layouts have, on one column. */
+const laidOut = base.columns.map((column, i) =>
+  i === 0
+    ? {
+        ...column,
+        direction: -1 as const,
+        matching: [{ width: 0.3e-3, length: 0.6e-3 }],
+        inset: { depth: 0.3e-3, gap: 0.1e-3 },
+        termination: { width: 0.2e-3 },
+        sideFeed: { link: 1, side: 1 as const },
+      }
+    : column,
+);
 const full: Board = {
   ...base,
+  columns: laidOut,
+  groups: [{ id: 'tx', columns: [0, 1] }],
+  scan: { low: -0.5, high: 0.4 },
+  sizedFor: {
+    frequency: 76.5e9,
+    patches: 6,
+    taper: { kind: 'taylor', sidelobeDb: 25, nBar: 4 },
+    leastWidth: 1e-4,
+    leastGap: 1.1e-4,
+    grid: 1e-6,
+  },
+  feedNetwork: {
+    divider: 'tee',
+    lineWidth: 0.2e-3,
+    trunkLength: 3e-3,
+    levelLength: 4e-3,
+    transition: { file: 'launch.s2p', referenceImpedance: 50, points: [{ frequency: 76e9, s: [[0, 0]] }] },
+  },
   referenceImpedance: 50,
   stackUp: {
     ...base.stackUp,

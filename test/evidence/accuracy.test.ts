@@ -9,6 +9,11 @@ const table = accuracyTable();
 /** Lines that do not meet their target, and what their remark must own up to. */
 const MISSED: Readonly<Record<string, RegExp>> = {
   'perturbation-surfaces': /Missed.*0\.014.*0\.026/s,
+  'column-coupling': /Missed: 2\.6 dB/,
+  'full-wave-patch-resistance': /Missed.*4\.5 %/,
+  'full-wave-reflection': /Missed: 0\.04/,
+  'full-wave-gain': /Missed: 0\.19 dB/,
+  'full-wave-rough-gain': /Missed: 0\.06 dB/,
 };
 
 describe('the accuracy table', () => {

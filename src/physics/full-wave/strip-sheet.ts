@@ -47,12 +47,17 @@ export function seriesByFace(strip: StripSolution, faces: FaceImpedances, freque
   };
 }
 
+/**
+ * Without thickness the sheet impedance is that of the drawn metal as it is: the current spreads as the grid lets it. With
+ * thickness the drawn metal gets what gives a line of this width the series impedance of the solved strip.
+ */
 export function stripSheet(
   strip: StripSolution,
   faces: FaceImpedances,
   frequency: number,
   squares: number,
 ): StripSheet {
+  if (strip.sheet) return { impedance: faces.underside, shares: { underside: 1, top: 0, edges: 0 } };
   const { underside, top, edges } = seriesByFace(strip, faces, frequency);
   const whole = add(add(underside, top), edges);
   const share = (z: Complex): number => (whole.re > 0 ? z.re / whole.re : 0);
