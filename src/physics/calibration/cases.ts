@@ -49,7 +49,12 @@ function halfWave({ permittivity, height }: Slab, width: number): number {
   const geometry = { width, height, thickness: 0, permittivity };
   const zero = { re: 0, im: 0 };
   const faces = { underside: zero, top: zero, edges: zero, ground: zero };
-  const { effectivePermittivity } = microstripLine({ geometry, frequency: CALIBRATION_FREQUENCY, lossTangent: 0, faces });
+  const { effectivePermittivity } = microstripLine({
+    geometry,
+    frequency: CALIBRATION_FREQUENCY,
+    lossTangent: 0,
+    faces,
+  });
   const wavelength = SPEED_OF_LIGHT / (CALIBRATION_FREQUENCY * Math.sqrt(effectivePermittivity));
   return wavelength / 2 - 2 * openEndExtension(geometry, CALIBRATION_FREQUENCY);
 }

@@ -35,11 +35,14 @@ export function gapNetwork(
   const radiation = boardRadiation(problem, circuit, maximumFrequency, constants);
   return (frequency, faces) => {
     const lines = lineTable(slab, 0, frequency, faces, constants);
-    const { own } = radiation.at(frequency, slab, 0, lines).coupling;
-    const odd = complex(own.re[0] - own.re[1], own.im[0] - own.im[1] + lines.edge(width, 0));
+    const { admittance } = radiation.at(frequency, slab, 0, lines).coupling;
+    const odd = complex(
+      admittance.re[0] - admittance.re[1],
+      admittance.im[0] - admittance.im[1] + lines.edge(width, 0),
+    );
     const { characteristic, gamma } = lines.line(width);
     const t = tanh(complex((gamma.re * length) / 2, (gamma.im * length) / 2));
-    // Zc (1 + Yodd Zc t')/(…): input of half the patch, twice in series.
+    // Both halves in series.
     const load = mul(odd, characteristic);
     const half = mul(characteristic, div(add(ONE, mul(load, t)), add(load, t)));
     return complex(2 * half.re, 2 * half.im);

@@ -1,9 +1,9 @@
 /** One frequency of a board: currents for a gap driven at every port, and from them scattering and excited fields. */
-import { add, type Complex, complex, mul, scale } from '../../numerics/complex.js';
+import { add, type Complex, complex, div, mul, scale, sqrt, sub } from '../../numerics/complex.js';
 import { complexMatrix, factorise, solveInPlace } from '../../numerics/complex-lu.js';
 import { type ComplexVector, complexVector, gmres, type LinearMap } from '../../numerics/gmres.js';
 import type { ColumnConditions, ColumnSolution, ExcitedArray } from '../column/engine.js';
-import { solvedMicrostrip } from '../line/index.js';
+import { type MicrostripLine, solvedMicrostrip } from '../line/index.js';
 import { boardCurrents } from './board-currents.js';
 import { mirrored } from './board-mirror.js';
 import { boardOperator } from './board-operator.js';
@@ -14,7 +14,7 @@ import type { FullWaveProblem, FullWaveSettings } from './problem.js';
 import { fullWaveFlags } from './range.js';
 import { sheetField } from './sheet-field.js';
 import { losslessMedium } from './slab-medium.js';
-import { solvedStrip, stripSheet } from './strip-sheet.js';
+import { solvedStrip, stripSheet, wholeSeries } from './strip-sheet.js';
 
 export const TOLERANCE = 1e-4;
 const MOST_ITERATIONS = 200;
@@ -44,16 +44,19 @@ export function solveBoard(
   const impedances = sheets.map((s) => s.impedance);
   const operator = boardOperator(setup, medium, frequency, impedances);
   const precondition = inverseAt(frequency);
-  const lines = ports.map(({ line }) =>
-    solvedMicrostrip({
-      geometry: stripOf(line.width).section,
+  const lines = ports.map(({ line, rectangle }) => {
+    const strip = stripOf(line.width);
+    const solved = solvedMicrostrip({
+      geometry: strip.section,
       frequency,
       lossTangent: slab.lossTangent,
       ...(problem.cover && { coverLossTangent: problem.cover.lossTangent }),
       faces,
-      solution: stripOf(line.width),
-    }),
-  );
+      solution: strip,
+    });
+    const drawn = scale(impedances[rectangle], setup.squares[rectangle]);
+    return { ...solved, ...drawnLine(solved, sub(drawn, wholeSeries(strip, faces, frequency))) };
+  });
 
   let [iterations, residual] = [0, 0];
   const currents: ComplexVector[] = [];
@@ -173,6 +176,13 @@ export function solveBoard(
     },
     excite,
   };
+}
+
+/** γ and Zc of a line whose metal has more series impedance per length than was solved for: γ² = Z'Y', Zc = Z'/γ. */
+function drawnLine({ gamma, characteristic }: MicrostripLine, more: Complex): { gamma: Complex; characteristic: Complex } {
+  const series = add(mul(gamma, characteristic), more);
+  const wave = sqrt(mul(series, div(gamma, characteristic)));
+  return { gamma: wave, characteristic: div(series, wave) };
 }
 
 /**

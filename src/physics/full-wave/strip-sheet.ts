@@ -47,6 +47,12 @@ export function seriesByFace(strip: StripSolution, faces: FaceImpedances, freque
   };
 }
 
+/** Of the solved strip, ohm/m. */
+export function wholeSeries(strip: StripSolution, faces: FaceImpedances, frequency: number): Complex {
+  const { underside, top, edges } = seriesByFace(strip, faces, frequency);
+  return add(add(underside, top), edges);
+}
+
 /**
  * Without thickness the sheet impedance is that of the drawn metal as it is: the current spreads as the grid lets it. With
  * thickness the drawn metal gets what gives a line of this width the series impedance of the solved strip.

@@ -6,13 +6,13 @@
  * broadside; the length of all patches sets the input reactance. Neighbouring columns, covers and grounds that end are not in it.
  */
 import { abs, type Complex, div, mul, sub } from '../../numerics/complex.js';
+import { leastSquares } from '../../numerics/least-squares.js';
 import type { ColumnGeometry } from '../column/index.js';
 import { cutShape } from '../pattern/index.js';
 import { taperAmplitudes } from '../taper/index.js';
 import { excitationError, responseOf, solveColumn } from './column-response.js';
 import { type ColumnUnknowns, columnUnknowns, unknownsOf } from './column-unknowns.js';
 import { onGrid } from './grid.js';
-import { leastSquares } from './least-squares.js';
 import { withMatching } from './matching-section.js';
 import { requireRequest, type SizedColumn, type SizingRequest } from './request.js';
 import { goalNotes, limitNotes } from './sizing-notes.js';

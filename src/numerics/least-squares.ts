@@ -1,4 +1,4 @@
-import { factoriseReal, solveReal } from '../../numerics/real-lu.js';
+import { factoriseReal, solveReal } from './real-lu.js';
 
 /** Residuals at a point, whose squares are to be least. */
 export type Residuals = (x: Float64Array) => Float64Array;

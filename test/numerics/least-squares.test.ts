@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { leastSquares } from '../../../src/physics/sizing/least-squares.js';
+import { leastSquares } from '../../src/numerics/least-squares.js';
 
 const settings = (n: number, more: object = {}) => ({
   step: new Float64Array(n).fill(1e-3),
