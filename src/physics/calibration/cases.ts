@@ -15,14 +15,14 @@ export interface CalibrationCase {
 }
 
 /** Points of the lattice plus one, a prime. */
-const MODULUS = 13;
-/** Of the multiplicative group: every power of it but the zeroth visits all levels. */
-const GENERATOR = 6;
+const MODULUS = 23;
+/** Generates the multiplicative group; of its generators, one of those whose points keep furthest apart. */
+const GENERATOR = 5;
 /** A line wider than this part of its patch makes hardly a step. */
 const WIDEST_LINE = 0.6;
 
 /**
- * A good-lattice-point set (N. M. Korobov, Dokl. Akad. Nauk SSSR 124, 1959): each of the four quantities takes twelve
+ * A good-lattice-point set (N. M. Korobov, Dokl. Akad. Nauk SSSR 124, 1959): each of the four quantities takes 22
  * levels from end to end of its range, each once. Patches resonate near 77 GHz before a line is attached. Where the line
  * would be too wide for the narrowest patch, widths begin where it is not.
  */

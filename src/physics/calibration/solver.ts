@@ -26,16 +26,22 @@ export function networkSolver(constants: NetworkConstants): Solver {
   );
 }
 
-/** Cells along a patch; the gap needs an even number. */
-export function fullWaveSolver(cells: number): Solver {
-  const along = 2 * Math.round(cells / 2);
+/**
+ * @param cells    along a patch; the gap needs an even number and gets the next
+ * @param downTo   lowest frequency of the band that feed lines are laid out for, over the lowest asked for: a lower one
+ *                 lengthens the line that is read and the stub behind the gap
+ */
+export function fullWaveSolver(cells: number, downTo = 1): Solver {
+  const along = 2 * Math.ceil(cells / 2);
   return solver(
     (patch, highest, lowest) => {
       const solve = gapPatch(patch, { low: lowest, high: highest }, { along, across: Math.round(0.8 * along) });
       return (frequency, faces) => solve(frequency, faces).impedance;
     },
-    (problem, frequencies) =>
-      fullWave(problem, { low: Math.min(...frequencies), high: Math.max(...frequencies) }, { cellsPerPatch: cells }),
+    (problem, frequencies) => {
+      const band = { low: downTo * Math.min(...frequencies), high: Math.max(...frequencies) };
+      return fullWave(problem, band, { cellsPerPatch: cells });
+    },
   );
 }
 
