@@ -26,7 +26,7 @@ const FITTED = [
 ] as const satisfies readonly (keyof FittedConstants)[];
 
 /** Relative. */
-const STEP = 0.02;
+const STEP = 0.005;
 /** No constant goes further than this from where it starts: beyond, it no longer means what it is named for. */
 const FURTHEST = 0.5;
 
@@ -62,7 +62,7 @@ export function fitConstants(
       step: new Float64Array(n).fill(STEP),
       low: new Float64Array(n).fill(1 - FURTHEST),
       high: new Float64Array(n).fill(1 + FURTHEST),
-      reach: 6,
+      reach: 30,
       tolerance: 1e-5,
       budget,
     },

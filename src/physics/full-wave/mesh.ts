@@ -168,6 +168,7 @@ function occupy(rectangles: readonly DrawnRectangle[], nx: number, ny: number) {
       sums[`current${axis}`][n] += trim.current;
       sums[`charge${axis}`][n] += trim.charge;
     };
+    if (!metal(i, j - 1)) note('X', trims.y0);
     if (!metal(i, j + 1)) note('X', trims.y1);
     if (!metal(i - 1, j)) note('Y', trims.x0);
     if (!metal(i + 1, j)) note('Y', trims.x1);
