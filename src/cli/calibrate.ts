@@ -1,6 +1,6 @@
 import { writeFileSync } from 'node:fs';
 import { fileURLToPath, pathToFileURL } from 'node:url';
-import { CALIBRATION_RANGE, calibrate } from '../physics/calibration/index.js';
+import { CALIBRATION_RANGE, calibrate, MIDDLE_RANGE } from '../physics/calibration/index.js';
 import type { CalibrationRecord } from '../physics/column/calibration-record.js';
 import { NETWORK_CONSTANTS } from '../physics/column/index.js';
 import { tellFailure } from './failures.js';
@@ -12,7 +12,7 @@ const DATA_FILE = 'src/physics/column/calibration-data.ts';
 const DIGITS = 4;
 
 /** The data file as source, as the formatter would leave it. */
-export function calibrationSource(record: CalibrationRecord): string {
+export function calibrationSource(whole: CalibrationRecord, middle: CalibrationRecord): string {
   return [
     '/**',
     ' * Made by `npm run calibrate`: the edge network against the full wave of single patches, without lines, at the end of a',
@@ -20,7 +20,10 @@ export function calibrationSource(record: CalibrationRecord): string {
     ' */',
     "import type { CalibrationRecord } from './calibration-record.js';",
     '',
-    `export const CALIBRATION: CalibrationRecord = ${literal(record, '')};`,
+    `export const CALIBRATION: CalibrationRecord = ${literal(whole, '')};`,
+    '',
+    '/** The same over the middle of the range, where columns were compared too. */',
+    `export const MIDDLE_CALIBRATION: CalibrationRecord = ${literal(middle, '')};`,
     '',
   ].join('\n');
 }
@@ -33,17 +36,25 @@ function literal(value: unknown, indent: string): string {
   return `{\n${lines.join('')}${indent}}`;
 }
 
+function table(record: CalibrationRecord): string[] {
+  const { cases, residuals, fittedResiduals, floor } = record;
+  const names = Object.keys(residuals) as (keyof typeof residuals)[];
+  const row = (name: (typeof names)[number]): string =>
+    [residuals, fittedResiduals, floor].map((r) => r[name].toFixed(4)).join('  ');
+  return [
+    `${cases} patches, root mean square off the full wave: constants in use, fitted; full wave off itself`,
+    ...names.map((name) => `  ${name.padEnd(16)} ${row(name)}`),
+  ];
+}
+
 function main(): void {
   const progress = processIo.terminal ? terminalProgress(processIo.terminal) : noProgress;
-  const record = calibrate(CALIBRATION_RANGE, NETWORK_CONSTANTS, progress);
+  const [whole, middle] = [CALIBRATION_RANGE, MIDDLE_RANGE].map((range) =>
+    calibrate(range, NETWORK_CONSTANTS, progress),
+  );
   progress.end();
-  writeFileSync(fileURLToPath(new URL(`../../${DATA_FILE}`, import.meta.url)), calibrationSource(record));
-  const { residuals, fittedResiduals, floor } = record;
-  processIo.out(`${record.cases} patches, root mean square of network less full wave: in use, fitted, own doubt`);
-  for (const name of Object.keys(residuals) as (keyof typeof residuals)[])
-    processIo.out(
-      `  ${name.padEnd(16)} ${[residuals, fittedResiduals, floor].map((r) => r[name].toFixed(4)).join('  ')}`,
-    );
+  writeFileSync(fileURLToPath(new URL(`../../${DATA_FILE}`, import.meta.url)), calibrationSource(whole, middle));
+  for (const line of ['Whole range:', ...table(whole), 'Middle of it:', ...table(middle)]) processIo.out(line);
   processIo.out(`Written to ${DATA_FILE}`);
 }
 

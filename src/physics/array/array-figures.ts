@@ -11,7 +11,7 @@ import { type CutShape, climb, cutShape, intensity } from '../pattern/index.js';
 export interface ArrayFigures {
   /** Linear. */
   readonly directivity: number;
-  /** Radiated over accepted power. */
+  /** Radiated power over the sum of all sinks: what a solver's balance misses is left out of both. */
   readonly radiationEfficiency: number;
   /** 1 − reflected over incident power, all columns driven. */
   readonly mismatch: number;
@@ -45,7 +45,7 @@ export function arrayFigures(solution: ColumnSolution, incident: readonly Comple
     power.load;
   return {
     directivity: (4 * Math.PI * peak) / power.radiated,
-    radiationEfficiency: power.radiated / power.accepted,
+    radiationEfficiency: power.radiated / sinks,
     mismatch: power.accepted / power.incident,
     passiveReflection: solution.scattering.map((row, c) => row[c]),
     activeReflection: incident.map((wave, c) => (abs2(wave) > 0 ? div(excited.reflected[c], wave) : ZERO)),

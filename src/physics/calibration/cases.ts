@@ -15,24 +15,24 @@ export interface CalibrationCase {
 }
 
 /** Points of the lattice plus one, a prime. */
-const MODULUS = 23;
-/** Generates the multiplicative group; of its generators, one of those whose points keep furthest apart. */
-const GENERATOR = 5;
+const MODULUS = 17;
+/**
+ * Multiplier from one quantity to the next: of those whose points keep furthest apart, one that gives the thinnest laminate
+ * a wide line. Hair lines under wide patches ask for meshes that take the full wave a minute each.
+ */
+const MULTIPLIER = 8;
 /** A line wider than this part of its patch makes hardly a step. */
 const WIDEST_LINE = 0.6;
 
 /**
- * A good-lattice-point set (N. M. Korobov, Dokl. Akad. Nauk SSSR 124, 1959): each of the four quantities takes 22
+ * A good-lattice-point set (N. M. Korobov, Dokl. Akad. Nauk SSSR 124, 1959): each of the four quantities takes 16
  * levels from end to end of its range, each once. Patches resonate near 77 GHz before a line is attached. Where the line
  * would be too wide for the narrowest patch, widths begin where it is not.
  */
 export function calibrationCases(range: CalibrationRange): CalibrationCase[] {
   const { electricalHeight, permittivity, lineWidthOverHeight, patchWidth } = range;
   return Array.from({ length: MODULUS - 1 }, (_, i) => {
-    const level = (dimension: number): number => {
-      const step = Array.from({ length: dimension }).reduce((g: number) => (g * GENERATOR) % MODULUS, 1);
-      return ((((i + 1) * step) % MODULUS) - 1) / (MODULUS - 2);
-    };
+    const level = (dimension: number): number => ((((i + 1) * MULTIPLIER ** dimension) % MODULUS) - 1) / (MODULUS - 2);
     const height = (at(electricalHeight, level(0)) * SPEED_OF_LIGHT) / (2 * Math.PI * CALIBRATION_FREQUENCY);
     const slab = { permittivity: at(permittivity, level(1)), lossTangent: 0, height };
     const lineWidth = height * at(lineWidthOverHeight, level(2));

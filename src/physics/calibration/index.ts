@@ -1,2 +1,2 @@
 export { type CalibrationProgress, calibrate } from './calibrate.js';
-export { CALIBRATION_RANGE } from './range.js';
+export { CALIBRATION_RANGE, MIDDLE_RANGE } from './range.js';

@@ -8,5 +8,13 @@ export const CALIBRATION_RANGE: CalibrationRange = {
   lineWidthOverHeight: [0.4, 2],
 };
 
+/** The middle of it, where the network is compared with full wave of whole columns too. */
+export const MIDDLE_RANGE: CalibrationRange = {
+  electricalHeight: [0.16, 0.33],
+  permittivity: [2.9, 3.6],
+  patchWidth: [0.5e-3, 1.45e-3],
+  lineWidthOverHeight: [0.6, 1.7],
+};
+
 /** Hz; electrical heights are meant here. */
 export const CALIBRATION_FREQUENCY = 77e9;

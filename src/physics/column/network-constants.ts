@@ -1,6 +1,10 @@
+import { CALIBRATION } from './calibration-data.js';
+import type { CalibrationRange } from './calibration-record.js';
+
 /**
- * Constants of the edge network: found by others of this project's authors by fitting independent full-wave solutions of
- * isolated patches and one-patch two-ports, and stated to hold in `range`.
+ * Constants of the edge network: found by fitting independent full-wave solutions of isolated patches and one-patch
+ * two-ports, and compared with this project's own full wave over `range`. What that comparison left, and the constants
+ * that it would have chosen, stand in `calibration-data.ts`.
  */
 export interface NetworkConstants {
   readonly source: string;
@@ -11,12 +15,7 @@ export interface NetworkConstants {
   readonly modeConductance: number;
   readonly openEnd: number;
   readonly coveredSusceptance: number;
-  readonly range: {
-    readonly electricalHeight: readonly [number, number];
-    readonly permittivity: readonly [number, number];
-    readonly patchWidth: readonly [number, number];
-    readonly lineWidthOverHeight: readonly [number, number];
-  };
+  readonly range: CalibrationRange;
 }
 
 export const NETWORK_CONSTANTS: NetworkConstants = {
@@ -35,19 +34,11 @@ export const NETWORK_CONSTANTS: NetworkConstants = {
    */
   modeConductance: 0.88,
   /**
-   * Open-end length over that of Kirschning, Jansen and Koster. The fit on isolated patches gave 1.094; 1.115, found on
-   * columns of two laminates, halves the error of column reflections and held on laminates and layouts kept apart.
+   * Open-end length over that of Kirschning, Jansen and Koster. A first fit on isolated patches gave 1.094; 1.115, found on
+   * columns of two laminates, held on laminates and layouts kept apart, and on the single patches of the calibration.
    */
   openEnd: 1.115,
   /** Part of the open-end susceptance that an attached line removes, per effective width ratio. */
   coveredSusceptance: 1.249,
-  range: {
-    /** k0 h */
-    electricalHeight: [0.16, 0.33],
-    permittivity: [2.9, 3.6],
-    /** m */
-    patchWidth: [0.5e-3, 1.45e-3],
-    /** w/h of feed line and links */
-    lineWidthOverHeight: [0.6, 1.7],
-  },
+  range: CALIBRATION.range,
 };

@@ -4,7 +4,7 @@ import { microstripLine } from '../line/index.js';
 import { type Block, cutBlocks } from './blocks.js';
 import { type BoardMirror, boardMirror } from './board-mirror.js';
 import { edgeTrims, NATURAL_EDGE } from './edge-trim.js';
-import { chooseGrid } from './grid.js';
+import { chooseGrid, drawnColumns } from './grid.js';
 import { drawMesh, type Mesh } from './mesh.js';
 import { outlineOf } from './outline.js';
 import { type MeshPort, meshPort } from './port-waves.js';
@@ -28,8 +28,8 @@ export interface BoardSetup {
   readonly squares: readonly number[];
 }
 
-/** By default; boards of few columns may take a finer grid along that draws them better. */
-const CELLS = { perPatch: 17, perLine: 2, fewColumns: 3 };
+/** By default; boards of few columns may take a finer grid along that draws them better, a single column one across too. */
+const CELLS = { perPatch: 17, perLine: 2, perLineOfOne: 3, fewColumns: 3 };
 /** Cells by which the blocks of the preconditioner reach into each other. */
 const OVERLAP = 4;
 /** Slab heights from gap and patch within which a feed line's current is not its wave's alone. */
@@ -61,14 +61,16 @@ export function setUpBoard(
   });
   const wavelength = SPEED_OF_LIGHT / (Math.sqrt(band.low * band.high) * Math.sqrt(feedLine.effectivePermittivity));
   const clear = CLEAR * slab.height;
-  const outline = outlineOf(columns, { run: 2 * clear + READ * wavelength, stub: STUB * wavelength });
+  const feed = { run: 2 * clear + READ * wavelength, stub: STUB * wavelength };
   const grid = chooseGrid(
     columns,
-    outline.rectangles,
+    outlineOf(columns, feed).rectangles,
     settings.cellsPerPatch ?? CELLS.perPatch,
-    settings.cellsPerLine ?? CELLS.perLine,
+    settings.cellsPerLine ?? (columns.length === 1 ? CELLS.perLineOfOne : CELLS.perLine),
     settings.cellsPerPatch || columns.length > CELLS.fewColumns ? 1.12 : 1.6,
+    problem.stripThickness,
   );
+  const outline = outlineOf(drawnColumns(columns, grid), feed);
   const layers = { ...slab, ...(problem.cover && { cover: problem.cover }) };
   const mesh = drawMesh(outline.rectangles, grid, edgeTrims(layers, problem.stripThickness));
   const ports = outline.ports.map((line) => meshPort(mesh, line, clear));

@@ -56,7 +56,7 @@ export function gapPatch(
     column: 0,
     patch: 0,
   };
-  const mesh = drawMesh([metal], { dx, dy, x0: 0, y0: 0 }, edgeTrims(slab, 0));
+  const mesh = drawMesh([metal], { dx, dy, x0: 0, y0: 0, beyond: 0 }, edgeTrims(slab, 0));
   const blocks = cutBlocks(mesh, 0);
   const [drawn] = mesh.rectangles;
   const squares = [drawnSquares(cells.across, dy, slab.height, [drawn.trims.y0, drawn.trims.y1])];

@@ -9,6 +9,8 @@ export interface Grid {
   /** Position of the grid line with index 0, m. */
   readonly x0: number;
   readonly y0: number;
+  /** Cells across by which thick metal acts beyond its true sides: lines are drawn so that trims need not reach outwards. */
+  readonly beyond: number;
 }
 
 /**
@@ -16,15 +18,17 @@ export interface Grid {
  * metal acts as if it ended NATURAL_EDGE inside: the line is chosen with that in mind.
  *
  * @param outwards +1 for an edge that ends metal towards larger coordinates
+ * @param beyond   cells by which the metal acts beyond its true edge
  */
 export function drawEdge(
   edge: number,
   origin: number,
   step: number,
   outwards: 1 | -1,
+  beyond = 0,
 ): { index: number; inwards: number } {
   const place = (edge - origin) / step;
-  const index = Math.round(place + outwards * NATURAL_EDGE);
+  const index = Math.round(place + outwards * (NATURAL_EDGE + beyond));
   return { index, inwards: outwards * (index - place) };
 }
 
@@ -47,10 +51,26 @@ export function chooseGrid(
   cellsPerPatch: number,
   cellsPerLine: number,
   finest: number,
+  thickness: number,
 ): Grid {
   const along = alongGrid(rectangles, cellsPerPatch, finest);
-  const across = acrossGrid(columns, rectangles, cellsPerLine);
-  return { dx: along.step, x0: along.origin, dy: across.step, y0: across.origin };
+  const across = acrossGrid(columns, rectangles, cellsPerLine, thickness);
+  return {
+    dx: along.step,
+    x0: along.origin,
+    dy: across.step,
+    y0: across.origin,
+    beyond: beyondOf(thickness, across.step),
+  };
+}
+
+/** A side of thickness t adds about 0.5 to 0.7 t of width (Wheeler 1977; Hammerstad and Jensen 1980; from memory). */
+const beyondOf = (thickness: number, step: number): number => Math.min(0.4, (0.7 * thickness) / step);
+
+/** The columns with their centre lines where the grid has them: whole steps apart, so that equal columns are drawn alike. */
+export function drawnColumns(columns: readonly ColumnGeometry[], grid: Grid): ColumnGeometry[] {
+  const first = Math.min(...columns.map((c) => c.y));
+  return columns.map((c) => ({ ...c, y: first + Math.round((c.y - first) / grid.dy) * grid.dy }));
 }
 
 function alongGrid(
@@ -93,28 +113,40 @@ function acrossGrid(
   columns: readonly ColumnGeometry[],
   rectangles: readonly MetalRectangle[],
   cellsPerLine: number,
+  thickness: number,
 ): { step: number; origin: number } {
   const widths = [...new Set(rectangles.map((r) => r.width))];
   const lines = rectangles.filter((r) => r.kind !== 'patch').map((r) => r.width);
   const nominal = Math.min(...lines) / (cellsPerLine - 2 * NATURAL_EDGE);
   const centres = [...new Set(columns.map((c) => c.y))].sort((a, b) => a - b);
+  const pitches = centres.slice(1).map((y, c) => y - centres[c]);
   let best = { step: nominal, origin: centres[0], cost: Number.POSITIVE_INFINITY };
-  for (let i = 0; i < STEPS; i++) {
-    const step = nominal * (0.8 + (0.35 * i) / (STEPS - 1));
+  for (const step of stepsAcross(nominal, pitches)) {
+    const beyond = beyondOf(thickness, step);
     // The centre of every column on a grid line, or between two.
     for (const shift of [0, 0.5]) {
       let cost = 0;
       for (const width of widths) {
-        const off = drawEdge(width / 2, shift * step, step, 1).inwards - NATURAL_EDGE;
+        const off = drawEdge(width / 2, shift * step, step, 1, beyond).inwards - NATURAL_EDGE - beyond;
         // A trim of a patch's side moves its resonance a little; a line's holds what it should.
         cost += lines.includes(width) ? 0.1 * ((2 * off * step) / width) ** 2 : off * off;
       }
-      for (let c = 1; c < centres.length; c++) {
-        const pitch = (centres[c] - centres[c - 1]) / step;
-        cost += (40 * (pitch - Math.round(pitch)) ** 2 * (step / (centres[c] - centres[c - 1])) ** 2) / centres.length;
+      for (const pitch of pitches) {
+        const cells = pitch / step;
+        cost += (40 * (cells - Math.round(cells)) ** 2 * (step / pitch) ** 2) / centres.length;
       }
       if (cost < best.cost - 1e-12) best = { step, origin: centres[0] + shift * step, cost };
     }
   }
   return best;
+}
+
+/** Cell widths to choose from, those of which the least pitch is a whole number. */
+function stepsAcross(nominal: number, pitches: readonly number[]): number[] {
+  const [low, high] = [0.8 * nominal, 1.15 * nominal];
+  if (pitches.length === 0) return Array.from({ length: STEPS }, (_, i) => low + ((high - low) * i) / (STEPS - 1));
+  const pitch = Math.min(...pitches);
+  const steps: number[] = [];
+  for (let n = Math.ceil(pitch / high - 1e-9); n <= pitch / low; n++) steps.push(pitch / n);
+  return steps.length > 0 ? steps : [pitch / Math.max(1, Math.round(pitch / nominal))];
 }

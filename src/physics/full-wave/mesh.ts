@@ -55,8 +55,9 @@ function drawAxis(
   spans: readonly { low: number; high: number; crossLow: number; crossHigh: number }[],
   origin: number,
   step: number,
+  beyond = 0,
 ): { low: number; high: number }[] {
-  const index = (at: number, outwards: 1 | -1): number => drawEdge(at, origin, step, outwards).index;
+  const index = (at: number, outwards: 1 | -1): number => drawEdge(at, origin, step, outwards, beyond).index;
   const across = (s: (typeof spans)[number]): number => s.crossHigh - s.crossLow;
   return spans.map((span) => {
     const ruled = (at: number, outwards: 1 | -1): number => {
@@ -91,6 +92,7 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
     metal.map((r) => ({ low: r.y0, high: r.y1, crossLow: r.x0, crossHigh: r.x1 })),
     grid.y0,
     grid.dy,
+    grid.beyond,
   );
   const left = Math.min(...xs.map((x) => x.low));
   const below = Math.min(...ys.map((y) => y.low));

@@ -54,7 +54,13 @@ export function meshPort(mesh: Mesh, line: PortLine, clear: number): MeshPort {
   const gap = stations.reduce((best, st) => (Math.abs(st.s - gapAt) < Math.abs(best.s - gapAt) ? st : best));
   const fit = stations.filter((st) => st.s > gap.s + clear && st.s < -clear);
   if (fit.length < 6) throw new RangeError('meshPort: the feed line is too short to tell its waves apart');
-  return { line, rectangle: mesh.rectangles.indexOf(feed), gap, fit, cells: { i0: feed.i0, i1: feed.i1, j0: feed.j0, j1: feed.j1 } };
+  return {
+    line,
+    rectangle: mesh.rectangles.indexOf(feed),
+    gap,
+    fit,
+    cells: { i0: feed.i0, i1: feed.i1, j0: feed.j0, j1: feed.j1 },
+  };
 }
 
 /** Amplitudes at the reference plane, A: I(s) = forward e^{−γs} − backward e^{γs}, current into the board. */

@@ -9,7 +9,7 @@ import { NETWORK_CONSTANTS, type NetworkConstants } from '../../../src/physics/c
 /** Two unlike patches of the range, as a network with other constants has them. */
 function targetsBy(constants: NetworkConstants): CalibrationTarget[] {
   const cases = calibrationCases(CALIBRATION_RANGE);
-  return [cases[11], cases[19]].map((of) => {
+  return [cases[7], cases[13]].map((of) => {
     const sampling = samplingOf(of, networkSolver(NETWORK_CONSTANTS));
     return { of, sampling, figures: figuresOf(of, sampling, networkSolver(constants)) };
   });
