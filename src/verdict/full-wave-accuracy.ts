@@ -5,7 +5,9 @@ import type { EngineAccuracy } from './engine-accuracy.js';
 /**
  * How far the full wave may be from the truth, by quantity: what stays uncertain at a frequency where it ran. Same layouts and
  * laminates as for the network (`engine-accuracy.ts`), against solutions by another program written for this project from the
- * same published method, with its own mesh.
+ * same published method, with its own mesh. The figures hold what was found (reflection 0.01, gain 0.05 dB, beam direction
+ * 0.2 deg, sidelobes 0.1 dB) and what those solutions are themselves known to (0.02, 0.1 dB, 0.5 deg grid, 0.5 dB); on the
+ * thickest laminate compared, 0.2 mm, they are known to 0.03.
  */
 const COMPARED = 'own comparison with independent full-wave solutions of series-fed columns';
 
@@ -86,10 +88,11 @@ export const FULL_WAVE_ACCURACY: readonly EngineAccuracy[] = [
   },
   {
     quantity: 'isolation',
-    statement: '±0.5 dB',
+    statement: '±1 dB',
     ground: 'compared',
-    source: 'own comparison with independent full-wave solutions of two neighbouring columns',
-    spread: () => both(0.5),
+    source:
+      'own comparison with independent full-wave solutions of two neighbouring columns (0.2 dB), and what the length of the radiating feed lines moves',
+    spread: () => both(1),
   },
 ];
 

@@ -10,8 +10,6 @@ const table = accuracyTable();
 const MISSED: Readonly<Record<string, RegExp>> = {
   'perturbation-surfaces': /Missed.*0\.014.*0\.026/s,
   'column-coupling': /Missed: 2\.6 dB/,
-  'full-wave-coupling': /Missed: 0\.7 dB/,
-  'full-wave-patch-resistance': /Missed.*4\.5 %/,
 };
 
 describe('the accuracy table', () => {

@@ -35,10 +35,11 @@ const OVERLAP = 4;
 /** Slab heights from gap and patch within which a feed line's current is not its wave's alone. */
 const CLEAR = 2.5;
 /**
- * Guided wavelengths of feed line that are read, and of stub behind the gap. Gap and patch also excite the line through
- * space, 1 to 4 % of the current: over two wavelengths that averages out, over half of one it moves the reflection by 0.04.
+ * Guided wavelengths of feed line that are read, and of stub behind the gap. Gap and stub also excite the board through space:
+ * between 0.6 and 2.1 wavelengths that moves the reflection of columns by 0.01 and the coupling of neighbours 30 dB down by 1 dB.
+ * Of the lengths tried this one agrees best with independent solutions, which are driven in the same way.
  */
-const READ = 2.1;
+const READ = 1.3;
 const STUB = 0.3;
 
 export function setUpBoard(

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { CALIBRATION_RANGE } from '../../../src/physics/calibration/index.js';
-import { CALIBRATION } from '../../../src/physics/column/calibration-data.js';
+import { CALIBRATION, MIDDLE_CALIBRATION } from '../../../src/physics/column/calibration-data.js';
 import type { ColumnProblem } from '../../../src/physics/column/engine.js';
 import { edgeNetwork } from '../../../src/physics/column/index.js';
 import { SPEED_OF_LIGHT } from '../../../src/physics/constants.js';
@@ -59,5 +59,18 @@ describe('range of the calibration', () => {
 
   it('in the data file is that of the calibration as it would be made now', () => {
     expect(CALIBRATION.range).toEqual(CALIBRATION_RANGE);
+  });
+
+  it.each([
+    ['the whole range', CALIBRATION],
+    ['its middle', MIDDLE_CALIBRATION],
+  ])('holds the constants in use to what the network promises over %s', (_, { residuals, floor }) => {
+    expect(residuals.edgeResonance).toBeLessThan(0.003);
+    expect(residuals.edgeResistance).toBeLessThan(0.12);
+    expect(residuals.edgeQuality).toBeLessThan(0.12);
+    expect(residuals.reflection).toBeLessThan(0.06);
+    // A comparison says something only where the full wave is surer of itself than the network is held to.
+    expect(floor.edgeResonance).toBeLessThan(0.003);
+    expect(floor.reflection).toBeLessThan(0.06);
   });
 });
