@@ -10,7 +10,7 @@ export const columnsMethods: readonly Method[] = [
     source:
       'Transmission-line model of patches with edge admittances (A. G. Derneryd, 1976 and 1978, and later work), with corrections found against independent full-wave solutions',
     range:
-      'k0h 0.16 to 0.33, permittivity 2.9 to 3.6, patch width 0.5 to 1.45 mm, line w/h 0.6 to 1.7; how close it comes there stands in the accuracy table. Flagged outside. Infinite slab and ground, no cover, no vias; lines and steps do not radiate; loss of the dielectric counts in the lines only',
+      'k0h 0.05 to 0.43, permittivity 2.2 to 4, patch width 0.3 to 1.6 mm, line w/h 0.4 to 2; how close it comes there stands in the accuracy table. Flagged outside. Infinite slab and ground, no cover, no vias; lines and steps do not radiate; loss of the dielectric counts in the lines only',
   },
   {
     id: 'slab-kernel',

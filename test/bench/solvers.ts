@@ -1,5 +1,12 @@
 import { performance } from 'node:perf_hooks';
 import { accuracyTable } from '../../src/evidence/index.js';
+import {
+  type ColumnEngine,
+  type ColumnGeometry,
+  type ColumnProblem,
+  edgeNetwork,
+} from '../../src/physics/column/index.js';
+import { fullWave } from '../../src/physics/full-wave/index.js';
 import { crossSection, solvedMicrostrip, spectralLine, stillStrip, stripAt } from '../../src/physics/line/index.js';
 import { halfSpaceImpedance } from '../../src/physics/material/index.js';
 import { gradient, roughnessBand, roughnessEstimates } from '../../src/physics/roughness/index.js';
@@ -28,6 +35,49 @@ const SOLVERS: readonly (readonly [name: string, run: () => unknown, target?: nu
   ['roughness band with what would narrow it', () => roughnessBand({ rq: 0.4e-6 }, conditions)],
 ];
 
+const column = (y: number): ColumnGeometry => ({
+  x: 0,
+  y,
+  feedLineWidth: 0.15e-3,
+  patches: Array.from({ length: 8 }, () => ({ width: 0.965e-3, length: 1.061e-3 })),
+  links: Array.from({ length: 7 }, () => ({ width: 0.15e-3, length: 1.258e-3 })),
+});
+const board = (columns: number): ColumnProblem => ({
+  slab: { permittivity: 3, lossTangent: 0.0015, height: 127e-6 },
+  stripThickness: 18e-6,
+  columns: Array.from({ length: columns }, (_, c) => column(c * 2.2e-3)),
+  referenceImpedance: 'line',
+});
+
+/** Column engines: set-up, the first frequency, and a further one, each once. */
+const ENGINES: readonly (readonly [name: string, prepare: () => ColumnEngine, target?: number])[] = [
+  ['network, a column of eight patches', () => edgeNetwork(board(1), 80e9), 2],
+  ['network, ten columns of eight patches', () => edgeNetwork(board(10), 80e9), 50],
+  ['full wave, a column of eight patches', () => fullWave(board(1), { low: 76e9, high: 80e9 }), 300],
+  ['full wave, three columns of eight patches', () => fullWave(board(3), { low: 76e9, high: 80e9 })],
+  ['full wave, ten columns of eight patches', () => fullWave(board(10), { low: 76e9, high: 80e9 }), 40000],
+];
+
+function measureEngines() {
+  return ENGINES.map(([name, prepare, targetMilliseconds]) => {
+    const laps: number[] = [];
+    let since = performance.now();
+    const lap = (): void => {
+      const now = performance.now();
+      laps.push(Math.round(10 * (now - since)) / 10);
+      since = now;
+    };
+    const engine = prepare();
+    lap();
+    for (const frequency of [77e9, 78e9]) {
+      engine.solve({ frequency, faces });
+      lap();
+    }
+    const [setUp, first, further] = laps;
+    return { name, setUp, first, further, ...(targetMilliseconds === undefined ? {} : { targetMilliseconds }) };
+  });
+}
+
 /** Milliseconds a call: median of batches after warming up; and the accuracy table, once, from nothing. */
 export function measureSolvers() {
   const start = performance.now();
@@ -39,6 +89,7 @@ export function measureSolvers() {
       milliseconds: Number(median(run).toFixed(3)),
       ...(targetMilliseconds === undefined ? {} : { targetMilliseconds }),
     })),
+    columnEngines: measureEngines(),
     accuracyTableMilliseconds: Math.round(table),
   };
 }
