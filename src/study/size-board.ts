@@ -1,6 +1,6 @@
 /**
  * Dimensions of a board that asks for a layout instead of drawing one: every column alike, worked out on the network, then
- * corrected once by what the full wave finds of that very column.
+ * corrected by what the full wave finds of that very column where it misses a goal.
  *
  * Conditions are nominal: nominal view of the texture, nominal temperature, nominal figures.
  */
@@ -9,11 +9,16 @@ import type { Analysis, Board, ColumnLayout, Link, Sized, SizedFor } from '../ma
 import { abs, ONE } from '../numerics/complex.js';
 import type { ColumnGeometry } from '../physics/column/index.js';
 import { fullWave } from '../physics/full-wave/index.js';
+import { cutShape } from '../physics/pattern/index.js';
 import {
   correctSizing,
   type FoundColumn,
+  goalNotes,
+  limitNotes,
   type SizedColumn,
+  type SizedFigures,
   type SizingRequest,
+  shortfall,
   sizeColumn,
 } from '../physics/sizing/index.js';
 import type { SolverFor } from './confirm.js';
@@ -43,9 +48,16 @@ export function sizeBoard(board: Board, analysis: Analysis, solver: SolverFor = 
 const byNetwork = ({ reflection, notes }: SizedColumn) =>
   ({ by: 'network', networkDb: hundredths(reflection), notes }) as const;
 
-/** One correction; it stands where the full wave finds the corrected column better matched than the first. */
+type FoundByFullWave = FoundColumn & SizedFigures;
+
+/** Part of every goal within which a column is left as it is. */
+const AMPLE = 0.6;
+/** Corrections made at most; the second only where the first leaves a goal missed. */
+const CORRECTIONS = 2;
+
+/** Corrected where the full wave sees a goal missed or nearly so; of what it has seen the best stands. */
 function corrected(board: Board, request: SizingRequest, sized: SizedColumn, solver: SolverFor): Board {
-  let found: FoundColumn;
+  let found: FoundByFullWave;
   try {
     found = solvedAlone(request, sized.geometry, solver);
   } catch (cause) {
@@ -54,31 +66,43 @@ function corrected(board: Board, request: SizingRequest, sized: SizedColumn, sol
     const note = `the full wave does not carry this column, which stays as the network has it: ${cause.message}`;
     return withLayout(board, sized, { ...rest, notes: [...notes, note] });
   }
-  const again = correctSizing(request, sized, found);
-  const after = solvedAlone(request, again.geometry, solver);
-  const before = hundredths(found.reflection);
-  if (abs(after.reflection) > abs(found.reflection)) {
-    const { notes, ...rest } = byNetwork(sized);
-    const note = `a correction by the full wave would have left a reflection of ${hundredths(after.reflection)} dB in place of ${before} dB`;
-    return withLayout(board, sized, { ...rest, fullWaveDb: before, notes: [...notes, note] });
+  let now = { column: sized, found };
+  let best = { ...now, round: 0 };
+  for (let round = 0; round < CORRECTIONS; round++) {
+    if (shortfall(request, best.found) <= (round === 0 ? AMPLE : 1)) break;
+    const column = correctSizing(request, sized, now.found, now.column.geometry);
+    try {
+      now = { column, found: solvedAlone(request, column.geometry, solver) };
+    } catch (cause) {
+      if (!(cause instanceof RangeError)) throw cause;
+      break;
+    }
+    if (shortfall(request, now.found) < shortfall(request, best.found)) best = { ...now, round };
   }
-  return withLayout(board, again, {
-    by: 'full wave',
-    networkDb: hundredths(again.reflection),
-    fullWaveDb: hundredths(after.reflection),
-    notes: again.notes,
+  const { column } = best;
+  return withLayout(board, column, {
+    by: column === sized ? 'network' : 'full wave',
+    networkDb: hundredths(column.reflection),
+    fullWaveDb: hundredths(best.found.reflection),
+    notes: [
+      ...(best.round > 0 ? ['A second correction by the full wave was needed.'] : []),
+      ...limitNotes(request, column.geometry),
+      ...goalNotes(request, best.found, 'full wave'),
+    ],
   });
 }
 
 /** The full wave needs some width of band to prepare for. */
 const AROUND = 0.01;
 
-function solvedAlone(request: SizingRequest, geometry: ColumnGeometry, solver: SolverFor): FoundColumn {
+function solvedAlone(request: SizingRequest, geometry: ColumnGeometry, solver: SolverFor): FoundByFullWave {
   const { frequency, slab, stripThickness, faces } = request;
   const problem = { slab, stripThickness, columns: [geometry], referenceImpedance: 'line' } as const;
   const engine = solver(problem, { low: frequency * (1 - AROUND), high: frequency * (1 + AROUND) });
   const solution = engine.solve({ frequency, faces, slab, stripThickness });
-  return { reflection: solution.scattering[0][0], patchCurrents: solution.excite([ONE]).patchCurrents[0] };
+  const { patchCurrents, field } = solution.excite([ONE]);
+  const { beamDirection, sidelobeDb } = cutShape(field.cut('elevation'));
+  return { reflection: solution.scattering[0][0], patchCurrents: patchCurrents[0], beamDirection, sidelobeDb };
 }
 
 function requestFor(board: Board, sizedFor: SizedFor, { roughnessModel }: Analysis): SizingRequest {

@@ -22,10 +22,10 @@ export function cutBlocks(mesh: Mesh, overlap: number): Block[] {
   for (let c = 0; c < columns; c++) {
     const rectangles = mesh.rectangles.filter((r) => r.metal.column === c);
     const straight = rectangles.filter((r) => !isSide(r, rectangles));
+    const side = rectangles.filter((r) => isSide(r, rectangles));
     const cuts = cutsAlong(straight);
     for (let k = 0; k + 1 < cuts.length; k++)
-      blocks.push(blockOf(mesh, columnOf, c, straight, cuts[k], cuts[k + 1], overlap));
-    const side = rectangles.filter((r) => isSide(r, rectangles));
+      blocks.push(blockOf(mesh, columnOf, c, straight, side, cuts[k], cuts[k + 1], overlap));
     if (side.length > 0) blocks.push(sideBlock(mesh, columnOf, c, side));
   }
   return blocks.filter((b) => b.unknowns.length > 0);
@@ -71,23 +71,30 @@ function blockOf(
   columnOf: Int32Array,
   column: number,
   rectangles: readonly DrawnRectangle[],
+  side: readonly DrawnRectangle[],
   from: number,
   to: number,
   overlap: number,
 ): Block {
   const unknowns: number[] = [];
   const own: number[] = [];
+  const centre = rectangles[0].j0 + rectangles[0].j1;
+  // The beginning of a feed from the side, where it joins this block.
+  const joined = side
+    .filter((r) => r.i1 > from - overlap && r.i0 < to + overlap)
+    .map((r) => (r.j0 + r.j1 > centre ? { ...r, j1: r.j0 + overlap } : { ...r, j0: r.j1 - overlap }));
   for (let u = 0; u < mesh.unknowns; u++) {
     const place = mesh.cellOf[u];
     if (columnOf[place] !== column) continue;
     const i = place % mesh.nx;
     const j = (place - i) / mesh.nx;
-    if (i < from - overlap || i >= to + overlap || !within(rectangles, i, j)) continue;
+    if (i < from - overlap || i >= to + overlap) continue;
+    const straight = within(rectangles, i, j);
+    if (!straight && !within(joined, i, j)) continue;
     unknowns.push(u);
-    own.push(i >= from && i < to ? 1 : 0);
+    own.push(straight && i >= from && i < to ? 1 : 0);
   }
-  const centre = rectangles[0].j0 + rectangles[0].j1;
-  const key = rectangles
+  const key = [...rectangles, ...joined]
     .filter((r) => r.i1 >= from - overlap && r.i0 <= to + overlap)
     .map((r) =>
       [
@@ -100,7 +107,7 @@ function blockOf(
       ].join(' '),
     )
     .join(';');
-  const mirror = mirrorOf(mesh, unknowns, centre);
+  const mirror = joined.length > 0 ? undefined : mirrorOf(mesh, unknowns, centre);
   return {
     unknowns: Int32Array.from(unknowns),
     own: Uint8Array.from(own),

@@ -131,7 +131,9 @@ function feedLoss({ setup, current }: PoweredBoard, port: MeshPort, line: Micros
   const { ground, dielectric } = line0([{ port, line }]);
   let squares = 0;
   const [from, to] = along ? [i0, i1] : [j0, j1];
-  for (let e = from; e < to; e++) {
+  // From the edge before its first cell to that after its last, which belong to it by half.
+  for (let e = Math.max(0, from - 1); e < to; e++) {
+    const share = e === from - 1 || e === to - 1 ? 0.5 : 1;
     let [re, im] = [0, 0];
     for (let n = along ? j0 : i0; n < (along ? j1 : i1); n++) {
       const u = along ? mesh.xEdge[n * mesh.nx + e] : mesh.yEdge[e * mesh.nx + n];
@@ -139,7 +141,7 @@ function feedLoss({ setup, current }: PoweredBoard, port: MeshPort, line: Micros
       re += current.re[u];
       im += current.im[u];
     }
-    squares += re * re + im * im;
+    squares += share * (re * re + im * im);
   }
   return ((ground + dielectric) * squares * (along ? mesh.grid.dx : mesh.grid.dy)) / 2;
 }

@@ -53,7 +53,7 @@ export function chooseGrid(
   finest: number,
   thickness: number,
 ): Grid {
-  const along = alongGrid(rectangles, cellsPerPatch, finest);
+  const along = alongGrid(columns, cellsPerPatch, finest);
   const across = acrossGrid(columns, rectangles, cellsPerLine, thickness);
   return {
     dx: along.step,
@@ -74,12 +74,12 @@ export function drawnColumns(columns: readonly ColumnGeometry[], grid: Grid): Co
 }
 
 function alongGrid(
-  rectangles: readonly MetalRectangle[],
+  columns: readonly ColumnGeometry[],
   cellsPerPatch: number,
   finest: number,
 ): { step: number; origin: number } {
-  const patches = rectangles.filter((r) => r.kind === 'patch');
-  const length = patches.reduce((sum, r) => sum + r.x1 - r.x0, 0) / patches.length;
+  const patches = columns.flatMap((c) => c.patches);
+  const length = patches.reduce((sum, p) => sum + p.length, 0) / patches.length;
   const edges = new Map<string, { at: number; outwards: 1 | -1; count: number }>();
   const note = (at: number, outwards: 1 | -1): void => {
     const key = `${outwards} ${at.toExponential(9)}`;
@@ -87,17 +87,26 @@ function alongGrid(
     if (known) known.count++;
     else edges.set(key, { at, outwards, count: 1 });
   };
-  for (const r of patches) {
-    note(r.x0, -1);
-    note(r.x1, 1);
+  for (const { x, direction = 1, patches, links, inset } of columns) {
+    const back = direction === 1 ? -1 : 1;
+    if (inset) note(x + direction * inset.depth, back);
+    let s = 0;
+    patches.forEach((patch, p) => {
+      note(x + direction * s, back);
+      s += patch.length;
+      note(x + direction * s, direction);
+      s += links[p]?.length ?? 0;
+    });
   }
   const list = [...edges.values()];
-  let best = { step: length / cellsPerPatch, origin: list[0].at, cost: Number.POSITIVE_INFINITY };
+  // A column that runs the other way is drawn as its mirror image.
+  const forth = columns[0].direction ?? 1;
+  let best = { step: length / cellsPerPatch, origin: columns[0].x, cost: Number.POSITIVE_INFINITY };
   for (let i = 0; i < STEPS_ALONG; i++) {
     const finer = 0.85 + (i / (STEPS_ALONG - 1)) * (finest - 0.85);
     const step = length / (cellsPerPatch * finer);
     for (let k = 0; k < OFFSETS; k++) {
-      const origin = list[0].at + (k / OFFSETS) * step;
+      const origin = columns[0].x + ((forth * k) / OFFSETS) * step;
       let cost = FINENESS * patches.length * (finer - 1) ** 2;
       for (const { at, outwards, count } of list) {
         const off = drawEdge(at, origin, step, outwards).inwards - NATURAL_EDGE;
@@ -115,7 +124,15 @@ function acrossGrid(
   cellsPerLine: number,
   thickness: number,
 ): { step: number; origin: number } {
-  const widths = [...new Set(rectangles.map((r) => r.width))];
+  const fromCentre = (r: MetalRectangle): [number, number] => [r.y0 - columns[r.column].y, r.y1 - columns[r.column].y];
+  const centred = rectangles.filter((r) => Math.abs(fromCentre(r)[0] + fromCentre(r)[1]) < 1e-9);
+  const widths = [...new Set(centred.map((r) => r.width))];
+  /** Sides of slots that an inset feed has beside its line, from the column's centre line. */
+  const slots = new Set(
+    rectangles
+      .filter((r) => r.kind === 'patch' && !centred.includes(r))
+      .map((r) => Math.min(...fromCentre(r).map(Math.abs))),
+  );
   const lines = rectangles.filter((r) => r.kind !== 'patch').map((r) => r.width);
   const nominal = Math.min(...lines) / (cellsPerLine - 2 * NATURAL_EDGE);
   const centres = [...new Set(columns.map((c) => c.y))].sort((a, b) => a - b);
@@ -130,6 +147,10 @@ function acrossGrid(
         const off = drawEdge(width / 2, shift * step, step, 1, beyond).inwards - NATURAL_EDGE - beyond;
         // A trim of a patch's side moves its resonance a little; a line's holds what it should.
         cost += lines.includes(width) ? 0.1 * ((2 * off * step) / width) ** 2 : off * off;
+      }
+      for (const slot of slots) {
+        const off = drawEdge(slot, shift * step, step, -1, beyond).inwards - NATURAL_EDGE - beyond;
+        cost += off * off;
       }
       for (const pitch of pitches) {
         const cells = pitch / step;

@@ -81,6 +81,10 @@ function drawAxis(
   });
 }
 
+/** Whether a piece of a patch is narrower than another of the same. */
+const isWing = (piece: MetalRectangle, other: MetalRectangle): boolean =>
+  other.column === piece.column && other.patch === piece.patch && other.width > piece.width + SAME;
+
 /** @throws RangeError where a rectangle is thinner than a cell */
 export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: EdgeTrims): Mesh {
   const xs = drawAxis(
@@ -110,13 +114,18 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
       y1: gap(ys[k].high, r.y1, grid.y0, grid.dy),
     };
     const [wide, tall] = [xs[k].high - xs[k].low, ys[k].high - ys[k].low];
-    // Across a column both edges share what is off, so that it stays symmetric: its place is a whole number of cells.
     const side = r.kind === 'feed' && r.y1 - r.y0 > r.width * 1.001;
-    const whole = side ? NO_TRIM : edges.of(tall, grid.dy, r.y1 - r.y0, (inwards.y0 + inwards.y1) / 2);
-    const across =
-      r.kind === 'patch'
+    // Across a column both edges share what is off, so that it stays symmetric: its place is a whole number of cells. Wings
+    // beside the slots of an inset feed have one side that is the patch's and one that is the slot's.
+    const wing = r.kind === 'patch' && metal.some((p) => p.kind === 'patch' && isWing(r, p));
+    const across = (off: number): EdgeTrim => {
+      if (side) return NO_TRIM;
+      const whole = edges.of(tall, grid.dy, r.y1 - r.y0, off);
+      return r.kind === 'patch'
         ? { charge: whole.charge * (1 - CORNER_SHARE), current: whole.current * (1 + CORNER_SHARE) }
         : whole;
+    };
+    const shared = (inwards.y0 + inwards.y1) / 2;
     return {
       metal: r,
       i0: xs[k].low - left,
@@ -128,8 +137,8 @@ export function drawMesh(metal: readonly MetalRectangle[], grid: Grid, edges: Ed
         // Where a stub ends exactly does not matter.
         x0: r.kind === 'feed' && !side ? NO_TRIM : edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x0),
         x1: r.kind === 'feed' && !side ? NO_TRIM : edges.of(wide, grid.dx, r.x1 - r.x0, inwards.x1),
-        y0: across,
-        y1: across,
+        y0: across(wing ? inwards.y0 : shared),
+        y1: across(wing ? inwards.y1 : shared),
       },
     };
   });

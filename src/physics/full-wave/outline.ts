@@ -8,7 +8,7 @@ export interface MetalRectangle {
   readonly y1: number;
   /** `feed`: beyond the reference plane, not part of the board whose power is balanced. */
   readonly kind: 'patch' | 'line' | 'feed';
-  /** Width across the current, m: that of the patch or line. */
+  /** Width across the current, m: that of the patch, of a wing beside the slots of an inset feed, or of the line. */
   readonly width: number;
   readonly column: number;
   /** Index of the patch, or −1. */
@@ -44,7 +44,7 @@ export interface FeedLengths {
   readonly stub: number;
 }
 
-/** @throws RangeError on a column without patches, or with another number of links than one fewer */
+/** @throws RangeError on a column that has no patches, another number of links than one fewer, or a feed with no place */
 export function outlineOf(columns: readonly ColumnGeometry[], feed: FeedLengths): Outline {
   const rectangles: MetalRectangle[] = [];
   const ports: PortLine[] = [];
@@ -62,6 +62,10 @@ function columnOutline(geometry: ColumnGeometry, column: number, feed: FeedLengt
   const { patches, links, matching = [], inset, termination, sideFeed } = geometry;
   if (patches.length === 0 || links.length !== patches.length - 1)
     throw new RangeError('fullWave: a column needs at least one patch, and one link fewer than patches');
+  if (sideFeed && !links[sideFeed.link])
+    throw new RangeError(`fullWave: side feed at link ${sideFeed.link} of a column with ${links.length} links`);
+  if (sideFeed && (inset || matching.length > 0))
+    throw new RangeError('fullWave: a column fed from the side has neither inset nor matching sections');
   const direction = geometry.direction ?? 1;
   const rectangles: MetalRectangle[] = [];
   const ports: PortLine[] = [];
@@ -89,14 +93,16 @@ function columnOutline(geometry: ColumnGeometry, column: number, feed: FeedLengt
   patches.forEach((patch, p) => {
     const half = patch.width / 2;
     const rest = { kind: 'patch', width: patch.width, patch: p } as const;
-    if (p === 0 && inset && !sideFeed) {
-      const inner = geometry.feedLineWidth / 2;
-      if (!(inset.depth > 0 && inset.depth < patch.length && inner + inset.gap < half))
+    if (p === 0 && inset) {
+      const entry = matching[matching.length - 1]?.width ?? geometry.feedLineWidth;
+      const inner = entry / 2 + inset.gap;
+      if (!(inset.depth > 0 && inset.depth < patch.length && inset.gap > 0 && inner < half))
         throw new RangeError('fullWave: the slots of an inset feed must lie within the first patch');
+      const wing = { ...rest, width: half - inner };
       put(inset.depth, patch.length, -half, half, rest);
-      put(0, inset.depth, -half, -inner - inset.gap, rest);
-      put(0, inset.depth, inner + inset.gap, half, rest);
-      line(0, inset.depth, geometry.feedLineWidth, 'line');
+      put(0, inset.depth, -half, -inner, wing);
+      put(0, inset.depth, inner, half, wing);
+      line(0, inset.depth, entry, 'line');
     } else put(s, s + patch.length, -half, half, rest);
     s += patch.length;
     const link = links[p];

@@ -1,5 +1,5 @@
 import type { Complex } from '../../numerics/complex.js';
-import { abs2 } from '../../numerics/complex.js';
+import { abs2, complex } from '../../numerics/complex.js';
 import type { ColumnGeometry } from '../column/index.js';
 import { lineOfWidth, widthOfImpedance } from '../feed/index.js';
 import { type ColumnUnknowns, columnUnknowns, unknownsOf } from './column-unknowns.js';
@@ -7,7 +7,7 @@ import type { SizingRequest } from './request.js';
 
 /**
  * Unknowns of a column with one more section before its first patch, about a quarter wave long: for where the widths that
- * patches may have cannot make the input resistance the line's. Its width starts at √(Z0 R), R from the reflection without it.
+ * patches may have cannot make the input resistance the line's, and where links are narrower than it. Its width starts at √(Z0 R), R from the reflection without it.
  *
  * @param geometry   sized as far as widths go; its own section, if it has one, is the start
  * @param reflection of it, referred to the feed line
@@ -34,6 +34,14 @@ export function withMatching(request: SizingRequest, geometry: ColumnGeometry, r
       matching: [{ width: Math.exp(x[n]), length: x[n + 1] * quarter }],
     }),
   };
+}
+
+/** Reflection in the feed line of a column that is matched to a line of the links' width. */
+export function reflectionOfLinks(request: SizingRequest): Complex {
+  const { frequency, feedLineWidth, linkWidth = feedLineWidth } = request;
+  const line = lineOfWidth(request, frequency, feedLineWidth).impedance;
+  const links = lineOfWidth(request, frequency, linkWidth).impedance;
+  return complex((links - line) / (links + line), 0);
 }
 
 function startingSection(request: SizingRequest, s: Complex): { width: number; length: number } {

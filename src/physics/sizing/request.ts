@@ -13,7 +13,7 @@ export interface SizingRequest {
   readonly faces: FaceImpedances;
   /** Given with the board: the match is made for this line. */
   readonly feedLineWidth: number;
-  /** Of the lines between patches; default: the feed line's width. */
+  /** Of the lines between patches; default: the feed line's width, or a narrower one where that is wide for the slab. */
   readonly linkWidth?: number;
   /** What the board maker can hold: narrowest metal and narrowest gap, and the grid of all dimensions, m. */
   readonly leastWidth: number;
@@ -21,6 +21,19 @@ export interface SizingRequest {
   readonly grid: number;
   /** Widest patch, m, such as pitch less gap; half a free-space wave at most, and by default. */
   readonly greatestWidth?: number;
+}
+
+/** Links wider than this over the slab's height leave an end's narrow patch little to radiate with. */
+const WIDE_LINK = 1.8;
+/** Width over the slab's height of links that do not have the feed line's. */
+const NARROW_LINK = 1.2;
+
+/** With a width for the links; where it is not the feed line's, a section before the first patch makes the match. */
+export function withLinks(request: SizingRequest): SizingRequest & { readonly linkWidth: number } {
+  const { feedLineWidth, leastWidth, slab } = request;
+  const narrow = Math.min(feedLineWidth, Math.max(leastWidth, NARROW_LINK * slab.height));
+  const { linkWidth = feedLineWidth > WIDE_LINK * slab.height ? narrow : feedLineWidth } = request;
+  return { ...request, linkWidth };
 }
 
 /** @throws RangeError naming the quantity and the value received */

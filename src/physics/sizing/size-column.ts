@@ -13,8 +13,8 @@ import { taperAmplitudes } from '../taper/index.js';
 import { excitationError, responseOf, solveColumn } from './column-response.js';
 import { type ColumnUnknowns, columnUnknowns, unknownsOf } from './column-unknowns.js';
 import { onGrid } from './grid.js';
-import { withMatching } from './matching-section.js';
-import { requireRequest, type SizedColumn, type SizingRequest } from './request.js';
+import { reflectionOfLinks, withMatching } from './matching-section.js';
+import { requireRequest, type SizedColumn, type SizingRequest, withLinks } from './request.js';
 import { goalNotes, limitNotes } from './sizing-notes.js';
 import { firstGuesses, guessFrom, halved } from './starting-layout.js';
 
@@ -45,17 +45,21 @@ interface Aim {
  * @returns dimensions on the grid with what the network says of them; `notes` name limits that bind and goals not met
  * @throws RangeError on a request that is not physical, or a slab that guides more than TM0
  */
-export function sizeColumn(request: SizingRequest): SizedColumn {
-  requireRequest(request);
+export function sizeColumn(given: SizingRequest): SizedColumn {
+  requireRequest(given);
+  const request = withLinks(given);
   const amplitudes = taperAmplitudes(request.taper, request.patches);
-  let { geometry, solves } = search(request, amplitudes, { tolerance: TOLERANCE, budget: BUDGET });
-  const reflection = responseOf(solveColumn(request, geometry)).reflection;
-  if (abs(reflection) > POOR_MATCH) {
-    const unknowns = withMatching(request, geometry, reflection);
-    const found = steer(request, amplitudes, unknowns, { tolerance: TOLERANCE, budget: BUDGET });
+  const effort = { tolerance: TOLERANCE, budget: BUDGET };
+  const ownLinks = request.linkWidth < request.feedLineWidth;
+  const inner = ownLinks ? { ...request, feedLineWidth: request.linkWidth } : request;
+  let { geometry, solves } = search(inner, amplitudes, effort);
+  const reflection = responseOf(solveColumn(inner, geometry)).reflection;
+  if (ownLinks || abs(reflection) > POOR_MATCH) {
+    const unknowns = withMatching(request, geometry, ownLinks ? reflectionOfLinks(request) : reflection);
+    const found = steer(request, amplitudes, unknowns, effort);
     const matched = unknowns.geometry(found.x);
     solves += found.calls;
-    if (abs(responseOf(solveColumn(request, matched)).reflection) < abs(reflection)) geometry = matched;
+    if (ownLinks || abs(responseOf(solveColumn(request, matched)).reflection) < abs(reflection)) geometry = matched;
   }
   const sized = figures(request, amplitudes, geometry, solves);
   return { ...sized, notes: [...limitNotes(request, sized.geometry), ...goalNotes(request, sized)] };
@@ -75,28 +79,37 @@ export interface FoundColumn {
  * engines lie a good part of the column's bandwidth apart.
  *
  * Source: J. W. Bandler et al., "Electromagnetic optimization exploiting aggressive space mapping", IEEE Trans. Microw. Theory
- * Tech. 43(12), 1995 (one step, unit slope).
+ * Tech. 43(12), 1995 (unit slope).
  *
  * @param sized by `sizeColumn` for the same request
- * @param found of exactly that geometry, alone on the board
+ * @param found of exactly `of`, alone on the board
+ * @param of    the sized column, or what an earlier correction made of it: then this is the next one
  * @returns     dimensions with what the *network* says of them, which is now off by the difference of the engines
  * @throws RangeError where `found` has not one current for each patch
  */
-export function correctSizing(request: SizingRequest, sized: SizedColumn, found: FoundColumn): SizedColumn {
-  requireRequest(request);
+export function correctSizing(
+  given: SizingRequest,
+  sized: SizedColumn,
+  found: FoundColumn,
+  of: ColumnGeometry = sized.geometry,
+): SizedColumn {
+  requireRequest(given);
+  const request = withLinks(given);
   const amplitudes = taperAmplitudes(request.taper, request.patches);
   if (found.patchCurrents.length !== amplitudes.length)
     throw new RangeError(`correctSizing: ${found.patchCurrents.length} currents for ${amplitudes.length} patches`);
-  const network = responseOf(solveColumn(request, sized.geometry));
+  const network = responseOf(solveColumn(request, of));
   const moments = network.moments.map((m, i) => mul(m, div(found.patchCurrents[i], network.patchCurrents[i])));
   const aim: Aim = { reflection: found.reflection, excitation: excitationError(moments, amplitudes) };
-  const unknowns = sized.geometry.matching
-    ? withMatching(request, sized.geometry, network.reflection)
-    : { ...columnUnknowns(request, amplitudes), start: unknownsOf(request, sized.geometry) };
+  const unknownsFrom = (geometry: ColumnGeometry): ColumnUnknowns =>
+    geometry.matching
+      ? withMatching(request, geometry, network.reflection)
+      : { ...columnUnknowns(request, amplitudes), start: unknownsOf(request, geometry) };
+  const unknowns = unknownsFrom(sized.geometry);
   const { start, low, high } = unknowns;
   const { x, calls } = steer(request, amplitudes, unknowns, { tolerance: TOLERANCE, budget: BUDGET }, aim);
-  const mirrored = start.map((value, i) => Math.min(high[i], Math.max(low[i], 2 * value - x[i])));
-  const corrected = figures(request, amplitudes, unknowns.geometry(mirrored), calls);
+  const moved = unknownsFrom(of).start.map((value, i) => Math.min(high[i], Math.max(low[i], value + start[i] - x[i])));
+  const corrected = figures(request, amplitudes, unknowns.geometry(moved), calls);
   return { ...corrected, notes: limitNotes(request, corrected.geometry) };
 }
 

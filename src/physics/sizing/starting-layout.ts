@@ -91,7 +91,7 @@ export function widthFor(
 export function widthLimits(request: SizingRequest): readonly [number, number] {
   const { frequency, feedLineWidth, linkWidth = feedLineWidth, leastWidth, greatestWidth } = request;
   const half = SPEED_OF_LIGHT / (2 * frequency);
-  return [Math.max(leastWidth, 1.2 * feedLineWidth, 1.2 * linkWidth), Math.min(half, greatestWidth ?? half)];
+  return [Math.max(leastWidth, 1.2 * linkWidth), Math.min(half, greatestWidth ?? half)];
 }
 
 /** Amplitudes of a column of half as many patches, read off along those of the long one. */
