@@ -56,7 +56,7 @@ it('a released revision is built once; a second build leaves it as it is, one th
     ].join('\n'),
   );
   expect(readTree(join(folder, 'out'))).toEqual(before);
-}, 120_000);
+}, 300_000);
 
 it('the next revision begins with what changed since the one before, which stays as it is beside it', () => {
   const folder = temporaryFolder();
@@ -75,7 +75,7 @@ it('the next revision begins with what changed since the one before, which stays
   expect(tree['quillback-small/B/pdf/pack.pdf']).toMatch(/^%PDF-/);
   for (const text of ['Revision A', 'Revision B', '2026-11-02, released', '2026-11-02, for review'])
     expect(tree['index.html']).toContain(text);
-}, 120_000);
+}, 300_000);
 
 it('a previous revision that the output folder does not hold ends with 2 and says what to do', () => {
   const folder = temporaryFolder();

@@ -123,7 +123,11 @@ describe('study of a board', () => {
     expect(result.faces).toHaveLength(3);
   }, 60_000);
 
-  it.each([24e9, 60e9])('runs outside its range at %d Hz and flags it', (f) => {
+  // What counts is k0h, proportions and widths: scaled to 60 GHz this board is still among those compared.
+  it.each([
+    { f: 24e9, outside: true },
+    { f: 60e9, outside: false },
+  ])('runs at $f Hz and flags it where it lies outside its range', ({ f, outside }) => {
     const k = 77e9 / f;
     const scaled = fixtureBoard({ columns: 1, patches: 2, band: { low: f, high: f * 1.01 } });
     const columns = scaled.columns.map((c) => ({
@@ -132,7 +136,7 @@ describe('study of a board', () => {
       links: c.links.map((l) => ({ ...l, length: l.length * k })),
     }));
     const result = studyBoard({ ...scaled, columns }, analysis);
-    expect(result.flags.some((x) => x.severity === 'outside')).toBe(true);
+    expect(result.flags.some((x) => x.severity === 'outside')).toBe(outside);
     expect(result.nominal.points.every((p) => p.gain > 0 && Number.isFinite(p.gain))).toBe(true);
   });
 });

@@ -9,6 +9,7 @@ import { mirrored } from './board-mirror.js';
 import { boardOperator } from './board-operator.js';
 import { boardPower } from './board-power.js';
 import { type BoardSetup, mediumOf } from './board-setup.js';
+import { reciprocal, renormalisation } from './port-scattering.js';
 import { fitWaves, type LineWaves } from './port-waves.js';
 import type { FullWaveProblem, FullWaveSettings } from './problem.js';
 import { fullWaveFlags } from './range.js';
@@ -107,7 +108,8 @@ export function solveBoard(
     });
   const unit = (k: number, size: number): Complex[] => Array.from({ length: size }, (_, i) => complex(i === k ? 1 : 0));
   /** On the lines themselves, driven ports only: terminations send nothing back. */
-  const onLines = Array.from({ length: driven }, (_, k) => leavingFor(gapsFor(unit(k, n))).slice(0, driven));
+  const read = Array.from({ length: driven }, (_, k) => leavingFor(gapsFor(unit(k, n))).slice(0, driven));
+  const { mean: onLines, disagreement } = reciprocal(read);
   const references = lines
     .slice(0, driven)
     .map((l) => (problem.referenceImpedance === 'line' ? l.impedance : problem.referenceImpedance));
@@ -165,7 +167,7 @@ export function solveBoard(
     frequency,
     scattering: change.scattering,
     referenceImpedance: references,
-    flags: fullWaveFlags(problem, slab, stripThickness, frequency, residual),
+    flags: fullWaveFlags(problem, slab, stripThickness, frequency, residual, disagreement),
     effort: {
       unknowns: mesh.unknowns,
       iterations,
@@ -187,40 +189,6 @@ function drawnLine(
   const series = add(mul(gamma, characteristic), more);
   const wave = sqrt(mul(series, div(gamma, characteristic)));
   return { gamma: wave, characteristic: div(series, wave) };
-}
-
-/**
- * From waves on the lines (column k of `onLines`: leaving waves for a unit wave at k) to waves at real references.
- */
-function renormalisation(onLines: readonly (readonly Complex[])[], from: readonly number[], to: readonly number[]) {
-  const n = from.length;
-  // Waves a', b' at a reference r against a, b at z: a' = ((r + z) a + (z − r)·(…)): V = √z (a + b), I = (a − b)/√z.
-  const p = from.map((z, i) => (z + to[i]) / (2 * Math.sqrt(z * to[i])));
-  const q = from.map((z, i) => (z - to[i]) / (2 * Math.sqrt(z * to[i])));
-  const inside = complexMatrix(n);
-  for (let k = 0; k < n; k++)
-    for (let i = 0; i < n; i++) {
-      inside.re[i * n + k] = (i === k ? p[i] : 0) + q[i] * onLines[k][i].re;
-      inside.im[i * n + k] = q[i] * onLines[k][i].im;
-    }
-  const lu = factorise(inside);
-  const lineWaves = (incident: readonly Complex[]): Complex[] => {
-    const re = Float64Array.from(incident, (a) => a.re);
-    const im = Float64Array.from(incident, (a) => a.im);
-    solveInPlace(lu, re, im);
-    return incident.map((_, i) => complex(re[i], im[i]));
-  };
-  const leaving = (incident: readonly Complex[]): Complex[] => {
-    const a = lineWaves(incident);
-    return a.map((wave, i) => {
-      let b = complex(0);
-      for (let k = 0; k < n; k++) b = add(b, mul(onLines[k][i], a[k]));
-      return add(scale(wave, q[i]), scale(b, p[i]));
-    });
-  };
-  const columns = from.map((_, k) => leaving(from.map((__, i) => complex(i === k ? 1 : 0))));
-  const scattering = from.map((_, i) => columns.map((column) => column[i]));
-  return { lineWaves, leaving, scattering };
 }
 
 /** ∫ Jx dS over each patch, A m. */

@@ -11,6 +11,7 @@ import { boardPower } from './board-power.js';
 import { edgeTrims, NATURAL_EDGE } from './edge-trim.js';
 import { drawMesh } from './mesh.js';
 import type { MetalRectangle } from './outline.js';
+import type { FullWaveProblem } from './problem.js';
 import { reactionProduct } from './reaction-product.js';
 import { sheetField } from './sheet-field.js';
 import { losslessMedium } from './slab-medium.js';
@@ -22,6 +23,7 @@ export interface GapPatch {
   readonly length: number;
   readonly width: number;
   readonly slab: Slab;
+  readonly cover?: FullWaveProblem['cover'];
 }
 
 export interface GapPatchSolution {
@@ -56,7 +58,11 @@ export function gapPatch(
     column: 0,
     patch: 0,
   };
-  const mesh = drawMesh([metal], { dx, dy, x0: 0, y0: 0, beyond: 0 }, edgeTrims(slab, 0));
+  const mesh = drawMesh(
+    [metal],
+    { dx, dy, x0: 0, y0: 0, beyond: 0 },
+    edgeTrims({ ...slab, ...(patch.cover && { cover: patch.cover }) }, 0),
+  );
   const blocks = cutBlocks(mesh, 0);
   const [drawn] = mesh.rectangles;
   const squares = [drawnSquares(cells.across, dy, slab.height, [drawn.trims.y0, drawn.trims.y1])];
@@ -66,14 +72,14 @@ export function gapPatch(
     driven: 0,
     misfit: { length: 0, width: 0 },
     blocks,
-    reactions: prepareReactions({ dx, dy, nx: mesh.nx, ny: mesh.ny }, band, mediumWith(slab, complex(0))),
+    reactions: prepareReactions({ dx, dy, nx: mesh.nx, ny: mesh.ny }, band, mediumWith(patch, complex(0))),
     product: reactionProduct(mesh),
     squares,
   };
   const gap = Array.from({ length: cells.across }, (_, j) => mesh.xEdge[j * mesh.nx + cells.along / 2 - 1]);
   return (frequency, faces) => {
-    const medium = mediumWith(slab, faces.ground);
-    const sheets = [stripSheet(solvedStrip({}, slab, 0, width, frequency), faces, frequency, squares[0])];
+    const medium = mediumWith(patch, faces.ground);
+    const sheets = [stripSheet(solvedStrip(patch, slab, 0, width, frequency), faces, frequency, squares[0])];
     const operator = boardOperator(
       setup,
       medium,
@@ -108,9 +114,10 @@ export function gapPatch(
   };
 }
 
-const mediumWith = (slab: Slab, groundImpedance: Complex) => ({
+const mediumWith = ({ slab, cover }: GapPatch, groundImpedance: Complex) => ({
   permittivity: slab.permittivity,
   lossTangent: slab.lossTangent,
   height: slab.height,
   groundImpedance,
+  ...(cover && { cover }),
 });

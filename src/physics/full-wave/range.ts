@@ -10,6 +10,8 @@ const PERMITTIVITIES = [2.9, 3.7] as const;
 /** Strip thickness over slab height up to which edges alone stand for it. */
 const THICKEST = 0.4;
 const RESIDUAL = 1e-3;
+/** Of S12 and S21 as read on the feed lines. */
+const DISAGREEMENT = 0.01;
 
 export function fullWaveFlags(
   problem: FullWaveProblem,
@@ -17,6 +19,7 @@ export function fullWaveFlags(
   thickness: number,
   frequency: number,
   residual: number,
+  disagreement: number,
 ): ValidityFlag[] {
   const flags: ValidityFlag[] = [];
   const flag = (code: string, severity: ValidityFlag['severity'], text: string): void => {
@@ -46,6 +49,12 @@ export function fullWaveFlags(
       'full-wave.residual',
       'outside',
       `The equations are solved to a relative residual of ${residual.toPrecision(2)} only.`,
+    );
+  if (disagreement > DISAGREEMENT)
+    flag(
+      'full-wave.reciprocity',
+      'note',
+      `Coupling read one way and the other differs by ${disagreement.toPrecision(2)}, since feed lines take up what the feeds radiate; their mean is given.`,
     );
   if (problem.cover)
     flag(

@@ -36,12 +36,12 @@ export function withMatching(request: SizingRequest, geometry: ColumnGeometry, r
   };
 }
 
-/** Reflection in the feed line of a column that is matched to a line of the links' width. */
-export function reflectionOfLinks(request: SizingRequest): Complex {
+/** Reflection in the feed line of a column whose input resistance is this many times that of a line of the links' width. */
+export function reflectionInFeedLine(request: SizingRequest, ratio: number): Complex {
   const { frequency, feedLineWidth, linkWidth = feedLineWidth } = request;
   const line = lineOfWidth(request, frequency, feedLineWidth).impedance;
-  const links = lineOfWidth(request, frequency, linkWidth).impedance;
-  return complex((links - line) / (links + line), 0);
+  const resistance = ratio * lineOfWidth(request, frequency, linkWidth).impedance;
+  return complex((resistance - line) / (resistance + line), 0);
 }
 
 function startingSection(request: SizingRequest, s: Complex): { width: number; length: number } {

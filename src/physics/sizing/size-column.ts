@@ -5,7 +5,7 @@
  * amplitudes and, together, the input resistance; links set the phase from patch to patch, so that the beam stands at
  * broadside; the length of all patches sets the input reactance. Neighbouring columns, covers and grounds that end are not in it.
  */
-import { abs, type Complex, div, mul, sub } from '../../numerics/complex.js';
+import { abs, type Complex, complex, div, mul, sub } from '../../numerics/complex.js';
 import { leastSquares } from '../../numerics/least-squares.js';
 import type { ColumnGeometry } from '../column/index.js';
 import { cutShape } from '../pattern/index.js';
@@ -13,10 +13,10 @@ import { taperAmplitudes } from '../taper/index.js';
 import { excitationError, responseOf, solveColumn } from './column-response.js';
 import { type ColumnUnknowns, columnUnknowns, unknownsOf } from './column-unknowns.js';
 import { onGrid } from './grid.js';
-import { reflectionOfLinks, withMatching } from './matching-section.js';
+import { reflectionInFeedLine, withMatching } from './matching-section.js';
 import { requireRequest, type SizedColumn, type SizingRequest, withLinks } from './request.js';
 import { goalNotes, limitNotes } from './sizing-notes.js';
-import { firstGuesses, guessFrom, halved } from './starting-layout.js';
+import { firstGuesses, guessFrom, halved, resistanceRatio } from './starting-layout.js';
 
 /** Largest error of an amplitude over the largest, and of the reflection. */
 const TOLERANCE = 5e-3;
@@ -38,7 +38,8 @@ const POOR_MATCH = 10 ** (-15 / 20);
 /** What the network is steered to show; a perfect column where absent. */
 interface Aim {
   readonly reflection: Complex;
-  readonly excitation: readonly Complex[];
+  /** Of each patch over that asked for; 1 where left out. */
+  readonly excitation?: readonly Complex[];
 }
 
 /**
@@ -52,14 +53,18 @@ export function sizeColumn(given: SizingRequest): SizedColumn {
   const effort = { tolerance: TOLERANCE, budget: BUDGET };
   const ownLinks = request.linkWidth < request.feedLineWidth;
   const inner = ownLinks ? { ...request, feedLineWidth: request.linkWidth } : request;
+  const ratio = resistanceRatio(inner, amplitudes);
+  const transformed = ownLinks || ratio < 1;
   let { geometry, solves } = search(inner, amplitudes, effort);
-  const reflection = responseOf(solveColumn(inner, geometry)).reflection;
-  if (ownLinks || abs(reflection) > POOR_MATCH) {
-    const unknowns = withMatching(request, geometry, ownLinks ? reflectionOfLinks(request) : reflection);
+  const reflection = transformed
+    ? reflectionInFeedLine(request, ratio)
+    : responseOf(solveColumn(inner, geometry)).reflection;
+  if (transformed || abs(reflection) > POOR_MATCH) {
+    const unknowns = withMatching(request, geometry, reflection);
     const found = steer(request, amplitudes, unknowns, effort);
     const matched = unknowns.geometry(found.x);
     solves += found.calls;
-    if (ownLinks || abs(responseOf(solveColumn(request, matched)).reflection) < abs(reflection)) geometry = matched;
+    if (transformed || abs(responseOf(solveColumn(request, matched)).reflection) < abs(reflection)) geometry = matched;
   }
   const sized = figures(request, amplitudes, geometry, solves);
   return { ...sized, notes: [...limitNotes(request, sized.geometry), ...goalNotes(request, sized)] };
@@ -118,6 +123,8 @@ function search(
   amplitudes: readonly number[],
   effort: Effort,
 ): { geometry: ColumnGeometry; solves: number } {
+  const ratio = resistanceRatio(request, amplitudes);
+  const aim: Aim = { reflection: complex((ratio - 1) / (ratio + 1), 0) };
   let before = 0;
   let unknowns: ColumnUnknowns;
   if (amplitudes.length > SHORT) {
@@ -127,11 +134,11 @@ function search(
     before = shorter.solves;
   } else {
     const tried = firstGuesses(request, amplitudes).map((guess) => columnUnknowns(request, amplitudes, guess));
-    const sizes = tried.map((u) => squares(residuals(request, amplitudes, u.geometry(u.start))));
+    const sizes = tried.map((u) => squares(residuals(request, amplitudes, u.geometry(u.start), aim)));
     unknowns = tried[sizes.indexOf(Math.min(...sizes))];
     before = tried.length;
   }
-  const found = steer(request, amplitudes, unknowns, effort);
+  const found = steer(request, amplitudes, unknowns, effort, aim);
   return { geometry: unknowns.geometry(found.x), solves: before + found.calls };
 }
 
@@ -147,8 +154,8 @@ function residuals(
   const error = excitationError(moments, amplitudes);
   const r = new Float64Array(2 * error.length + 2);
   error.forEach((e, i) => {
-    r[2 * i] = amplitudes[i] * (e.re - (aim?.excitation[i].re ?? 1));
-    r[2 * i + 1] = amplitudes[i] * (e.im - (aim?.excitation[i].im ?? 0));
+    r[2 * i] = amplitudes[i] * (e.re - (aim?.excitation?.[i].re ?? 1));
+    r[2 * i + 1] = amplitudes[i] * (e.im - (aim?.excitation?.[i].im ?? 0));
   });
   const s = aim ? sub(reflection, aim.reflection) : reflection;
   r[2 * error.length] = s.re;

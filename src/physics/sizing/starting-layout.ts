@@ -40,12 +40,14 @@ export function guessFrom(
   const half = halfWave(request, links[0].width);
   const mean = (values: readonly number[]): number => values.reduce((a, b) => a + b, 0) / values.length;
   const squares = (values: readonly number[]): number => values.reduce((sum, a) => sum + a * a, 0);
+  const ratio = resistanceRatio(request, amplitudes);
+  const itsRatio = resistanceRatio(request, itsAmplitudes);
   const widest = itsAmplitudes.indexOf(Math.max(...itsAmplitudes));
   const moment =
     (effectiveWidth(request, patches[widest].width) - silenced(request, widest, patches.length)) /
     itsAmplitudes[widest];
   return {
-    unitMoment: moment * Math.sqrt(squares(itsAmplitudes) / squares(amplitudes)),
+    unitMoment: moment * Math.sqrt((squares(itsAmplitudes) * itsRatio) / (squares(amplitudes) * ratio)),
     lengthFactor: mean(patches.map((p) => p.length / resonantLength(request, p.width))),
     link: (place) => {
       const at = Math.min(Math.max(place * links.length - 0.5, 0), links.length - 1);
@@ -92,6 +94,19 @@ export function widthLimits(request: SizingRequest): readonly [number, number] {
   const { frequency, feedLineWidth, linkWidth = feedLineWidth, leastWidth, greatestWidth } = request;
   const half = SPEED_OF_LIGHT / (2 * frequency);
   return [Math.max(leastWidth, 1.2 * linkWidth), Math.min(half, greatestWidth ?? half)];
+}
+
+/** Part of a patch's natural width below which a match straight to the line asks too much of it. */
+const TOO_NARROW = 0.8;
+
+/**
+ * Input resistance to steer for over the line's impedance: 1 but where patches would come out so narrow that lines silence
+ * most of them. Then that of patches of their natural width c/2f √(2/(εr + 1)) (textbooks), for a section to transform.
+ */
+export function resistanceRatio(request: SizingRequest, amplitudes: readonly number[]): number {
+  const natural = (SPEED_OF_LIGHT / (2 * request.frequency)) * Math.sqrt(2 / (request.slab.permittivity + 1));
+  const direct = startingWidth(request, amplitudes);
+  return direct < TOO_NARROW * natural ? (direct / Math.min(natural, widthLimits(request)[1])) ** 2 : 1;
 }
 
 /** Amplitudes of a column of half as many patches, read off along those of the long one. */
