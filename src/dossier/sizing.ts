@@ -73,7 +73,7 @@ export function sizingBlocks(board: Board): readonly Block[] {
   return [
     prose(
       { strong: 'Sized before the study. ' },
-      `The columns were asked for, not drawn. Their dimensions were worked out ${by === 'network' ? 'by the network alone' : 'by the network and corrected once by the full wave'}, with nominal copper and at nominal temperature; every figure and verdict here is of the layout below.`,
+      `The columns were asked for, not drawn. Their dimensions were worked out ${by === 'network' ? 'by the network alone' : 'by the network and corrected by the full wave'}, with nominal copper and at nominal temperature; every figure and verdict here is of the layout below.`,
     ),
     facts(
       'sizing',
