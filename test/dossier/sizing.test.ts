@@ -52,7 +52,7 @@ describe('sized columns', () => {
       'Dolph–Chebyshev, sidelobes at −20 dB',
       '−18.13 dB',
       '−16.20 dB',
-      'corrected once by the full wave',
+      'corrected by the full wave',
       sized.notes[0],
     ])
       expect(text).toContain(words);
